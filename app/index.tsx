@@ -1,0 +1,5 @@
+import { Text } from 'react-native';
+
+export default function Index() {
+  return <Text>One line of text</Text>;
+}

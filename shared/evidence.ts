@@ -1,0 +1,60 @@
+import { z } from 'zod';
+import { limits } from './limits';
+import { bitNumber } from './layout/memory';
+import { address, label, slug } from './layout/primitives';
+
+export const laneName = z.strictObject({ bank: label, bit: bitNumber });
+
+const code = z.strictObject({
+  kind: z.literal('code'),
+  format: slug.describe('The id of one of the report formats of the layout.'),
+  text: z.string().min(1).max(limits.reportText).describe('The code as the machine showed it.'),
+});
+
+const lanes = z.strictObject({
+  kind: z.literal('lanes'),
+  failing: z.array(laneName).max(1024),
+  passed: z
+    .union([z.literal('rest'), z.literal('none'), z.array(laneName).max(20_000)])
+    .default('none')
+    .describe('The lanes that were tested and passed; "rest" means all others.'),
+});
+
+const mask = z.strictObject({
+  kind: z.literal('mask'),
+  bank: label,
+  mask: address.describe('The failing bits of the bank: bit n of the mask is data bit n. Widest 40 bits; use lanes for more.'),
+});
+
+const pass = z.strictObject({
+  kind: z.literal('pass'),
+  banks: z.array(label).max(limits.banks).optional().describe('The banks that passed. Left out: all.'),
+});
+
+/** One thing that the technician saw. */
+export const evidence = z.discriminatedUnion('kind', [code, lanes, mask, pass]);
+
+/** One thing that was done to the board between two runs. */
+export const change = z.discriminatedUnion('kind', [
+  z.strictObject({ kind: z.literal('swap'), sockets: z.tuple([label, label]) }),
+  z.strictObject({ kind: z.literal('replace'), socket: label, with: z.enum(['known-good', 'untested']).default('known-good') }),
+  z.strictObject({ kind: z.literal('reseat'), socket: label }),
+]);
+
+/** One pass of the test with the chips in known positions. */
+export const run = z.strictObject({
+  changes: z.array(change).max(limits.changesPerRun).default([]).describe('What was done just before this run.'),
+  evidence: z.array(evidence).max(limits.evidencePerRun).default([]),
+  complete: z
+    .boolean()
+    .default(true)
+    .describe('For machines that list every failure: the whole list is here, so what is not on it passed. False: there was more.'),
+});
+
+export const runs = z.array(run).max(limits.runs);
+
+export type LaneName = z.output<typeof laneName>;
+export type Evidence = z.output<typeof evidence>;
+export type Change = z.output<typeof change>;
+export type Run = z.output<typeof run>;
+export type RunInput = z.input<typeof run>;
