@@ -5,11 +5,14 @@ const probability = z.number().min(0).max(1);
 
 /** How a part is thought to have failed. */
 export const faultModes = [
-  'dead', // a chip that is bad for its own lanes
+  'dead', // a chip that is bad for all its own lanes
+  'dead-bit', // one data pin of a chip that has several
   'holds-line', // a chip that never lets go of its data line
   'holds-strobe', // a chip that holds the strobe of its bank
   'holds-address', // a chip that holds an address line
-  'open', // a position without contact
+  'open', // a position without contact, for all its lanes
+  'open-bit', // one data contact of a position that has several
+  'fitting', // a leg bent or a chip turned round when it was last handled
   'channel', // one channel of a shared part
   'whole', // the whole shared part
   'short', // two neighbouring data lines joined
@@ -28,9 +31,18 @@ export const suspectMode = z.strictObject({
 export const suspect = z.strictObject({
   rank: z.number().int().min(1),
   kind: z.enum(partKinds),
-  id: z.string().describe('Stable within one diagnosis: chip:U25, chip:U25#2 (fitted later), position:U25, shared:U30, short:main/2-3.'),
+  id: z
+    .string()
+    .describe(
+      'Stable within one diagnosis: chip:U25, chip:U25#2 (fitted later), position:U25, shared:U30, short:main/2-3.',
+    ),
   label: z.string().describe('In words, by where it is now: "chip now in U24 (came from U25)".'),
-  socket: z.string().nullable().describe('The socket where a chip is now, or of a position. Null for a chip that was taken out and for what has no socket.'),
+  socket: z
+    .string()
+    .nullable()
+    .describe(
+      'The socket where a chip is now, or of a position. Null for a chip that was taken out and for what has no socket.',
+    ),
   cameFrom: z.string().nullable().describe('The socket where a moved chip was at first.'),
   sharedPart: z.string().nullable(),
   channel: z.string().nullable().describe('Which channel of a shared part, in words, where one leads.'),
@@ -52,7 +64,9 @@ export const place = z.strictObject({
 export const laneState = z.strictObject({
   bank: z.string(),
   bit: z.number().int(),
-  state: z.enum(['failed', 'passed', 'untested', 'mixed']).describe('In the last run; mixed: it both failed and passed there.'),
+  state: z
+    .enum(['failed', 'passed', 'untested', 'mixed'])
+    .describe('In the last run; mixed: it both failed and passed there.'),
 });
 
 /** How one piece of evidence was read. */
@@ -71,7 +85,11 @@ export const readEvidence = z.strictObject({
 
 export const caution = z.strictObject({ id: z.string(), text: z.string() });
 
-export const pair = z.strictObject({ parts: z.array(z.string()).length(2), labels: z.array(z.string()).length(2), probability });
+export const pair = z.strictObject({
+  parts: z.array(z.string()).length(2),
+  labels: z.array(z.string()).length(2),
+  probability,
+});
 
 export const group = z.strictObject({
   members: z.array(z.strictObject({ id: z.string(), label: z.string(), share: probability })),
@@ -109,7 +127,11 @@ export const diagnosis = z.strictObject({
   evidence: z.array(readEvidence),
   nextChecks: z.array(nextCheck),
   cautions: z.array(caution),
-  exact: z.boolean().describe('The probabilities are those of the whole model. False: combinations of many faults at once were left out.'),
+  exact: z
+    .boolean()
+    .describe(
+      'The probabilities are those of the whole model. False: combinations of many faults at once were left out.',
+    ),
   leftOut: probability.describe('An upper bound of the share of probability that was left out.'),
 });
 

@@ -23,7 +23,9 @@ const lanes = z.strictObject({
 const mask = z.strictObject({
   kind: z.literal('mask'),
   bank: label,
-  mask: address.describe('The failing bits of the bank: bit n of the mask is data bit n. Widest 40 bits; use lanes for more.'),
+  mask: address.describe(
+    'The failing bits of the bank: bit n of the mask is data bit n. Widest 40 bits; use lanes for more.',
+  ),
 });
 
 const pass = z.strictObject({
@@ -37,7 +39,11 @@ export const evidence = z.discriminatedUnion('kind', [code, lanes, mask, pass]);
 /** One thing that was done to the board between two runs. */
 export const change = z.discriminatedUnion('kind', [
   z.strictObject({ kind: z.literal('swap'), sockets: z.tuple([label, label]) }),
-  z.strictObject({ kind: z.literal('replace'), socket: label, with: z.enum(['known-good', 'untested']).default('known-good') }),
+  z.strictObject({
+    kind: z.literal('replace'),
+    socket: label,
+    with: z.enum(['known-good', 'untested']).default('known-good'),
+  }),
   z.strictObject({ kind: z.literal('reseat'), socket: label }),
 ]);
 
@@ -48,7 +54,9 @@ export const run = z.strictObject({
   complete: z
     .boolean()
     .default(true)
-    .describe('For machines that list every failure: the whole list is here, so what is not on it passed. False: there was more.'),
+    .describe(
+      'For machines that list every failure: the whole list is here, so what is not on it passed. False: there was more.',
+    ),
 });
 
 export const runs = z.array(run).max(limits.runs);

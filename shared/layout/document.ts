@@ -7,7 +7,16 @@ import { reportFormat, workedExample } from './report-format';
 import { screenMap } from './screen-map';
 
 export const boardKinds = [
-  'computer', 'terminal', 'controller', 'instrument', 'recorder', 'display', 'musical instrument', 'transmitter', 'game cabinet', 'other',
+  'computer',
+  'terminal',
+  'controller',
+  'instrument',
+  'recorder',
+  'display',
+  'musical instrument',
+  'transmitter',
+  'game cabinet',
+  'other',
 ] as const;
 
 export const board = z.strictObject({
@@ -17,7 +26,11 @@ export const board = z.strictObject({
   kind: z.enum(boardKinds).default('other'),
   year: z.number().int().min(1950).max(2100).optional(),
   notes: words(2000).optional(),
-  marks: z.array(words(120)).max(16).default([]).describe('What to look for on the copper, the silk screen and stickers to know this revision.'),
+  marks: z
+    .array(words(120))
+    .max(16)
+    .default([])
+    .describe('What to look for on the copper, the silk screen and stickers to know this revision.'),
   view: z
     .strictObject({
       side: z.enum(['component', 'solder']).default('component'),
@@ -30,7 +43,9 @@ export const board = z.strictObject({
 
 export const source = z.strictObject({
   title: words(200),
-  kind: z.enum(['schematic', 'service manual', 'silk screen', 'continuity', 'pull test', 'repair', 'other']).default('other'),
+  kind: z
+    .enum(['schematic', 'service manual', 'silk screen', 'continuity', 'pull test', 'repair', 'other'])
+    .default('other'),
   author: words(100).optional(),
   year: z.number().int().min(1950).max(2100).optional(),
   page: words(40).optional(),
@@ -47,7 +62,11 @@ export const layoutDocument = z.strictObject({
   memory,
   addressMap: addressMap.prefault({}),
   multiplexing: multiplexing.optional(),
-  families: z.array(chipFamily).max(32).default([]).describe('Chip families of this board that the built-in list does not have.'),
+  families: z
+    .array(chipFamily)
+    .max(32)
+    .default([])
+    .describe('Chip families of this board that the built-in list does not have.'),
   sockets: z.array(socket).min(1).max(limits.sockets),
   sharedParts: z.array(sharedPart).max(limits.sharedParts).default([]),
   rails: z.array(rail).max(16).default([]),

@@ -4,8 +4,19 @@ import { bitNumber } from './memory';
 import { address, count, label, quarterTurn, range, sketchUnit, slug, words } from './primitives';
 
 export const pinFunctions = [
-  'supply', 'ground', 'address', 'data', 'data-in', 'data-out', 'row-strobe', 'column-strobe',
-  'write-enable', 'chip-select', 'output-enable', 'refresh', 'none',
+  'supply',
+  'ground',
+  'address',
+  'data',
+  'data-in',
+  'data-out',
+  'row-strobe',
+  'column-strobe',
+  'write-enable',
+  'chip-select',
+  'output-enable',
+  'refresh',
+  'none',
 ] as const;
 
 export const chipPin = z.strictObject({
@@ -22,12 +33,17 @@ export const chipFamily = z.strictObject({
   name: words(80),
   alsoCalled: z.array(label).max(24).default([]).describe('Generic type numbers that the trade uses for the family.'),
   kind: z.enum(['dynamic', 'static']),
-  words: count(2 ** 40).pipe(z.number().min(1)).describe('Words in one chip.'),
+  words: count(2 ** 40)
+    .pipe(z.number().min(1))
+    .describe('Words in one chip.'),
   width: z.number().int().min(1).max(72).describe('Data bits of one chip.'),
   pins: z.array(chipPin).max(64).default([]),
   rows: z.number().int().min(1).optional().describe('Rows that a refresh must reach.'),
   refreshMs: z.number().positive().optional(),
-  stackable: z.boolean().default(false).describe('A good chip may be laid on top for a test: its output floats while it is not selected.'),
+  stackable: z
+    .boolean()
+    .default(false)
+    .describe('A good chip may be laid on top for a test: its output floats while it is not selected.'),
   source: words(400).optional(),
 });
 
@@ -48,13 +64,26 @@ export const socket = z.strictObject({
   width: z.number().positive().max(1000).default(8),
   height: z.number().positive().max(1000).default(10),
   family: slug,
-  pin1: z.enum(['top-left', 'top-right', 'bottom-left', 'bottom-right']).default('top-left').describe('The corner of pin 1 before the turn.'),
+  pin1: z
+    .enum(['top-left', 'top-right', 'bottom-left', 'bottom-right'])
+    .default('top-left')
+    .describe('The corner of pin 1 before the turn.'),
   soldered: z.boolean().default(false).describe('The chip is soldered in, so moving it costs about ten times as much.'),
   holds: z.array(held).min(1).max(1024),
 });
 
 export const sharedPartRoles = [
-  'data-buffer', 'multiplexer', 'strobe-driver', 'write-driver', 'decoder', 'refresh-counter', 'parity', 'shift-register', 'supply', 'connector', 'other',
+  'data-buffer',
+  'multiplexer',
+  'strobe-driver',
+  'write-driver',
+  'decoder',
+  'refresh-counter',
+  'parity',
+  'shift-register',
+  'supply',
+  'connector',
+  'other',
 ] as const;
 
 export const sharedPart = z.strictObject({
@@ -71,7 +100,11 @@ export const sharedPart = z.strictObject({
       bits: z.array(bitNumber).max(limits.dataBits).optional(),
       banks: z.array(label).max(limits.banks).optional(),
       sockets: z.array(label).max(limits.sockets).optional(),
-      addressBits: z.array(z.number().int().min(0).max(39)).max(40).optional().describe('Bits of the word number that pass through it.'),
+      addressBits: z
+        .array(z.number().int().min(0).max(39))
+        .max(40)
+        .optional()
+        .describe('Bits of the word number that pass through it.'),
     })
     .describe('Each list left out means all of them. Sockets narrow it down to the lanes that those sockets hold.'),
   channels: z
@@ -84,7 +117,11 @@ export const rail = z.strictObject({
   name: label,
   volts: z.number().min(-50).max(50),
   tolerancePercent: z.number().min(0).max(100).default(10),
-  pins: z.array(z.number().int().min(1).max(64)).min(1).max(16).describe('The pins of every socket where it is measured.'),
+  pins: z
+    .array(z.number().int().min(1).max(64))
+    .min(1)
+    .max(16)
+    .describe('The pins of every socket where it is measured.'),
   sockets: z.array(label).max(limits.sockets).optional(),
   sharedPart: label.optional().describe('The shared part that makes or carries it.'),
 });

@@ -26,7 +26,14 @@ export const slug = z
  */
 export const count = (max: number) =>
   z
-    .union([z.number(), z.string().max(24).regex(/^(0[xX][0-9A-Fa-f]+|0[oO][0-7]+|[0-9]+)$/, 'Write 16384, "0x4000" or "0o40000".').transform(Number)])
+    .union([
+      z.number(),
+      z
+        .string()
+        .max(24)
+        .regex(/^(0[xX][0-9A-Fa-f]+|0[oO][0-7]+|[0-9]+)$/, 'Write 16384, "0x4000" or "0o40000".')
+        .transform(Number),
+    ])
     .pipe(z.number().int('Whole numbers only.').min(0, 'Not below 0.').max(max, `At most ${max}.`));
 
 /** A CPU address or a word number: below 2^40, so every sum of two stays exact. */

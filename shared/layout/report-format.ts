@@ -4,11 +4,29 @@ import { bitNumber } from './memory';
 import { address, label, slug, words } from './primitives';
 
 export const fieldMeanings = [
-  'bank', 'bit', 'mask', 'address', 'written', 'read', 'lane', 'socket', 'count', 'syndrome', 'ignored',
+  'bank',
+  'bit',
+  'mask',
+  'address',
+  'written',
+  'read',
+  'lane',
+  'socket',
+  'count',
+  'syndrome',
+  'ignored',
 ] as const;
 
 export const notations = [
-  'decimal', 'hexadecimal', 'octal', 'binary', 'letter', 'one-hot', 'flashes', 'names', 'words',
+  'decimal',
+  'hexadecimal',
+  'octal',
+  'binary',
+  'letter',
+  'one-hot',
+  'flashes',
+  'names',
+  'words',
 ] as const;
 
 /**
@@ -19,7 +37,11 @@ export const tableEntry = z.strictObject({
   text: words(40),
   value: address.optional().describe('The number that the field would have.'),
   bank: label.optional(),
-  bits: z.array(bitNumber).max(limits.dataBits).optional().describe('The bits that fail. Together with a field for the bank.'),
+  bits: z
+    .array(bitNumber)
+    .max(limits.dataBits)
+    .optional()
+    .describe('The bits that fail. Together with a field for the bank.'),
   means: words(120).optional().describe('Words for a text that names no lane, such as "memory on the expansion card".'),
 });
 
@@ -46,14 +68,25 @@ export const formatField = z.strictObject({
     .min(1)
     .max(limits.dataBits)
     .optional()
-    .describe('The bits of the word that the field counts or shows, the first or lowest first. Left out: all bits that are no check bits, or all bits where the mask is wide enough.'),
+    .describe(
+      'The bits of the word that the field counts or shows, the first or lowest first. Left out: all bits that are no check bits, or all bits where the mask is wide enough.',
+    ),
   digits: z
     .strictObject({ min: z.number().int().min(1).max(72), max: z.number().int().min(1).max(72) })
     .refine((d) => d.min <= d.max, { message: 'The most digits are not fewer than the least.', path: ['max'] })
     .optional()
     .describe('How many digits the machine prints. Left out: as many as the number needs, leading zeros allowed.'),
-  shift: z.number().int().min(0).max(39).default(0).describe('For an address: how many of its low bits the machine leaves out.'),
-  order: z.enum(['bank-first', 'bit-first']).default('bank-first').describe('For a lane number: bank-first counts all bits of one bank, then the next.'),
+  shift: z
+    .number()
+    .int()
+    .min(0)
+    .max(39)
+    .default(0)
+    .describe('For an address: how many of its low bits the machine leaves out.'),
+  order: z
+    .enum(['bank-first', 'bit-first'])
+    .default('bank-first')
+    .describe('For a lane number: bank-first counts all bits of one bank, then the next.'),
   table: z.array(tableEntry).max(limits.tableEntries).default([]),
 });
 
@@ -77,8 +110,15 @@ export const reportFormat = z.strictObject({
     ),
   testOrder: z
     .strictObject({
-      banks: z.array(label).max(limits.banks).optional().describe('The banks in the order of the test. Left out: as listed in the layout.'),
-      bits: z.enum(['together', 'ascending', 'descending']).default('together').describe('together: the word is tested as a whole.'),
+      banks: z
+        .array(label)
+        .max(limits.banks)
+        .optional()
+        .describe('The banks in the order of the test. Left out: as listed in the layout.'),
+      bits: z
+        .enum(['together', 'ascending', 'descending'])
+        .default('together')
+        .describe('together: the word is tested as a whole.'),
       outer: z.enum(['bank', 'bit']).default('bank').describe('bank: all of one bank before the next.'),
     })
     .optional(),

@@ -8,7 +8,11 @@ export const plane = z.strictObject({
   colour: z.enum(['red', 'green', 'blue', 'intensity', 'white', 'amber']).default('white'),
   base: address.optional().describe('The address of the first unit of this plane. Left out: that of the screen.'),
   register: z.strictObject({ name: label, value: address }).optional(),
-  bits: z.array(z.number().int().min(0).max(71)).min(1).max(72).describe('The bits of a word that make its pixels, the leftmost pixel first.'),
+  bits: z
+    .array(z.number().int().min(0).max(71))
+    .min(1)
+    .max(72)
+    .describe('The bits of a word that make its pixels, the leftmost pixel first.'),
 });
 
 export const screenMap = z.strictObject({
@@ -21,7 +25,12 @@ export const screenMap = z.strictObject({
     .array(address)
     .min(1)
     .max(14)
-    .describe('For each bit of the line number, lowest first, how far it moves the address. 32, 64, 128 ... is a picture stored line after line.'),
+    .describe(
+      'For each bit of the line number, lowest first, how far it moves the address. 32, 64, 128 ... is a picture stored line after line.',
+    ),
   planes: z.array(plane).min(1).max(8),
-  turn: z.union([z.literal(0), z.literal(1), z.literal(2), z.literal(3)]).default(0).describe('Quarter turns clockwise from the memory to the glass.'),
+  turn: z
+    .union([z.literal(0), z.literal(1), z.literal(2), z.literal(3)])
+    .default(0)
+    .describe('Quarter turns clockwise from the memory to the glass.'),
 });
