@@ -1,0 +1,28 @@
+import { StyleSheet } from 'react-native';
+import type { Theme } from './theme';
+import { useTheme } from './theme-provider';
+
+/**
+ * Makes a hook that gives a component its styles in the theme in force.
+ * Styles are built once a theme, not once a component: `const useStyles = makeStyles((t) => ({ box: { padding: t.space.lg } }))`.
+ */
+export function makeStyles<Styles extends StyleSheet.NamedStyles<Styles>>(
+  build: (theme: Theme) => Styles & StyleSheet.NamedStyles<Styles>,
+): () => Styles {
+  const built = new Map<Theme, Styles>();
+  return function useStyles() {
+    const theme = useTheme();
+    let styles = built.get(theme);
+    if (styles === undefined) {
+      styles = StyleSheet.create(build(theme));
+      built.set(theme, styles);
+    }
+    return styles;
+  };
+}
+
+/** `position: sticky`, which the web has and React Native's types do not name. */
+export const sticky = 'sticky' as 'relative';
+
+/** `position: fixed`, which the web has and React Native's types do not name. */
+export const fixed = 'fixed' as 'absolute';
