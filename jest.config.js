@@ -1,5 +1,6 @@
 // One project a layer, so that a run can be narrowed: npx jest --selectProjects lib
-const expoWeb = require('jest-expo/web/jest-preset');
+// Watch plugins are an option of the whole run, which a project may not have.
+const { watchPlugins: _, ...expoWeb } = require('jest-expo/web/jest-preset');
 
 const alias = { '^@/(.*)$': '<rootDir>/$1' };
 
@@ -33,7 +34,11 @@ module.exports = {
     node('lib'),
     node('shared'),
     node('published'),
-    { ...node('server'), globalSetup: undefined },
+    {
+      ...node('server'),
+      globalSetup: '<rootDir>/server/scripts/test-database.mjs',
+      globalTeardown: '<rootDir>/server/scripts/test-database-stop.mjs',
+    },
     node('browser'),
     {
       ...expoWeb,

@@ -35,7 +35,7 @@ export const sandvoeTg3: LayoutDocumentInput = {
   sharedParts: [
     {
       label: 'DC-2',
-      name: 'converter, −5 V and +12 V',
+      name: 'supply converter',
       role: 'supply',
       x: 3,
       y: 13,

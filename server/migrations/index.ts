@@ -1,0 +1,5 @@
+import { accounts } from './001-accounts';
+import type { Migration } from '@/server/models/migrate';
+
+/** Every step of the schema, in the order in which they are applied. */
+export const migrations: readonly Migration[] = [accounts];
