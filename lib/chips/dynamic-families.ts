@@ -16,7 +16,8 @@ export const dynamicFamilies: readonly ChipFamily[] = [
     rows: 64,
     refreshMs: 2,
     stackable: true,
-    source: 'From memory; compare with the data sheet of the chip at hand. The older kind has 22 pins and is another family.',
+    source:
+      'From memory; compare with the data sheet of the chip at hand. The older kind has 22 pins and is another family.',
   },
   {
     id: 'dynamic-16k-1-three-rail',
@@ -29,7 +30,8 @@ export const dynamicFamilies: readonly ChipFamily[] = [
     rows: 128,
     refreshMs: 2,
     stackable: true,
-    source: 'Pins: museo8bits.com wiki, "4116 DRAM"; c64-wiki.com, "RAM"; osiweb.org, 4116to4164.txt. Type numbers: from memory.',
+    source:
+      'Pins: museo8bits.com wiki, "4116 DRAM"; c64-wiki.com, "RAM"; osiweb.org, 4116to4164.txt. Type numbers: from memory.',
   },
   {
     id: 'dynamic-64k-1',

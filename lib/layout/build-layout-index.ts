@@ -1,5 +1,14 @@
 import type { ChipFamily, LayoutDocument } from '@/shared';
-import { type BankIndex, type BitIndex, type Lane, type SocketIndex, bankIndex, bitIndex, lane, socketIndex } from '../brand';
+import {
+  type BankIndex,
+  type BitIndex,
+  type Lane,
+  type SocketIndex,
+  bankIndex,
+  bitIndex,
+  lane,
+  socketIndex,
+} from '../brand';
 import { findFamily } from '../chips/families';
 import type { LayoutIndex } from './layout-index';
 import { bankWords, bitWords, lineLabel } from './words';
@@ -95,7 +104,10 @@ function familiesOf(document: LayoutDocument): (ChipFamily | null)[] {
 export function buildLayoutIndex(document: LayoutDocument): LayoutIndex {
   const { memory } = document;
   const bitCount = memory.dataBits;
-  const bankByName = firstByName(memory.banks.map((bank) => bank.id), bankIndex);
+  const bankByName = firstByName(
+    memory.banks.map((bank) => bank.id),
+    bankIndex,
+  );
   const laneExists = existingLanes(document);
   const laneCount = laneExists.length;
 
@@ -112,7 +124,10 @@ export function buildLayoutIndex(document: LayoutDocument): LayoutIndex {
     laneExists,
     isCheckBit: checkBitMarks(document),
     bankByName,
-    socketByLabel: firstByName<SocketIndex>(document.sockets.map((socket) => socket.label), socketIndex),
+    socketByLabel: firstByName<SocketIndex>(
+      document.sockets.map((socket) => socket.label),
+      socketIndex,
+    ),
     familyOfSocket: familiesOf(document),
     laneSocketStart,
     laneSockets: fill({ start: laneSocketStart, pairs: byLane }, new Uint16Array(byLane.length)),

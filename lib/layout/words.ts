@@ -63,7 +63,9 @@ export function numbersWords(numbers: readonly number[]): string {
     if (last !== undefined && n === last[1] + 1) last[1] = n;
     else runs.push([n, n]);
   }
-  const items = runs.flatMap(([from, to]) => (from === to ? [`${from}`] : to === from + 1 ? [`${from}`, `${to}`] : [`${from} to ${to}`]));
+  const items = runs.flatMap(([from, to]) =>
+    from === to ? [`${from}`] : to === from + 1 ? [`${from}`, `${to}`] : [`${from} to ${to}`],
+  );
   return listWords(items);
 }
 
