@@ -1,5 +1,5 @@
-import { Text } from 'react-native';
+import { Page } from '@/components/ui/page';
 
-export default function Index() {
-  return <Text>One line of text</Text>;
+export default function Route() {
+  return <Page title="What did the board report?">{null}</Page>;
 }

@@ -13,7 +13,8 @@ body { background: ${colours.paper}; color: ${colours.ink}; }
 [tabindex="-1"]:focus-visible { outline: none !important; }
 input:-webkit-autofill { -webkit-text-fill-color: ${colours.ink}; box-shadow: inset 0 0 0 999px ${colours.sheet}; }
 @media (prefers-reduced-motion: reduce) { *, *::before, *::after { animation: none !important; transition: none !important; scroll-behavior: auto !important; } }
-@media print { :root, body { background: none; } }
+@media print { :root, body { background: none; } [data-print="hide"] { display: none !important; } }
+@media not print { [data-print="only"] { display: none !important; } }
 `;
 }
 

@@ -12,7 +12,10 @@ const ThemeContext = createContext<ThemeState>({ theme: themes.day, choice: 'sys
 export function ThemeProvider({ children }: { children: ReactNode }) {
   const [choice, setChoice] = useState<ThemeChoice>(readThemeChoice);
   const systemIsDark = useMediaQuery('(prefers-color-scheme: dark)');
-  const theme = themes[choice === 'system' ? (systemIsDark ? 'night' : 'day') : choice];
+  const printing = useMediaQuery('print');
+  const onScreen = choice === 'system' ? (systemIsDark ? 'night' : 'day') : choice;
+  // Paper is white: light ink on it could not be read.
+  const theme = themes[printing ? 'day' : onScreen];
 
   const choose = useCallback((next: ThemeChoice) => {
     writeThemeChoice(next);

@@ -4,12 +4,15 @@ import { Pressable, type PressableStateCallbackType, type StyleProp, type ViewSt
 import { makeStyles } from '@/components/theme';
 import { Text } from './text';
 
-type ButtonKind = 'primary' | 'secondary' | 'quiet' | 'danger';
+type ButtonKind = 'primary' | 'secondary' | 'plain' | 'quiet' | 'danger';
 
 type Look = {
   /** What it does, in words; also its name for a screen reader. Never empty. */
   label: string;
-  /** primary: the one next thing. secondary: another way. quiet: small, stands back. danger: takes something away. */
+  /**
+   * primary: the one next thing. secondary: another way. plain: a tool among others.
+   * quiet: words alone. danger: takes something away.
+   */
   kind?: ButtonKind;
   /** A small drawing before the words; decoration only. */
   icon?: ReactNode;
@@ -19,6 +22,7 @@ type Look = {
   wide?: boolean;
   /** A longer name for a screen reader, beginning with the visible label. */
   'aria-label'?: string;
+  'aria-current'?: 'page';
   style?: StyleProp<ViewStyle>;
 };
 
@@ -58,7 +62,7 @@ export function Button({ onPress, disabled = false, busy = false, busyLabel, pre
     >
       {icon}
       {iconOnly ? null : (
-        <Text variant="label" align="center" tone={wordTone({ kind, pressed, faded: disabled || busy })}>
+        <Text variant={wordStyle(kind)} align="center" tone={wordTone({ kind, pressed, faded: disabled || busy })}>
           {words}
         </Text>
       )}
@@ -80,7 +84,7 @@ export function ButtonLink({ href, ...look }: Look & { href: Href }) {
       >
         {icon}
         {iconOnly ? null : (
-          <Text variant="label" align="center" tone={wordTone({ kind })}>
+          <Text variant={wordStyle(kind)} align="center" tone={wordTone({ kind })}>
             {label}
           </Text>
         )}
@@ -100,6 +104,10 @@ function frame(styles: ReturnType<typeof useStyles>, { kind, state, pressed, wid
     pressed && styles.primary,
     wide && styles.wide,
   ];
+}
+
+function wordStyle(kind: ButtonKind) {
+  return kind === 'plain' ? 'small' : 'label';
 }
 
 function wordTone({ kind, pressed, faded }: { kind: ButtonKind; pressed?: boolean; faded?: boolean }) {
@@ -126,6 +134,7 @@ const useStyles = makeStyles((t) => ({
   primary: { backgroundColor: t.colours.ink, borderColor: t.colours.ink },
   primaryHeld: { opacity: 0.88 },
   secondary: { backgroundColor: t.colours.sheet, borderColor: t.colours.ink },
+  plain: { backgroundColor: t.colours.sheet, borderColor: t.colours.ruleStrong, paddingHorizontal: t.space.md },
   quiet: { backgroundColor: 'transparent', borderColor: 'transparent', paddingHorizontal: t.space.sm },
   danger: { backgroundColor: t.colours.sheet, borderColor: t.colours.pencil },
   held: { backgroundColor: t.colours.faded },

@@ -25,6 +25,8 @@ declare module 'react-native' {
     'aria-sort'?: 'ascending' | 'descending' | 'none';
   }
   interface ViewProps {
+    /** Becomes data-* attributes; see the print rules of the theme: `dataSet={{ print: 'hide' }}`. */
+    dataSet?: Record<string, string>;
     onKeyDown?: (event: React.KeyboardEvent) => void;
   }
   interface PressableStateCallbackType {

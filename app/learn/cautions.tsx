@@ -1,0 +1,1 @@
+export { CautionsScreen as default } from '@/components/features/cautions/cautions-screen';
