@@ -1,3 +1,6 @@
+import { addScaled, solveByTable, tableSteps, type Component, type Node, type Solution } from './explained-table';
+import { mergeAlike } from './merge-alike';
+
 /**
  * Exact inference in a noisy-OR model with many hidden variables and a few observations that came out
  * positive (a lane that failed). The idea that negative observations factorise and only positive ones
@@ -6,8 +9,6 @@
  * rare faults meet, so the sum here runs over "which positives are already explained": every term is
  * positive and nothing cancels.
  */
-
-import { mergeAlike } from './merge-alike';
 
 /** One way for a variable to be there. Negative observations are already in its weight. */
 export interface HiddenState {
@@ -41,46 +42,15 @@ export interface NoisyOrAnswer {
   readonly leftOut: number;
 }
 
-/** A variable in the form that the sum works on: weights add up to 1 with `none`. */
-interface Node {
-  readonly none: number;
-  readonly share: Float64Array;
-  readonly touches: readonly (readonly number[])[];
-  readonly miss: Float64Array;
-  readonly widest: number;
-}
-
-interface Solution {
-  readonly z: number;
-  readonly dropped: number;
-  /** For each node asked about, the mass of each of its states. */
-  readonly mass: readonly Float64Array[];
-}
-
-/** Work that one answer may take before combinations of many faults are left out, in elementary steps. */
-const workLimit = 6_000_000;
-/** A group whose table of explained subsets costs less than this is summed in one go. */
-const tableLimit = 40_000;
 /** The share of probability that may be left out while the answer still counts as exact. */
-export const exactWithin = 1e-10;
-
-const emptyMass = (node: Node) => new Float64Array(node.share.length);
-
-function toNode(variable: HiddenVariable): { node: Node; total: number } {
-  let total = variable.absent;
-  for (const state of variable.states) total += state.weight;
-  const safe = total > 0 ? total : 1;
-  return {
-    total,
-    node: {
-      none: variable.absent / safe,
-      share: Float64Array.from(variable.states, (state) => state.weight / safe),
-      touches: variable.states.map((state) => state.touches),
-      miss: Float64Array.from(variable.states, (state) => state.miss),
-      widest: variable.states.reduce((most, state) => Math.max(most, state.touches.length), 0),
-    },
-  };
-}
+export const exactWithin = 1e-9;
+/** Work that one answer may take before combinations of many faults are left out, in elementary steps. */
+const workLimit = 600_000;
+/** A group whose table of explained subsets costs less than this is summed in one go. */
+const smallTable = 3_000;
+/** Up to this the table is still taken where the group only falls apart after many variables are fixed. */
+const largeTable = 150_000;
+const longCut = 3;
 
 /** Posterior of every state of every variable, given that all positives came out positive. Never throws. */
 export function inferNoisyOr(model: NoisyOrModel): NoisyOrAnswer {
@@ -93,305 +63,337 @@ function inferMerged(model: NoisyOrModel): NoisyOrAnswer {
   let logScale = 0;
   const nodes: Node[] = [];
   for (const variable of model.variables) {
-    const { node, total } = toNode(variable);
+    let total = variable.absent;
+    for (const state of variable.states) total += state.weight;
+    const safe = total > 0 ? total : 1;
     logScale += Math.log(total);
-    nodes.push(node);
+    nodes.push({
+      none: variable.absent / safe,
+      share: Float64Array.from(variable.states, (state) => state.weight / safe),
+      touches: variable.states.map((state) => state.touches),
+      miss: Float64Array.from(variable.states, (state) => state.miss),
+      widest: variable.states.reduce((most, state) => Math.max(most, state.touches.length), 0),
+    });
   }
   const marginals = nodes.map((node) => Float64Array.from(node.share));
-  const sum = new Sum(nodes);
-  const all = Array.from({ length: model.positives }, (_, o) => o);
   const quiet = new Float64Array(model.positives).fill(1 - model.leak);
-
+  const everything = {
+    nodes: nodes.map((_, v) => v).filter((v) => (nodes[v] as Node).widest > 0),
+    positives: Array.from({ length: model.positives }, (_, o) => o),
+  };
   let logZ = 0;
   let leftOut = 0;
-  for (const part of sum.split(
-    nodes.map((_, v) => v).filter((v) => (nodes[v] as Node).widest > 0),
-    all,
-  )) {
-    const solution = sum.solveWithin(part, quiet);
+  for (const part of splitComponent(nodes, everything)) {
+    const solution = solveWithin(nodes, part, quiet);
     if (!(solution.z > 0)) return { logEvidence: -Infinity, marginals, leftOut: 1 };
     logZ += Math.log(solution.z);
     leftOut += solution.dropped / solution.z;
     part.nodes.forEach((v, i) => {
-      const mass = solution.mass[i] as Float64Array;
-      marginals[v] = mass.map((m) => m / solution.z);
+      marginals[v] = (solution.mass[i] as Float64Array).map((m) => m / solution.z);
     });
   }
   return { logEvidence: logScale + logZ, marginals, leftOut: Math.min(1, leftOut) };
 }
 
-interface Component {
-  readonly nodes: readonly number[];
-  readonly positives: readonly number[];
+/** Sums one connected group, leaving out less and less until the answer is exact or the work is used up. */
+function solveWithin(nodes: readonly Node[], part: Component, quiet: Float64Array): Solution {
+  let best: Solution | null = null;
+  let spent = 0;
+  // A first coarse pass tells how large the sum is; the next ones leave out only what is small beside it.
+  for (let threshold = 1e-4, pass = 0; pass < 8; pass++) {
+    const sum = new BoundedSum(nodes, workLimit - spent);
+    const solution = sum.solve(part, quiet, threshold);
+    spent += sum.work;
+    if (!solution) break;
+    best = solution;
+    if (solution.dropped <= solution.z * exactWithin * 0.1 || spent * 3 > workLimit) break;
+    threshold = Math.min(threshold * 1e-2, (solution.z * solution.z * 1e-2) / Math.max(solution.dropped, 1e-300));
+  }
+  return best ?? oneAtATime(nodes, part, quiet);
 }
 
-/** The sum itself, over one model. */
-class Sum {
-  private work = 0;
-  private budget = workLimit;
-
-  constructor(private readonly nodes: readonly Node[]) {}
-
-  /** Sums one connected group, leaving out less and less until the answer is exact or the work is used up. */
-  solveWithin(part: Component, quiet: Float64Array): Solution {
-    this.budget = workLimit;
-    let best: Solution | null = null;
-    // A first coarse pass tells how large the sum is; the next ones leave out only what is small beside it.
-    for (let threshold = 1e-5, pass = 0; pass < 6; pass++) {
-      this.work = 0;
-      const solution: Solution | null = this.solve(part, quiet, threshold);
-      if (!solution) break;
-      best = solution;
-      if (solution.dropped <= solution.z * exactWithin) break;
-      this.budget -= this.work;
-      if (this.budget < this.work * 2) break;
-      threshold = Math.min(threshold * 1e-3, solution.z * exactWithin);
+/** Splits a group into the groups that share no variable. Variables that explain none of its positives come last. */
+function splitComponent(nodes: readonly Node[], whole: Component): Component[] {
+  const parent = new Map<number, number>(whole.positives.map((o) => [o, o]));
+  const root = (o: number): number => {
+    let at = o;
+    for (let up = parent.get(at) as number; up !== at; up = parent.get(at) as number) {
+      parent.set(at, parent.get(up) as number);
+      at = up;
     }
-    return best ?? this.fallBack(part, quiet);
-  }
-
-  /** Splits positives into groups that share no variable. */
-  split(nodeList: readonly number[], positives: readonly number[]): Component[] {
-    const group = new Map<number, number>();
-    for (const o of positives) group.set(o, o);
-    const root = (o: number): number => {
-      let at = o;
-      while (group.get(at) !== at) {
-        const up = group.get(group.get(at) as number) as number;
-        group.set(at, up);
-        at = up;
+    return at;
+  };
+  const home = whole.nodes.map((v) => {
+    let first = -1;
+    for (const touches of (nodes[v] as Node).touches) {
+      for (const o of touches) {
+        if (!parent.has(o)) continue;
+        if (first < 0) first = o;
+        else parent.set(root(o), root(first));
       }
-      return at;
-    };
-    const home: number[] = [];
-    for (const v of nodeList) {
-      let first = -1;
-      for (const touches of (this.nodes[v] as Node).touches) {
-        for (const o of touches) {
-          if (!group.has(o)) continue;
-          if (first < 0) first = o;
-          else group.set(root(o), root(first));
-        }
-      }
-      home.push(first);
     }
-    const parts = new Map<number, { nodes: number[]; positives: number[] }>();
-    for (const o of positives) {
-      const r = root(o);
-      const part = parts.get(r);
-      if (part) part.positives.push(o);
-      else parts.set(r, { nodes: [], positives: [o] });
-    }
-    const loose: number[] = [];
-    nodeList.forEach((v, i) => {
-      const first = home[i] as number;
-      if (first < 0) loose.push(v);
-      else parts.get(root(first))?.nodes.push(v);
-    });
-    const list: Component[] = [...parts.values()];
-    if (loose.length > 0) list.push({ nodes: loose, positives: [] });
-    return list;
+    return first;
+  });
+  const parts = new Map<number, { nodes: number[]; positives: number[] }>();
+  for (const o of whole.positives) {
+    const part = parts.get(root(o));
+    if (part) part.positives.push(o);
+    else parts.set(root(o), { nodes: [], positives: [o] });
   }
+  const loose: number[] = [];
+  whole.nodes.forEach((v, i) => {
+    const first = home[i] as number;
+    if (first < 0) loose.push(v);
+    else parts.get(root(first))?.nodes.push(v);
+  });
+  return loose.length > 0 ? [...parts.values(), { nodes: loose, positives: [] }] : [...parts.values()];
+}
 
-  private solve(part: Component, quiet: Float64Array, threshold: number): Solution | null {
+/** How a group too large for one table is taken apart: fix the variables of `cut`, and the rest falls into `parts`. */
+interface Plan {
+  readonly cut: readonly number[];
+  readonly parts: readonly Component[];
+  /** For each number of variables fixed so far, how much the group can be worth at the most. */
+  readonly ceilings: readonly Ceiling[];
+}
+
+/** Positives of which no two share an open variable, each with the chance that the open variables miss it. */
+interface Ceiling {
+  readonly positives: readonly number[];
+  readonly missed: readonly number[];
+}
+
+interface Remembered {
+  readonly solution: Solution;
+  readonly threshold: number;
+}
+
+/** The sum over the states of the variables that reach far, with everything else summed by table below them. */
+class BoundedSum {
+  work = 0;
+  private readonly plans = new Map<Component, Plan>();
+  private readonly memory = new Map<Component, Map<string, Remembered>>();
+
+  constructor(
+    private readonly nodes: readonly Node[],
+    private readonly budget: number,
+  ) {}
+
+  /** Null where the work would exceed the budget. */
+  solve(part: Component, quiet: Float64Array, threshold: number): Solution | null {
     if (part.positives.length === 0) {
       return { z: 1, dropped: 0, mass: part.nodes.map((v) => (this.nodes[v] as Node).share) };
     }
-    const steps = this.tableSteps(part);
-    if (part.positives.length === 1 || steps <= tableLimit) {
-      this.work += steps;
-      return this.work > this.budget ? null : this.table(part, quiet);
+    let known = this.memory.get(part);
+    if (!known) this.memory.set(part, (known = new Map()));
+    let key = '';
+    for (const o of part.positives) key += `${quiet[o]},`;
+    const before = known.get(key);
+    this.work += part.positives.length;
+    if (before && (before.solution.dropped === 0 || before.threshold <= threshold)) return before.solution;
+    const solution = this.solveAfresh(part, quiet, threshold);
+    if (solution) known.set(key, { solution, threshold });
+    return solution;
+  }
+
+  private solveAfresh(part: Component, quiet: Float64Array, threshold: number): Solution | null {
+    const steps = tableSteps(this.nodes, part);
+    const byTable =
+      part.positives.length === 1 ||
+      steps <= smallTable ||
+      (steps <= largeTable && this.planFor(part).cut.length >= longCut);
+    if (!byTable) return this.enumerate(this.planFor(part), part, { quiet, threshold });
+    this.work += steps;
+    return this.work > this.budget ? null : solveByTable(this.nodes, part, quiet);
+  }
+
+  private planFor(part: Component): Plan {
+    const known = this.plans.get(part);
+    if (known) return known;
+    const reach = (v: number) => (this.nodes[v] as Node).widest;
+    const order = [...part.nodes].sort((a, b) => reach(b) - reach(a));
+    const cut: number[] = [];
+    let parts: Component[] = [part];
+    const tooLarge = (each: Component) => each.positives.length > 1 && tableSteps(this.nodes, each) > smallTable;
+    // Further cuts are made inside the parts, each on its own: that adds up where one long cut would multiply.
+    while (parts.filter((each) => each.positives.length > 0).length < 2 && parts.some(tooLarge) && order.length > 0) {
+      cut.push(order.shift() as number);
+      this.work += part.nodes.length;
+      parts = splitComponent(this.nodes, { nodes: order, positives: part.positives });
     }
-    return this.branch(part, quiet, threshold);
+    const ceilings = ceilingsOf(this.nodes, part, cut);
+    this.work += part.nodes.length * (cut.length + 1);
+    const plan = { cut, parts, ceilings };
+    this.plans.set(part, plan);
+    return plan;
   }
 
-  private tableSteps(part: Component): number {
-    const n = part.positives.length;
-    if (n > 14) return Infinity;
-    let states = 1;
-    for (const v of part.nodes) for (const touches of (this.nodes[v] as Node).touches) states += 1 + touches.length;
-    return states * 2 ** n;
-  }
-
-  /** Fixes the variable that reaches furthest in each of its states, and sums what then falls apart. */
-  private branch(part: Component, quiet: Float64Array, threshold: number): Solution | null {
-    const chosen = this.furthest(part);
-    const node = this.nodes[chosen] as Node;
-    const rest = part.nodes.filter((v) => v !== chosen);
-    const mass = new Map<number, Float64Array>(part.nodes.map((v) => [v, emptyMass(this.nodes[v] as Node)]));
+  private enumerate(plan: Plan, part: Component, start: { quiet: Float64Array; threshold: number }): Solution | null {
+    const { nodes } = this;
+    const slot = new Map(part.nodes.map((v, i) => [v, i]));
+    const mass = part.nodes.map((v) => new Float64Array((nodes[v] as Node).share.length));
+    /** How much each solution of a part weighs in the end, so that its masses are added once. */
+    const used = new Map<Solution, { part: Component; factor: number }>();
+    const chosen: number[] = [];
     let z = 0;
     let dropped = 0;
-    for (let s = -1; s < node.share.length; s++) {
-      const share = s < 0 ? node.none : (node.share[s] as number);
-      if (share === 0) continue;
-      if (share < threshold) {
-        dropped += share;
-        continue;
-      }
-      const local = s < 0 ? quiet : this.quietened(quiet, node, s);
-      const parts = this.split(rest, part.positives);
-      const solutions: Solution[] = [];
+
+    const leaf = (quiet: Float64Array, share: number): boolean => {
       let product = share;
       let bound = share;
-      for (const child of parts) {
-        this.work += child.nodes.length + child.positives.length;
-        const solution = this.solve(child, local, threshold / share);
-        if (!solution || this.work > this.budget) return null;
+      const solutions: Solution[] = [];
+      for (const child of plan.parts) {
+        const solution = this.solve(child, quiet, start.threshold / share);
+        if (!solution || this.work > this.budget) return false;
         solutions.push(solution);
         product *= solution.z;
         bound *= Math.min(1, solution.z + solution.dropped);
       }
       z += product;
       dropped += Math.max(0, bound - product);
-      if (s >= 0) (mass.get(chosen) as Float64Array)[s] = product;
-      parts.forEach((child, c) => {
-        const own = solutions[c] as Solution;
-        if (!(own.z > 0)) return;
-        const factor = product / own.z;
-        child.nodes.forEach((v, i) => addScaled(mass.get(v) as Float64Array, own.mass[i] as Float64Array, factor));
+      chosen.forEach((s, i) => {
+        const own = mass[slot.get(plan.cut[i] as number) as number] as Float64Array;
+        if (s >= 0) own[s] = (own[s] as number) + product;
       });
-    }
-    return { z, dropped, mass: part.nodes.map((v) => mass.get(v) as Float64Array) };
-  }
+      solutions.forEach((solution, i) => {
+        if (!(solution.z > 0)) return;
+        const entry = used.get(solution);
+        if (entry) entry.factor += product / solution.z;
+        else used.set(solution, { part: plan.parts[i] as Component, factor: product / solution.z });
+      });
+      return true;
+    };
 
-  private quietened(quiet: Float64Array, node: Node, state: number): Float64Array {
-    const local = Float64Array.from(quiet);
-    for (const o of node.touches[state] as readonly number[])
-      local[o] = (local[o] as number) * (node.miss[state] as number);
-    return local;
-  }
-
-  private furthest(part: Component): number {
-    const inside = new Set(part.positives);
-    let chosen = part.nodes[0] as number;
-    let reach = -1;
-    for (const v of part.nodes) {
-      const node = this.nodes[v] as Node;
-      if (node.widest <= reach) continue;
-      const most = node.touches.reduce(
-        (m, t) =>
-          Math.max(
-            m,
-            t.reduce((k, o) => k + (inside.has(o) ? 1 : 0), 0),
-          ),
-        0,
-      );
-      if (most > reach) {
-        reach = most;
-        chosen = v;
+    const visit = (depth: number, quiet: Float64Array, share: number): boolean => {
+      const v = plan.cut[depth];
+      if (v === undefined) return leaf(quiet, share);
+      const node = nodes[v] as Node;
+      for (let s = -1; s < node.share.length; s++) {
+        const next = share * (s < 0 ? node.none : (node.share[s] as number));
+        if (next === 0) continue;
+        if (next < start.threshold) {
+          dropped += next;
+          continue;
+        }
+        const local = s < 0 ? quiet : quietened(quiet, node, s);
+        const atMost = next * ceiling(plan.ceilings[depth + 1], local);
+        this.work += 4;
+        if (atMost < start.threshold) {
+          dropped += atMost;
+          continue;
+        }
+        chosen[depth] = s;
+        if (!visit(depth + 1, local, next)) return false;
       }
+      return true;
+    };
+    if (!visit(0, start.quiet, 1)) return null;
+    for (const [solution, { part: child, factor }] of used) {
+      child.nodes.forEach((v, i) =>
+        addScaled(mass[slot.get(v) as number] as Float64Array, solution.mass[i] as Float64Array, factor),
+      );
     }
-    return chosen;
+    return { z, dropped, mass };
   }
+}
 
-  /**
-   * Sums a small group over the table of "which positives are explained so far", forwards and backwards,
-   * which gives every marginal in twice the work of the sum.
-   */
-  private table(part: Component, quiet: Float64Array): Solution {
-    const place = new Map(part.positives.map((o, i) => [o, i]));
-    const size = 2 ** part.positives.length;
-    const bits = part.nodes.map((v) =>
-      (this.nodes[v] as Node).touches.map((touches) => {
-        const list: number[] = [];
-        for (const o of touches) {
-          const i = place.get(o);
-          if (i !== undefined) list.push(1 << i);
-        }
-        return list;
-      }),
-    );
-    let f = new Float64Array(size);
-    f[0] = 1;
-    part.positives.forEach((o, i) => explain(f, 1 << i, quiet[o] as number));
-    const before: Float64Array[] = [];
-    part.nodes.forEach((v, i) => {
-      before.push(f);
-      const node = this.nodes[v] as Node;
-      const g = f.map((x) => x * node.none);
-      bits[i]?.forEach((own, s) => {
-        const share = node.share[s] as number;
-        if (share === 0) return;
-        const h = f.map((x) => x * share);
-        for (const bit of own) explain(h, bit, node.miss[s] as number);
-        addScaled(g, h, 1);
-      });
-      f = g;
+/**
+ * Ceilings by how many variables of the cut are fixed. Explaining some of the positives is never less likely
+ * than explaining all, and those that share no open variable are explained independently of each other.
+ */
+function ceilingsOf(nodes: readonly Node[], part: Component, cut: readonly number[]): Ceiling[] {
+  const n = part.positives.length;
+  const at = new Map(part.positives.map((o, i) => [o, i]));
+  const missed = new Float64Array(n).fill(1);
+  const openAt: number[][] = part.positives.map(() => []);
+  const open = (v: number): void => {
+    const node = nodes[v] as Node;
+    const shows = new Map<number, number>();
+    node.touches.forEach((touches, s) => {
+      const shown = (node.share[s] as number) * (1 - (node.miss[s] as number));
+      for (const o of touches) shows.set(o, (shows.get(o) ?? 0) + shown);
     });
-    const z = f[size - 1] as number;
-
-    let b = new Float64Array(size);
-    b[size - 1] = 1;
-    const mass: Float64Array[] = new Array(part.nodes.length);
-    for (let i = part.nodes.length - 1; i >= 0; i--) {
-      const node = this.nodes[part.nodes[i] as number] as Node;
-      const own = emptyMass(node);
-      const earlier = before[i] as Float64Array;
-      const c = b.map((x) => x * node.none);
-      bits[i]?.forEach((list, s) => {
-        const share = node.share[s] as number;
-        if (share === 0) return;
-        const h = b.map((x) => x * share);
-        for (const bit of list) explainBack(h, bit, node.miss[s] as number);
-        own[s] = dot(earlier, h);
-        addScaled(c, h, 1);
-      });
-      mass[i] = own;
-      b = c;
+    for (const [o, shown] of shows) {
+      const i = at.get(o);
+      if (i === undefined) continue;
+      missed[i] = (missed[i] as number) * (1 - shown);
+      (openAt[i] as number[]).push(v);
     }
-    return { z, dropped: 0, mass };
+  };
+  // A stride that visits all places and lands far from the last ones finds lanes of different banks and bits.
+  let stride = Math.max(1, Math.round(n * 0.618));
+  while (greatestDivisor(stride, n) !== 1) stride++;
+  const choose = (): Ceiling => {
+    const taken = new Set<number>();
+    const chosen: number[] = [];
+    for (let k = 0; k < n; k++) {
+      const i = (k * stride) % n;
+      const own = openAt[i] as number[];
+      if (own.some((v) => taken.has(v))) continue;
+      own.forEach((v) => taken.add(v));
+      chosen.push(i);
+    }
+    return {
+      positives: chosen.map((i) => part.positives[i] as number),
+      missed: chosen.map((i) => missed[i] as number),
+    };
+  };
+  const inCut = new Set(cut);
+  for (const v of part.nodes) if (!inCut.has(v)) open(v);
+  const ceilings: Ceiling[] = [choose()];
+  for (let d = cut.length - 1; d > 0; d--) {
+    open(cut[d] as number);
+    ceilings.push(choose());
   }
+  ceilings.push({ positives: [], missed: [] });
+  return ceilings.reverse();
+}
 
-  /** The answer when even the coarsest pass costs too much: one state of one variable at a time. */
-  private fallBack(part: Component, quiet: Float64Array): Solution {
-    const mass = part.nodes.map((v) => emptyMass(this.nodes[v] as Node));
-    const leakOnly = part.positives.reduce((p, o) => p * (1 - (quiet[o] as number)), 1);
-    let none = 1;
-    for (const v of part.nodes) none *= (this.nodes[v] as Node).none;
-    let z = none * leakOnly;
-    part.nodes.forEach((v, i) => {
-      const node = this.nodes[v] as Node;
-      node.touches.forEach((touches, s) => {
-        let likelihood = leakOnly;
-        for (const o of touches) {
-          const q = quiet[o] as number;
-          likelihood *= (1 - q * (node.miss[s] as number)) / (1 - q);
-        }
-        const m = node.none > 0 ? (none / node.none) * (node.share[s] as number) * likelihood : 0;
-        (mass[i] as Float64Array)[s] = m;
-        z += m;
-      });
+function ceiling(own: Ceiling | undefined, quiet: Float64Array): number {
+  let most = 1;
+  own?.positives.forEach((o, i) => (most *= 1 - (quiet[o] as number) * (own.missed[i] as number)));
+  return most;
+}
+
+function greatestDivisor(a: number, b: number): number {
+  return b === 0 ? a : greatestDivisor(b, a % b);
+}
+
+function quietened(quiet: Float64Array, node: Node, state: number): Float64Array {
+  const local = Float64Array.from(quiet);
+  for (const o of node.touches[state] as readonly number[]) {
+    local[o] = (local[o] as number) * (node.miss[state] as number);
+  }
+  return local;
+}
+
+/** The answer when even the coarsest pass costs too much: no more than one variable is there. */
+function oneAtATime(nodes: readonly Node[], part: Component, quiet: Float64Array): Solution {
+  const mass = part.nodes.map((v) => new Float64Array((nodes[v] as Node).share.length));
+  let logNone = 0;
+  for (const v of part.nodes) logNone += Math.log((nodes[v] as Node).none);
+  let logLeak = 0;
+  for (const o of part.positives) logLeak += Math.log(1 - (quiet[o] as number));
+  const terms: { slot: number; state: number; log: number }[] = [{ slot: -1, state: -1, log: logNone + logLeak }];
+  part.nodes.forEach((v, slot) => {
+    const node = nodes[v] as Node;
+    node.touches.forEach((touches, state) => {
+      let log = logNone - Math.log(node.none) + Math.log(node.share[state] as number) + logLeak;
+      for (const o of touches) {
+        const q = quiet[o] as number;
+        log += Math.log1p(-q * (node.miss[state] as number)) - Math.log1p(-q);
+      }
+      terms.push({ slot, state, log });
     });
-    return { z, dropped: z, mass };
+  });
+  // Scaled so that it neither overflows nor vanishes; only the ratios are used by the caller.
+  const most = terms.reduce((m, term) => Math.max(m, term.log), -Infinity);
+  const scale = Math.max(most, -700);
+  let z = 0;
+  for (const { slot, state, log } of terms) {
+    const m = Math.exp(log - most + scale);
+    z += m;
+    if (slot >= 0) (mass[slot] as Float64Array)[state] = m;
   }
-}
-
-/** Lets one cause explain one positive, with probability 1 - miss, in a table of explained subsets. */
-function explain(table: Float64Array, bit: number, miss: number): void {
-  const hit = 1 - miss;
-  for (let m = 0; m < table.length; m++) {
-    if (m & bit) continue;
-    const x = table[m] as number;
-    table[m | bit] = (table[m | bit] as number) + x * hit;
-    table[m] = x * miss;
-  }
-}
-
-/** The transpose of `explain`. */
-function explainBack(table: Float64Array, bit: number, miss: number): void {
-  const hit = 1 - miss;
-  for (let m = 0; m < table.length; m++) {
-    if (m & bit) continue;
-    table[m] = (table[m] as number) * miss + (table[m | bit] as number) * hit;
-  }
-}
-
-function addScaled(to: Float64Array, from: Float64Array, factor: number): void {
-  for (let i = 0; i < to.length; i++) to[i] = (to[i] as number) + (from[i] as number) * factor;
-}
-
-function dot(a: Float64Array, b: Float64Array): number {
-  let total = 0;
-  for (let i = 0; i < a.length; i++) total += (a[i] as number) * (b[i] as number);
-  return total;
+  return { z, dropped: z, mass };
 }

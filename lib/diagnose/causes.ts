@@ -1,0 +1,343 @@
+import type { FaultMode, PartKind } from '@/shared';
+import { bankIndex, type Lane, type SocketIndex } from '../brand';
+import type { LayoutIndex } from '../layout/layout-index';
+import { channelsOf, servedLanes } from '../layout/served-lanes';
+import { bankWords } from '../layout/words';
+import type { Priors } from './priors';
+import { Scopes, type Scope } from './scopes';
+import { labelOf, type Chip, type Timeline } from './timeline';
+
+/** One way for a cause to be there; the kinds of one cause exclude each other. */
+export interface Kind {
+  readonly intermittent: boolean;
+  /** Prior probability. */
+  readonly prior: number;
+  /** Probability that it does not show on a lane that it spoils and that is tested. */
+  readonly miss: number;
+  /** What it spoils in each run; null for nothing. */
+  readonly scopes: readonly (Scope | null)[];
+  /** The run before which handling cured or caused it; null where it lasts. */
+  readonly cured: number | null;
+}
+
+/** A part in a mode. */
+export interface Cause {
+  readonly mode: FaultMode;
+  /** Which channel, data pin or line it is, in words; null where the part has but one. */
+  readonly where: string | null;
+  readonly kinds: readonly Kind[];
+}
+
+/** What can be at fault. */
+export interface Part {
+  readonly kind: PartKind;
+  readonly id: string;
+  /** In words, by where it is now. */
+  readonly label: string;
+  /** The socket of a position, or where a chip is in the last run. */
+  readonly socket: SocketIndex | null;
+  readonly cameFrom: SocketIndex | null;
+  /** Label of the shared part in the layout. */
+  readonly sharedPart: string | null;
+  readonly causes: readonly Cause[];
+}
+
+interface Builder {
+  readonly index: LayoutIndex;
+  readonly timeline: Timeline;
+  readonly priors: Priors;
+  readonly scopes: Scopes;
+}
+
+/** Every cause of the model for this layout, as the chips lay in each run. */
+export function listParts(index: LayoutIndex, timeline: Timeline, priors: Priors): readonly Part[] {
+  const builder: Builder = { index, timeline, priors, scopes: new Scopes(index) };
+  return [
+    ...timeline.chips.map((chip) => chipPart(builder, chip)),
+    ...index.document.sockets.map((_, socket) => positionPart(builder, socket as SocketIndex)),
+    ...sharedParts(builder),
+    ...unlistedParts(builder),
+    ...shortParts(builder),
+  ];
+}
+
+/** The two kinds of a fault: always there, or coming and going. */
+function twoKinds({ priors, timeline }: Builder, prior: number, scopes: Scope | readonly (Scope | null)[]): Kind[] {
+  const perRun = 'lanes' in scopes ? new Array<Scope>(timeline.runCount).fill(scopes) : scopes;
+  const hard = {
+    intermittent: false,
+    prior: prior * (1 - priors.intermittentShare),
+    miss: 1 - priors.detectionHard,
+    scopes: perRun,
+    cured: null,
+  };
+  const comesAndGoes = {
+    intermittent: true,
+    prior: prior * priors.intermittentShare,
+    miss: 1 - priors.detectionIntermittent,
+    scopes: perRun,
+    cured: null,
+  };
+  return [hard, comesAndGoes];
+}
+
+/** The lanes behind each data pin of a socket's chip. */
+function pinScopes({ index, scopes }: Builder, socket: SocketIndex): Map<number, Scope> {
+  const lanes = new Map<number, Lane[]>();
+  for (const held of index.document.sockets[socket]?.holds ?? []) {
+    const bank = index.bankByName.get(held.bank);
+    if (bank === undefined || held.bit >= index.bitCount) continue;
+    const lane = index.laneOf(bank, held.bit as never);
+    if (!index.laneExists[lane]) continue;
+    const list = lanes.get(held.pin);
+    if (!list) lanes.set(held.pin, [lane]);
+    else if (!list.includes(lane)) list.push(lane);
+  }
+  return new Map([...lanes].map(([pin, list]) => [pin, scopes.of(list)]));
+}
+
+function chipPart(builder: Builder, chip: Chip): Part {
+  const { index, priors, scopes } = builder;
+  const share = chip.quality === 'known-good' ? priors.knownGoodShare : 1;
+  /** A scope in each run by where the chip is then. */
+  const moving = (at: (socket: SocketIndex) => Scope | null) => {
+    const made = new Map<SocketIndex, Scope | null>();
+    return chip.socketInRun.map((socket) => {
+      if (socket === null) return null;
+      if (!made.has(socket)) made.set(socket, at(socket));
+      return made.get(socket) ?? null;
+    });
+  };
+  const home = pinScopes(builder, chip.cameFrom);
+  const pins = [...home.keys()].sort((a, b) => a - b);
+  const several = pins.length > 1;
+  const causes: Cause[] = [];
+  const whole = priors.chipDead * share * (several ? 1 - priors.oneDataPinShare : 1);
+  causes.push({
+    mode: 'dead',
+    where: null,
+    kinds: twoKinds(
+      builder,
+      whole,
+      moving((at) => scopes.ofSocket(at)),
+    ),
+  });
+  for (const pin of several ? pins : []) {
+    const prior = (priors.chipDead * share * priors.oneDataPinShare) / pins.length;
+    const kinds = twoKinds(
+      builder,
+      prior,
+      moving((at) => pinScopes(builder, at).get(pin) ?? null),
+    );
+    causes.push({ mode: 'dead-bit', where: `data pin ${pin}`, kinds });
+  }
+  for (const pin of pins) {
+    const prior = (priors.chipHoldsLine * share) / pins.length;
+    const lines = (at: SocketIndex) => {
+      const own = pinScopes(builder, at).get(pin)?.lanes ?? [];
+      const numbers = [...new Set(own.map((lane) => index.lineOfLane[lane] as number))];
+      return scopes.of([...new Set(numbers.flatMap((line) => scopes.ofLine(line).lanes))]);
+    };
+    causes.push({
+      mode: 'holds-line',
+      where: several ? `data pin ${pin}` : null,
+      kinds: twoKinds(builder, prior, moving(lines)),
+    });
+  }
+  const strobe = twoKinds(
+    builder,
+    priors.chipHoldsStrobe * share,
+    moving((at) => scopes.ofBanksOf(at)),
+  );
+  const address = twoKinds(
+    builder,
+    priors.chipHoldsAddress * share,
+    moving(() => scopes.all()),
+  );
+  causes.push(
+    { mode: 'holds-strobe', where: null, kinds: strobe },
+    { mode: 'holds-address', where: null, kinds: address },
+  );
+  const now = chip.socketInRun.at(-1) ?? null;
+  return {
+    kind: 'chip',
+    id: chip.id,
+    label: chipWords(index, chip, now),
+    socket: now,
+    cameFrom: chip.cameFrom,
+    sharedPart: null,
+    causes,
+  };
+}
+
+function chipWords(index: LayoutIndex, chip: Chip, now: SocketIndex | null): string {
+  const from = labelOf(index, chip.cameFrom);
+  const fitted = chip.quality !== 'found';
+  if (now === null) return fitted ? `the chip that was fitted in ${from} for a time` : `the chip taken out of ${from}`;
+  if (now === chip.cameFrom) return fitted ? `the chip just fitted in ${from}` : `chip in ${from}`;
+  return `chip now in ${labelOf(index, now)} (came from ${from})`;
+}
+
+function positionPart(builder: Builder, socket: SocketIndex): Part {
+  const { index, priors, scopes } = builder;
+  const pins = pinScopes(builder, socket);
+  const several = pins.size > 1;
+  const whole = priors.positionOpen * (several ? 1 - priors.oneDataPinShare : 1);
+  const causes: Cause[] = [
+    {
+      mode: 'open',
+      where: null,
+      kinds: contactKinds(builder, socket, { prior: whole, scope: scopes.ofSocket(socket) }),
+    },
+  ];
+  if (several) {
+    const prior = (priors.positionOpen * priors.oneDataPinShare) / pins.size;
+    for (const [pin, scope] of pins) {
+      causes.push({
+        mode: 'open-bit',
+        where: `data pin ${pin}`,
+        kinds: contactKinds(builder, socket, { prior, scope }),
+      });
+    }
+  }
+  const fitting = fittingKinds(builder, socket);
+  if (fitting.length > 0) causes.push({ mode: 'fitting', where: null, kinds: fitting });
+  const label = labelOf(index, socket);
+  return {
+    kind: 'position',
+    id: `position:${label}`,
+    label: `socket ${label}, its contacts and traces`,
+    socket,
+    cameFrom: null,
+    sharedPart: null,
+    causes,
+  };
+}
+
+/**
+ * An open contact that was there from the start: each time the position is handled it is cured with some
+ * chance, so "it went away" does not clear the place.
+ */
+function contactKinds(
+  builder: Builder,
+  socket: SocketIndex,
+  { prior, scope }: { prior: number; scope: Scope },
+): Kind[] {
+  const { priors, timeline } = builder;
+  const kinds: Kind[] = [];
+  let lasting = 1;
+  for (const run of timeline.handled.get(socket) ?? []) {
+    if (run === 0) continue;
+    const until = Array.from({ length: timeline.runCount }, (_, r) => (r < run ? scope : null));
+    const cured = twoKinds(builder, prior * lasting * priors.handlingCures, until);
+    kinds.push(...cured.map((kind) => ({ ...kind, cured: run })));
+    lasting *= 1 - priors.handlingCures;
+  }
+  return [...twoKinds(builder, prior * lasting, scope), ...kinds];
+}
+
+/** A bent leg or a chip turned round, from the time the position was handled until it is handled again. */
+function fittingKinds(builder: Builder, socket: SocketIndex): Kind[] {
+  const { priors, scopes, timeline } = builder;
+  const scope = scopes.ofSocket(socket);
+  const handled = timeline.handled.get(socket) ?? [];
+  return handled.flatMap((run, i) => {
+    const next = handled[i + 1] ?? Infinity;
+    const between = Array.from({ length: timeline.runCount }, (_, r) => (r >= run && r < next ? scope : null));
+    return twoKinds(builder, priors.handlingHarms, between).map((kind) => ({
+      ...kind,
+      cured: next === Infinity ? null : next,
+    }));
+  });
+}
+
+function sharedParts(builder: Builder): Part[] {
+  const { index, priors, scopes } = builder;
+  return index.document.sharedParts.flatMap((part) => {
+    const served = servedLanes(index, part);
+    if (served.length === 0) return [];
+    const channels = channelsOf(index, part);
+    const causes: Cause[] = [
+      { mode: 'whole', where: null, kinds: twoKinds(builder, priors.sharedWhole, scopes.of(served)) },
+    ];
+    if (channels.length > 1) {
+      for (const channel of channels) {
+        causes.push({
+          mode: 'channel',
+          where: channel.name,
+          kinds: twoKinds(builder, priors.sharedChannel, scopes.of(channel.lanes)),
+        });
+      }
+    }
+    const words = part.name ?? part.role.replace('-', ' ');
+    return [
+      {
+        kind: 'shared-part' as const,
+        id: `shared:${part.label}`,
+        label: `${part.label} (${words})`,
+        socket: null,
+        cameFrom: null,
+        sharedPart: part.label,
+        causes,
+      },
+    ];
+  });
+}
+
+/**
+ * A layout seldom lists everything that serves more than one lane. What it leaves out is still there on the
+ * board: each data line, each bank and the board as a whole has something shared behind it, so that chips
+ * are not blamed for want of another name.
+ */
+function unlistedParts(builder: Builder): Part[] {
+  const { index, priors, scopes } = builder;
+  const listed = new Set<Scope>();
+  for (const part of index.document.sharedParts) {
+    const served = servedLanes(index, part);
+    if (served.length > 0) listed.add(scopes.of(served));
+    for (const channel of channelsOf(index, part)) listed.add(scopes.of(channel.lanes));
+  }
+  const parts: Part[] = [];
+  const add = (id: string, label: string, { scope, prior, mode }: { scope: Scope; prior: number; mode: FaultMode }) => {
+    if (listed.has(scope) || scope.lanes.length < 2) return;
+    listed.add(scope);
+    const causes = [{ mode, where: null, kinds: twoKinds(builder, prior, scope) }];
+    parts.push({ kind: 'shared-part', id, label, socket: null, cameFrom: null, sharedPart: null, causes });
+  };
+  const whole = { prior: priors.sharedWhole, mode: 'whole' as const };
+  add('unlisted:all', 'something that all banks share (supply, strobes, address lines)', {
+    scope: scopes.all(),
+    ...whole,
+  });
+  index.document.memory.banks.forEach((bank, b) => {
+    const label = `what selects ${bankWords(bank.id)} (strobe, decoder, its supply)`;
+    add(`unlisted:bank:${bank.id}`, label, { scope: scopes.ofBank(bankIndex(b)), ...whole });
+  });
+  for (let line = 0; line < index.lineCount; line++) {
+    const label = `data line ${index.lineName(line)} (trace, buffer)`;
+    add(`unlisted:line:${line}`, label, { scope: scopes.ofLine(line), prior: priors.sharedChannel, mode: 'channel' });
+  }
+  return parts;
+}
+
+function shortParts(builder: Builder): Part[] {
+  const { index, priors, scopes } = builder;
+  const parts: Part[] = [];
+  for (let line = 0; line + 1 < index.lineCount; line++) {
+    if ((line + 1) % index.bitCount === 0) continue;
+    const one = scopes.ofLine(line).lanes;
+    const other = scopes.ofLine(line + 1).lanes;
+    if (one.length === 0 || other.length === 0) continue;
+    const kinds = twoKinds(builder, priors.lineShort, scopes.of([...one, ...other]));
+    parts.push({
+      kind: 'short',
+      id: `short:${line}-${line + 1}`,
+      label: `short between data lines ${index.lineName(line)} and ${index.lineName(line + 1)}`,
+      socket: null,
+      cameFrom: null,
+      sharedPart: null,
+      causes: [{ mode: 'short', where: null, kinds }],
+    });
+  }
+  return parts;
+}
