@@ -25,7 +25,8 @@ const read = (req: Request, res: Response, config: Platform['config']): Who => {
   if (result.ok) return { ...result.claims, by: bearer === undefined ? 'cookie' : 'bearer' };
   if (bearer === undefined) {
     clearAccessCookie(res, config);
-    if (result.reason === 'expired') return { standing: 'guest' };
+    // Signing in or out and refreshing mend a bad cookie, so they must not be stopped by it.
+    if (result.reason === 'expired' || req.path.startsWith('/v1/sessions')) return { standing: 'guest' };
   }
   throw new AppError(result.reason === 'expired' ? 'token-expired' : 'token-invalid', {
     headers: { 'WWW-Authenticate': 'Bearer' },

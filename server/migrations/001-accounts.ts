@@ -94,6 +94,10 @@ const tables = [
     ends_at DATETIME(3) NOT NULL,
     KEY attempts_by_end (ends_at)
   ) ${table}`,
+  `CREATE TABLE seedings (
+    name VARCHAR(32) NOT NULL PRIMARY KEY,
+    created_at DATETIME(3) NOT NULL
+  ) ${table}`,
 ];
 
 /** People, their sessions, the links and the mail they are sent, their requests, and the trail of acts. */
@@ -104,6 +108,7 @@ export const accounts: Migration = {
   },
   down: async (query) => {
     const names = [
+      'seedings',
       'attempts',
       'audit_entries',
       'role_requests',

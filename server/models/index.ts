@@ -3,6 +3,7 @@ import { defineAuditEntry } from './audit-entry';
 import { defineEmailToken } from './email-token';
 import { defineOutboxMail } from './outbox-mail';
 import { defineRoleRequest } from './role-request';
+import { defineSeeding } from './seeding';
 import { defineRefreshToken, defineSession } from './session';
 import { defineUser } from './user';
 
@@ -26,6 +27,7 @@ export const openDatabase = ({ url, pool }: { url: string; pool: number }) => {
     OutboxMail: defineOutboxMail(sequelize),
     RefreshToken: defineRefreshToken(sequelize),
     RoleRequest: defineRoleRequest(sequelize),
+    Seeding: defineSeeding(sequelize),
     Session: defineSession(sequelize),
     User: defineUser(sequelize),
   };

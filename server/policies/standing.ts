@@ -17,3 +17,9 @@ export const requireStanding = async (context: Context, needs: Standing): Promis
   if (!includesRole(standing, needs)) throw new AppError('role-required', { message: `This needs the role ${needs}.` });
   return { ...who, standing };
 };
+
+/** Whoever asks, as a person with an account; throws `sign-in-required` for a guest. */
+export const requirePerson = ({ who }: Context): Exclude<Who, { standing: 'guest' }> => {
+  if (who.standing === 'guest') throw new AppError('sign-in-required');
+  return who;
+};

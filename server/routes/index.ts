@@ -1,6 +1,19 @@
+import { accountRoutes } from './accounts';
 import { healthRoutes } from './health';
+import { meRoutes } from './me';
+import { peopleRoutes } from './people';
 import { problemRoutes } from './problems';
+import { roleRequestRoutes } from './role-requests';
+import { sessionRoutes } from './sessions';
 import type { Route } from '@/server/http/route';
 
 /** Every route of the API, under /api/v1. */
-export const routes: readonly Route[] = [...healthRoutes, ...problemRoutes];
+export const routes: readonly Route[] = [
+  ...healthRoutes,
+  ...problemRoutes,
+  ...accountRoutes,
+  ...sessionRoutes,
+  ...meRoutes,
+  ...peopleRoutes,
+  ...roleRequestRoutes,
+];

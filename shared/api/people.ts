@@ -44,6 +44,10 @@ export const roleRequestRow = z.strictObject({
 });
 export type RoleRequestRow = z.output<typeof roleRequestRow>;
 
+/** Answer of GET /me/role-request. */
+export const ownRoleRequest = z.strictObject({ request: roleRequestRow.nullable() });
+export type OwnRoleRequest = z.output<typeof ownRoleRequest>;
+
 /** Query of GET /role-requests. */
 export const roleRequestQuery = pageQuery.extend({ state: z.enum(['open', 'granted', 'declined']).default('open') });
 export type RoleRequestQuery = z.output<typeof roleRequestQuery>;
