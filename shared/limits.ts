@@ -17,6 +17,8 @@ export const limits = {
   runs: 64,
   evidencePerRun: 512,
   changesPerRun: 64,
+  /** Characters of the address of a board. */
+  slug: 100,
   /** Bytes of a layout document sent to the server. */
   layoutBytes: 2_000_000,
   /** Bytes of any other JSON body. */
