@@ -12,3 +12,11 @@ export const standings: readonly Standing[] = ['guest', ...roles];
 /** True if somebody of standing `has` may do what `needs` may do. */
 export const includesRole = (has: Standing, needs: Standing): boolean =>
   standings.indexOf(has) >= standings.indexOf(needs);
+
+/** Roles that somebody of a role may give and take. There is one owner, made at set-up, so nobody gives that role. */
+export const rolesInPowerOf: Record<Role, readonly Role[]> = {
+  technician: [],
+  contributor: [],
+  moderator: ['technician', 'contributor'],
+  owner: ['technician', 'contributor', 'moderator'],
+};

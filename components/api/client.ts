@@ -1,3 +1,4 @@
+import type { OwnPerson, RefreshAnswer } from '@/shared/api/account';
 import type { ProblemDocument } from '@/shared/api/problem';
 import { ApiProblem, NetworkFailure } from './problem';
 
@@ -28,7 +29,7 @@ export async function request<Answer>(path: string, options: RequestOptions = {}
     return await send<Answer>(path, options);
   } catch (error) {
     if (!(error instanceof ApiProblem) || !renewable.has(error.code) || path.startsWith('/sessions')) throw error;
-    if (!(await renewSession())) throw error;
+    if ((await renewSession()) === null) throw error;
     return send<Answer>(path, options);
   }
 }
@@ -85,20 +86,29 @@ function secondsToWait(response: Response): number | null {
   return Number.isFinite(seconds) && seconds > 0 ? seconds : null;
 }
 
-let renewal: Promise<boolean> | null = null;
+let renewal: Promise<OwnPerson | null> | null = null;
 
 /**
- * Asks for a new access token; true if there is one now. All that ask at the same time share one request,
- * since a refresh token that is used twice ends its session.
+ * Asks for a new access token and gives the person it is for, null where the session has ended.
+ * All that ask at the same time share one request, and tabs wait for each other: a refresh token that is used
+ * twice ends its session. Throws NetworkFailure where the server cannot be reached.
  */
-function renewSession(): Promise<boolean> {
-  renewal ??= send('/sessions/refresh', { method: 'POST' })
-    .then(
-      () => true,
-      () => false,
-    )
+export function renewSession(): Promise<OwnPerson | null> {
+  renewal ??= alone(() => send<RefreshAnswer>('/sessions/refresh', { method: 'POST' }))
+    .then(({ person }) => person)
+    .catch((error: unknown) => {
+      if (error instanceof ApiProblem && error.status === 401) return null;
+      throw error;
+    })
     .finally(() => {
       renewal = null;
     });
   return renewal;
+}
+
+/** Runs work while no other tab of the application does the same. */
+async function alone<Result>(work: () => Promise<Result>): Promise<Result> {
+  // Browsers have locks on secure origins only.
+  if (typeof navigator === 'undefined' || !navigator.locks) return work();
+  return navigator.locks.request('rowcall.renew-session', work);
 }

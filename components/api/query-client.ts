@@ -1,9 +1,18 @@
-import { QueryClient } from '@tanstack/react-query';
+import { MutationCache, QueryCache, QueryClient } from '@tanstack/react-query';
 import { ApiProblem, NetworkFailure } from './problem';
+import { sessionQuery } from './session';
+
+/** Codes that mean: whoever was signed in here no longer is. */
+const ended = new Set(['sign-in-required', 'session-ended', 'token-invalid', 'token-expired']);
 
 /** Makes the store of what came from the server. */
 export function createQueryClient(): QueryClient {
-  return new QueryClient({
+  const noteEnd = (error: unknown) => {
+    if (error instanceof ApiProblem && ended.has(error.code)) client.setQueryData(sessionQuery.queryKey, null);
+  };
+  const client = new QueryClient({
+    queryCache: new QueryCache({ onError: noteEnd }),
+    mutationCache: new MutationCache({ onError: noteEnd }),
     defaultOptions: {
       queries: {
         // A layout can be answered from the device with no network, so a query always runs.
@@ -19,4 +28,5 @@ export function createQueryClient(): QueryClient {
       mutations: { networkMode: 'always', retry: false },
     },
   });
+  return client;
 }

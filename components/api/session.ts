@@ -1,10 +1,7 @@
 import { queryOptions, useQuery } from '@tanstack/react-query';
 import { includesRole, type Standing } from '@/shared/standing';
-import { request } from './client';
-import { ApiProblem } from './problem';
-
-/** The person who is signed in, as the server tells it. */
-export type Person = { id: string; email: string; role: Exclude<Standing, 'guest'> };
+import { renewSession, request } from './client';
+import type { MeAnswer, OwnPerson } from '@/shared/api/account';
 
 const hintKey = 'rowcall.signed-in';
 
@@ -30,15 +27,14 @@ export function rememberSignedIn(signedIn: boolean): void {
   }
 }
 
-async function loadPerson(signal: AbortSignal): Promise<Person | null> {
+async function loadPerson(signal: AbortSignal): Promise<OwnPerson | null> {
   if (!mayBeSignedIn()) return null;
-  try {
-    return await request<Person>('/account', { signal });
-  } catch (error) {
-    if (!(error instanceof ApiProblem) || error.status !== 401) throw error;
-    rememberSignedIn(false);
-    return null;
-  }
+  const { person } = await request<MeAnswer>('/me', { signal });
+  if (person) return person;
+  // An access token that has run out makes a guest; the session behind it may still be good.
+  const renewed = await renewSession();
+  if (!renewed) rememberSignedIn(false);
+  return renewed;
 }
 
 /** Query of the person who is signed in; null for a guest. */
@@ -52,7 +48,7 @@ export const sessionQuery = queryOptions({
 export type Session = {
   /** unknown: the first answer is on its way. unreachable: it did not come; treated as a guest until it does. */
   state: 'unknown' | 'guest' | 'signed-in' | 'unreachable';
-  person: Person | null;
+  person: OwnPerson | null;
   standing: Standing;
   signedIn: boolean;
   mayContribute: boolean;
