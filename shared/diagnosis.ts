@@ -99,8 +99,9 @@ export const group = z.strictObject({
 });
 
 export const nextCheck = z.strictObject({
-  action: z.string(),
-  label: z.string(),
+  action: z.enum(['swap', 'replace', 'pull-in-turn', 'probe', 'soak', 'read-again']),
+  label: z.string().describe('What to do, in one short sentence.'),
+  sockets: z.array(z.string()).describe('The sockets that it handles, in the order of the words; two for a swap.'),
   minutes: z.number().positive(),
   bits: z.number().min(0).describe('Expected information.'),
   outcomes: z.array(z.strictObject({ sees: z.string(), means: z.string(), probability })),
@@ -144,4 +145,5 @@ export type SuspectGroup = z.output<typeof group>;
 export type LaneState = z.output<typeof laneState>;
 export type ReadEvidence = z.output<typeof readEvidence>;
 export type Diagnosis = z.output<typeof diagnosis>;
+export type NextCheck = z.output<typeof nextCheck>;
 export type Caution = z.output<typeof caution>;
