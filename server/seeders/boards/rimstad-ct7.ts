@@ -160,7 +160,7 @@ export const rimstadCt7: LayoutDocumentInput = {
         { field: 'bit' },
       ],
       after: 'stops',
-      testOrder: { bits: 'together', outer: 'bank' },
+      testOrder: { bits: 'ascending', outer: 'bank' },
       notes:
         'F is the fixed store, M and N are the log pages. In the fixed store the lamps do not tell the upper chip from the lower.',
     },

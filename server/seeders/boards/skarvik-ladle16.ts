@@ -134,10 +134,19 @@ export const skarvikLadle16: LayoutDocumentInput = {
         { text: ' W ' },
         { field: 'written', notation: 'hexadecimal', digits: { min: 2, max: 2 } },
         { text: ' R ' },
-        { field: 'read', notation: 'hexadecimal', digits: { min: 2, max: 2 } },
+        {
+          field: 'read',
+          notation: 'hexadecimal',
+          digits: { min: 2, max: 2 },
+          table: [
+            { text: 'PL', bits: [16] },
+            { text: 'PH', bits: [17] },
+          ],
+        },
       ],
       after: 'lists-lanes',
-      notes: 'One line for each bad byte. The parity bits do not show here; the display code has them.',
+      notes:
+        'One line for each bad byte. PL or PH in place of the value means that the byte was right and the parity of the low or high byte was wrong.',
     },
     {
       id: 'display',
@@ -192,6 +201,7 @@ export const skarvikLadle16: LayoutDocumentInput = {
       source: 'Printer roll of line 2, 2020. Even address: high byte. Address bit 1 set: bank Y.',
     },
     { format: 'printer', text: '03F001 W 00 R 01', sockets: ['M118'], source: 'Pull test, M118 out.' },
+    { format: 'printer', text: '0200A3 W 3C R PL', sockets: ['M139'], source: 'Pull test, M139 out.' },
     { format: 'display', text: 'YB', sockets: ['M125'], source: 'Repair of line 4, 2021.' },
     { format: 'display', text: 'XH', sockets: ['M109'], source: 'Service binder, tab 9, worked case 2.' },
   ],
