@@ -131,12 +131,12 @@ function samples({ window, steps }: PreparedWindow, from: number, to: number): n
   const span = to - from + 1;
   const vary = [...new Set(window.interleave.flat())].filter((bit) => 2 ** bit < span);
   const combinations = Math.min(mostSamples, 2 ** vary.length);
-  const found: number[] = [to];
+  const found: number[] = [];
   for (let n = 0; n < combinations; n++) {
     const moved = vary.reduce((sum, bit, at) => sum + (Math.floor(n / 2 ** at) % 2) * 2 ** bit, from);
     for (let step = 0; step < steps; step++) if (moved + step <= to) found.push(moved + step);
   }
-  return found;
+  return [...found, to];
 }
 
 /**

@@ -1,0 +1,124 @@
+import type { FieldPart } from './format-context';
+import type { Piece, Tolerance } from './match-types';
+import { type TypedText, alike, alikeCharacter, fold, isSpace } from './typed-text';
+
+interface Lexicon {
+  readonly lengths: readonly number[];
+  readonly exact: ReadonlySet<string>;
+  readonly folded: ReadonlyMap<string, readonly string[]>;
+  readonly alike: ReadonlyMap<string, readonly string[]>;
+}
+
+const lexicons = new WeakMap<FieldPart, Lexicon>();
+
+function grouped(words: readonly string[], key: (word: string) => string): Map<string, string[]> {
+  const groups = new Map<string, string[]>();
+  for (const word of words) {
+    const group = groups.get(key(word));
+    if (group === undefined) groups.set(key(word), [word]);
+    else group.push(word);
+  }
+  return groups;
+}
+
+function lexiconOf(part: FieldPart): Lexicon {
+  const known = lexicons.get(part);
+  if (known !== undefined) return known;
+  const { words } = part;
+  const lengths = [...new Set(words.map((word) => word.length))].sort((a, b) => b - a);
+  const lexicon = { lengths, exact: new Set(words), folded: grouped(words, fold), alike: grouped(words, alike) };
+  lexicons.set(part, lexicon);
+  return lexicon;
+}
+
+/** "O read as 0" for each character that was taken otherwise. */
+function notesFor(given: string, taken: string): string[] {
+  if (given === taken) return [];
+  const compact = given.replace(/\s+/g, '');
+  const notes = compact === given ? [] : ['spaces left out'];
+  if (compact.length !== taken.length) return [...notes, `${compact} read as ${taken}`];
+  for (let at = 0; at < taken.length; at++)
+    if (compact[at] !== taken[at]) notes.push(`${compact[at]} read as ${taken[at]}`);
+  return notes;
+}
+
+function wordPieces(part: FieldPart, typed: TypedText, at: number, tolerance: Tolerance): Piece[] {
+  const { lengths, exact, folded, alike: alikes } = lexiconOf(part);
+  return lengths.flatMap((length) => {
+    const end = at + length;
+    if (end > typed.raw.length) return [];
+    const given = typed.raw.slice(at, end);
+    const found = exact.has(given)
+      ? [given]
+      : tolerance.alike
+        ? alikes.get(typed.alike.slice(at, end))
+        : tolerance.fold
+          ? folded.get(typed.folded.slice(at, end))
+          : undefined;
+    return (found ?? []).map((text) => ({
+      end,
+      text,
+      notes: notesFor(given, text),
+      entry: part.table.get(text) ?? null,
+    }));
+  });
+}
+
+/** The digit that a typed character stands for; null for none. A digit of the base is always itself. */
+function digitAt(alphabet: string, typed: TypedText, at: number, tolerance: Tolerance): string | null {
+  const raw = typed.raw[at]!;
+  if (alphabet.includes(raw)) return raw;
+  if (!tolerance.fold) return null;
+  const folded = typed.folded[at]!;
+  if (alphabet.includes(folded)) return folded;
+  if (!tolerance.alike) return null;
+  for (const digit of alphabet) if (alikeCharacter(digit) === typed.alike[at]) return digit;
+  return null;
+}
+
+interface Run {
+  readonly alphabet: string;
+  readonly min: number;
+  readonly max: number;
+}
+
+/** Every length of a run of digits or letters, the longest first. */
+function runPieces({ alphabet, min, max }: Run, typed: TypedText, at: number, tolerance: Tolerance): Piece[] {
+  const pieces: Piece[] = [];
+  let text = '';
+  for (let to = at; to < typed.raw.length && text.length < max; to++) {
+    if (tolerance.spaced && text !== '' && isSpace(typed.raw[to]!)) continue;
+    const digit = digitAt(alphabet, typed, to, tolerance);
+    if (digit === null) break;
+    text += digit;
+    if (text.length < min) continue;
+    pieces.push({ end: to + 1, text, notes: tolerance.fold ? notesFor(typed.raw.slice(at, to + 1), text) : [] });
+  }
+  return pieces.reverse();
+}
+
+const capitals = 'ABCDEFGHIJKLMNOPQRSTUVWXYZ';
+
+function freePieces(typed: TypedText, at: number): Piece[] {
+  let to = at;
+  while (to < typed.raw.length && !isSpace(typed.raw[to]!)) to++;
+  return to === at ? [] : [{ end: to, text: typed.raw.slice(at, to), notes: [] }];
+}
+
+/**
+ * The pieces of a typed text, at one place, that can be a field: the words of its table and its names first, which
+ * stand in place of the digits that look the same.
+ */
+export function matchField(part: FieldPart, typed: TypedText, at: number, tolerance: Tolerance): Piece[] {
+  const words = part.words.length === 0 ? [] : wordPieces(part, typed, at, tolerance);
+  const runs =
+    part.digits !== null
+      ? runPieces(part.digits, typed, at, tolerance)
+      : part.letters > 0
+        ? runPieces({ alphabet: capitals, min: 1, max: part.letters }, typed, at, tolerance)
+        : part.free
+          ? freePieces(typed, at)
+          : [];
+  if (words.length === 0) return runs;
+  return [...words, ...runs.filter((run) => !words.some((word) => word.text === run.text && word.end === run.end))];
+}

@@ -1,0 +1,224 @@
+import type { BankIndex, Lane } from '../brand';
+import {
+  addressWords,
+  bankWords,
+  bitName,
+  bitWords,
+  listWords,
+  numbersWords,
+  rangeWords,
+  sentenceCase,
+} from '../layout/words';
+import type { FieldPart, FormatContext } from './format-context';
+import { bitsOfField } from './format-context';
+import type { FieldMatch, Stop } from './match-types';
+import { digitsOfOnes, lettersOf } from './numerals';
+
+/** A sentence of its own: capital at the start, full stop at the end. */
+export function sentence(text: string): string {
+  return sentenceCase(/[.!?]$/.test(text) ? text : `${text}.`);
+}
+
+function fromTo(from: number, to: number): string {
+  return from === to ? String(from) : `${from} to ${to}`;
+}
+
+const countsInDigits = ({ field, radix }: FieldPart) => radix !== null && field.notation !== 'one-hot';
+
+/** "0 to 7", as the machine counts; "0 to 7 or 1 to 8" where it is not known from where. */
+function countedWords(part: FieldPart, total: number): string {
+  if (part.field.notation === 'letter') return total === 1 ? 'A' : `A to ${lettersOf(total - 1)}`;
+  if (!countsInDigits(part)) return fromTo(0, total - 1);
+  const radix = part.radix ?? 10;
+  const written = (first: number) => {
+    const [from, to] = [first, first + total - 1].map((n) => n.toString(radix).toUpperCase());
+    return from === to ? from! : `${from} to ${to}`;
+  };
+  return part.field.first === 'unknown' ? `${written(0)} or ${written(1)}` : written(part.field.first);
+}
+
+/** The banks as a field writes them: "A to D". */
+function bankRange({ index }: FormatContext, part: FieldPart): string {
+  if (part.field.notation === 'words') return tableWords(part);
+  if (part.field.notation === 'names') return rangeWords(index.document.memory.banks.map((bank) => bank.id));
+  return countedWords(part, index.bankCount);
+}
+
+function bitRange(context: FormatContext, part: FieldPart): string {
+  const { memory } = context.index.document;
+  if (part.field.notation === 'words') return tableWords(part);
+  const bits = bitsOfField(context, part, null);
+  if (part.field.notation === 'names') return rangeWords(context.allBits.map((bit) => bitName(memory, bit)));
+  const counted = countedWords(part, bits.length);
+  return part.table.size === 0 ? counted : `${counted}, or ${listWords([...part.table.keys()])}`;
+}
+
+function tableWords(part: FieldPart): string {
+  return listWords([...part.table.keys()]);
+}
+
+function digitRange(context: FormatContext, part: FieldPart): string {
+  const bits = bitsOfField(context, part, null);
+  const radix = part.radix ?? 2;
+  const top = digitsOfOnes(
+    bits.map((_, place) => place),
+    radix,
+  );
+  return `${'0'.repeat(radix === 10 ? 1 : top.length)} to ${top}`;
+}
+
+function addressRange({ index }: FormatContext, part: FieldPart): string {
+  const { windows } = index.document.addressMap;
+  const size = 2 ** part.field.shift;
+  const ends = [Math.min(...windows.map(({ range }) => range.from)), Math.max(...windows.map(({ range }) => range.to))];
+  const radix = part.radix ?? 16;
+  const [from, to] = ends.map((end) =>
+    Math.floor(end / size)
+      .toString(radix)
+      .toUpperCase(),
+  );
+  return `${from!.padStart(to!.length, '0')} to ${to}`;
+}
+
+/** What a field takes, without its noun: "A to D", "0 to 7". Empty where nothing short can be said. */
+export function rangeOfField(context: FormatContext, part: FieldPart): string {
+  if (part.field.notation === 'words') return tableWords(part);
+  switch (part.field.field) {
+    case 'bank':
+      return bankRange(context, part);
+    case 'bit':
+      return bitRange(context, part);
+    case 'lane':
+      return countedWords(part, bitsOfField(context, part, null).length * context.index.bankCount);
+    case 'mask':
+    case 'written':
+    case 'read':
+      return digitRange(context, part);
+    case 'address':
+      return context.map.windows.length === 0 ? '' : addressRange(context, part);
+    case 'socket': {
+      const labels = context.index.document.sockets.map((socket) => socket.label);
+      return labels.length > 2 ? `such as ${labels[0]}` : labels.join(' or ');
+    }
+    case 'count':
+    case 'syndrome':
+    case 'ignored':
+      return '';
+  }
+}
+
+/** The noun of a field. */
+export function nounOfField(part: FieldPart): string {
+  const nouns: Record<FieldPart['field']['field'], string> = {
+    bank: 'bank',
+    bit: 'bit',
+    mask: 'mask',
+    address: 'address',
+    written: 'value written',
+    read: 'value read',
+    lane: 'number',
+    socket: 'socket',
+    count: 'count',
+    syndrome: 'syndrome',
+    ignored: part.radix === null ? 'word' : 'number',
+  };
+  return nouns[part.field.field];
+}
+
+const article = (noun: string) => `${/^[aeiou]/.test(noun) ? 'an' : 'a'} ${noun}`;
+
+function partWords(context: FormatContext, at: number): string {
+  const part = context.parts[at]!;
+  if (part.kind === 'text') return part.text.trim() === '' ? 'a space' : `"${part.text.trim()}"`;
+  const range = rangeOfField(context, part);
+  return range === '' ? article(nounOfField(part)) : `${article(nounOfField(part))}, ${range}`;
+}
+
+function partBefore(context: FormatContext, at: number): string | null {
+  const part = context.parts[at - 1];
+  if (part === undefined) return null;
+  return part.kind === 'text'
+    ? part.text.trim() === ''
+      ? partBefore(context, at - 1)
+      : `"${part.text.trim()}"`
+    : `the ${nounOfField(part)}`;
+}
+
+/** Why a text is no code: "After the bank comes a bit, 0 to 7." */
+export function stopReason(context: FormatContext, stop: Stop, text: string): string {
+  const before = partBefore(context, stop.part);
+  if (stop.part >= context.parts.length)
+    return `Nothing comes after ${before}: "${text.slice(stop.at, stop.at + 12)}" is too much.`;
+  const next = partWords(context, stop.part);
+  return before === null ? `The code begins with ${next}.` : `After ${before} comes ${next}.`;
+}
+
+/** "Bank E: this board has banks A to D." */
+export function bankReason(context: FormatContext, match: Pick<FieldMatch, 'part' | 'text'>): string {
+  return `Bank ${match.text}: this board has ${context.index.bankCount === 1 ? 'only bank' : 'banks'} ${bankRange(context, match.part)}.`;
+}
+
+/** "Bit 9: this board has bits 0 to 7.", or the like for a lane's number. */
+export function numberReason(context: FormatContext, match: Pick<FieldMatch, 'part' | 'text'>, total: number): string {
+  const range = countedWords(match.part, total);
+  if (match.part.field.field !== 'bit') return `Number ${match.text}: on this board the numbers are ${range}.`;
+  const others = match.part.table.size === 0 ? '' : `, and ${listWords([...match.part.table.keys()])}`;
+  return `Bit ${match.text}: this board has bits ${range}${others}.`;
+}
+
+/** "Mask 1FF: it shows 8 bits, so 00 to FF is possible." */
+export function maskReason({ part, text }: Pick<FieldMatch, 'part' | 'text'>, total: number): string {
+  const radix = part.radix ?? 2;
+  const top = digitsOfOnes(
+    Array.from({ length: total }, (_, place) => place),
+    radix,
+  );
+  const noun = part.field.field === 'mask' ? 'Mask' : 'Value';
+  return `${noun} ${text}: it shows ${total} ${total === 1 ? 'bit' : 'bits'}, so ${'0'.repeat(radix === 10 ? 1 : top.length)} to ${top} is possible.`;
+}
+
+/** "Bit 5: bank B has bits 0 to 3." */
+export function missingBitReason({ index, allBits }: FormatContext, bank: BankIndex, bit: number): string {
+  const { memory } = index.document;
+  const has = allBits.filter((n) => index.laneExists[bank * index.bitCount + n] === 1);
+  const range = memory.bitNames === undefined ? numbersWords(has) : listWords(has.map((n) => bitName(memory, n)));
+  return sentenceCase(`${bitWords(memory, bit)}: ${bankWords(memory.banks[bank]!.id)} has bits ${range}.`);
+}
+
+/** "Number 12: bank B has no bit 4." */
+export function laneReason({ index }: FormatContext, lane: Lane, text: string): string {
+  const { memory } = index.document;
+  return `Number ${text}: ${bankWords(memory.banks[index.bankOf(lane)]!.id)} has no ${bitWords(memory, index.bitOf(lane))}.`;
+}
+
+/** "2C00: bank B does not answer there." */
+export function noSuchBankHere({ index }: FormatContext, bank: BankIndex, text: string): string {
+  return `${text}: ${bankWords(index.document.memory.banks[bank]!.id)} does not answer there.`;
+}
+
+/** What an address outside every window belongs to, or which window is nearest. */
+export function addressReason(
+  { index }: FormatContext,
+  text: string,
+  address: number,
+): { readonly reason: string; readonly known: boolean } {
+  const { addressMap } = index.document;
+  const elsewhere = addressMap.elsewhere.find(({ range }) => address >= range.from && address <= range.to);
+  if (elsewhere !== undefined) return { reason: sentence(`${text}: ${elsewhere.means}`), known: true };
+  const away = ({ range }: (typeof addressMap.windows)[number]) =>
+    address < range.from ? range.from - address : Math.max(0, address - range.to);
+  const nearest = [...addressMap.windows].sort((a, b) => away(a) - away(b))[0];
+  if (nearest === undefined) return { reason: `${text}: this layout has no address windows.`, known: false };
+  const [from, to] = [nearest.range.from, nearest.range.to].map((end) => addressWords(addressMap, end));
+  const where = `The nearest is ${from} to ${to}, ${bankListWords(nearest.banks)}.`;
+  return { reason: `${text} is outside this board's memory. ${where}`, known: false };
+}
+
+function bankListWords(ids: readonly string[]): string {
+  return ids.length === 1 ? bankWords(ids[0]!) : `banks ${rangeWords(ids)}`;
+}
+
+/** Why a one-hot number is none. */
+export function oneHotReason(text: string): string {
+  return `${text}: in this code just one of the digits is 1.`;
+}
