@@ -1,0 +1,141 @@
+import type { Diagnosis, LaneState, Run } from '@/shared';
+import type { Lane } from '../brand';
+import type { LayoutIndex } from '../layout/layout-index';
+import { cautionsFor } from './cautions';
+import { listParts } from './causes';
+import { compiledFormats } from './compiled-formats';
+import { weighAll } from './mixture';
+import { nextChecks } from './next-check';
+import { exactWithin } from './noisy-or';
+import { observe, type RunObservation } from './observations';
+import type { Posterior } from './posterior';
+import { priors as defaultPriors, type Priors } from './priors';
+import { tell } from './sentences';
+import { listPlaces, listSuspects, type Findings } from './suspects';
+import { followChips } from './timeline';
+import { decide, laneNames, type Weighed } from './verdict';
+
+/** A failing lane of which the model's causes explain less than this is told as unexplained. */
+const explainedFrom = 0.5;
+/** Two parts are told as a pair where both are needed with at least this probability. */
+const pairFrom = 0.3;
+
+/**
+ * The whole answer: which place, which part, how sure, why, what was not tested, and what to check next.
+ * Total on every input that the schema allows; evidence that cannot be read is told with its reason.
+ * The probabilities are those of the noisy-OR model of `priors`; `exact` says whether all combinations of
+ * causes were summed.
+ */
+export function diagnose(index: LayoutIndex, runs: readonly Run[], priors: Priors = defaultPriors): Diagnosis {
+  const timeline = followChips(
+    index,
+    runs.map((run) => run.changes),
+  );
+  const observations = observe(index, runs, compiledFormats(index));
+  const parts = listParts(index, timeline, priors);
+  const { posterior, best } = weighAll(parts, observations.interpretations, priors);
+  const findings: Findings = {
+    index,
+    parts,
+    posterior,
+    runs: best.runs,
+    said: observations.evidence.flatMap((piece, i) =>
+      piece.ok ? [{ run: piece.run, text: piece.text, failing: observations.failingOf[i] ?? [] }] : [],
+    ),
+  };
+  const lastRun = findLast(best.runs, (run) => run.failing.size + run.passed.size > 0);
+  const anyFailed = best.runs.some((run) => run.failing.size > 0);
+  const weighed: Weighed = {
+    findings,
+    suspects: anyFailed ? listSuspects(findings) : [],
+    places: anyFailed ? listPlaces(findings) : [],
+    lastRun,
+    unexplained: anyFailed ? unexplainedLanes(findings) : [],
+  };
+  const verdict = decide(weighed);
+  const last = lastRun === null ? undefined : best.runs[lastRun];
+  const untested = last
+    ? ([...index.lanes] as Lane[]).filter((lane) => !last.failing.has(lane) && !last.passed.has(lane))
+    : [];
+  const problems = timeline.problems.map(
+    (problem) => `Run ${problem.run + 1}: ${problem.reason} The change was left out.`,
+  );
+  const leftOut = anyFailed ? posterior.leftOut : 0;
+  return {
+    outcome: verdict.outcome,
+    headline: verdict.headline,
+    sure: verdict.sure,
+    probability: verdict.probability,
+    sentences: tell({ weighed, verdict, observations, untested, leftOut, problems }),
+    suspects: [...weighed.suspects],
+    places: [...weighed.places],
+    groups: [...verdict.groups],
+    pairs: anyFailed ? pairsOf(findings, weighed) : [],
+    unexplained: laneNames(findings, weighed.unexplained),
+    untested: laneNames(findings, untested),
+    lanes: laneStates(findings, last),
+    evidence: [...observations.evidence],
+    nextChecks: nextChecks({ weighed, verdict, runs, priors }),
+    cautions: cautionsFor(index, {
+      outcome: verdict.outcome,
+      failing: Math.max(0, ...best.runs.map((run) => run.failing.size)),
+      sockets: verdict.sockets,
+    }),
+    exact: leftOut <= exactWithin,
+    leftOut,
+  };
+}
+
+function findLast<T>(list: readonly T[], wanted: (item: T) => boolean): number | null {
+  for (let i = list.length - 1; i >= 0; i--) if (wanted(list[i] as T)) return i;
+  return null;
+}
+
+function unexplainedLanes({ parts, posterior, runs }: Findings): Lane[] {
+  const explained = new Map<Lane, number>();
+  const wanted = new Set(runs.flatMap((run) => [...run.failing]));
+  parts.forEach((part, p) =>
+    part.causes.forEach((cause, c) =>
+      cause.kinds.forEach((kind, k) => {
+        const own = posterior.kinds[p]?.[c]?.[k] ?? 0;
+        if (own < 1e-6) return;
+        for (const lane of new Set(kind.scopes.flatMap((scope) => scope?.lanes ?? []))) {
+          if (wanted.has(lane)) explained.set(lane, (explained.get(lane) ?? 0) + own);
+        }
+      }),
+    ),
+  );
+  return [...wanted].filter((lane) => (explained.get(lane) ?? 0) < explainedFrom).sort((a, b) => a - b);
+}
+
+function laneStates({ index, runs }: Findings, last: RunObservation | undefined): LaneState[] {
+  if (runs.length === 0) return [];
+  return ([...index.lanes] as Lane[]).map((lane) => {
+    const failed = last?.failing.has(lane) ?? false;
+    const passed = last?.passed.has(lane) ?? false;
+    const state = failed ? (passed ? 'mixed' : 'failed') : passed ? 'passed' : 'untested';
+    return { bank: index.document.memory.banks[index.bankOf(lane)]?.id ?? '', bit: index.bitOf(lane) as number, state };
+  });
+}
+
+/** Two parts that are both likelier than not needed at once. */
+function pairsOf({ parts, posterior }: Findings, { suspects }: Weighed): Diagnosis['pairs'] {
+  const top = suspects.slice(0, 4);
+  if (top.length < 2 || (top[0]?.probability ?? 0) + (top[1]?.probability ?? 0) < 1 + pairFrom / 2) return [];
+  const numberOf = new Map(parts.map((part, p) => [part.id, p]));
+  const found: Diagnosis['pairs'] = [];
+  top.forEach((one, i) =>
+    top.slice(i + 1).forEach((other) => {
+      const probability = bothOf(posterior, numberOf.get(one.id) ?? -1, numberOf.get(other.id) ?? -1);
+      if (probability >= pairFrom)
+        found.push({ parts: [one.id, other.id], labels: [one.label, other.label], probability });
+    }),
+  );
+  return found.sort((a, b) => b.probability - a.probability);
+}
+
+function bothOf(posterior: Posterior, one: number, other: number): number {
+  const either = posterior.anyOf(new Set([one, other]));
+  const both = posterior.anyOf(new Set([one])) + posterior.anyOf(new Set([other])) - either;
+  return Math.min(1, Math.max(0, both));
+}

@@ -1,0 +1,81 @@
+import type { Lane } from '../brand';
+import { sentenceCase } from '../layout/words';
+import { lanesWords } from './lane-words';
+import type { Observations } from './observations';
+import { wentAway, type Verdict, type Weighed } from './verdict';
+
+export interface Told {
+  readonly weighed: Weighed;
+  readonly verdict: Verdict;
+  readonly observations: Observations;
+  readonly untested: readonly Lane[];
+  readonly leftOut: number;
+  readonly problems: readonly string[];
+}
+
+const percent = (p: number) => `${p > 0.99 && p < 1 ? 'more than 99' : Math.round(p * 100)} %`;
+
+/** Why the headline says what it says, and what is not known, the most important first. */
+export function tell(told: Told): string[] {
+  const { weighed, verdict, observations, untested } = told;
+  const { findings, lastRun, places, unexplained } = weighed;
+  const sentences = [...told.problems];
+  if (lastRun === null) return [...sentences, ...observations.notes];
+  const gone = wentAway(weighed);
+  const shown = gone ? lastFailing(weighed) : lastRun;
+  const run = findings.runs[shown];
+  if (run && run.failing.size > 0) {
+    const failed = sentenceCase(lanesWords(findings.index, run.failing));
+    const alone = run.failing.size === 1 && run.passed.size > 0 ? ' alone' : '';
+    const verb = run.failing.size === 1 && !/ and /.test(failed) ? 'fails' : 'fail';
+    const passed = run.passed.size > 0 ? ` ${sentenceCase(lanesWords(findings.index, run.passed))} passed.` : '';
+    sentences.push(
+      `${failed}${alone} ${gone ? verb.replace('fails', 'failed').replace(/^fail$/, 'failed') : verb}.${passed}`,
+    );
+  } else if (run) {
+    sentences.push(`${sentenceCase(lanesWords(findings.index, run.passed))} passed.`);
+  }
+  if (gone) {
+    sentences.push(
+      'It went away. That is not a repair yet: a contact, or a chip that comes and goes, stays suspected until a soak of some hours shows no failure.',
+    );
+  }
+  if (untested.length > 0) {
+    const silence = observations.silence[lastRun];
+    const words = sentenceCase(lanesWords(findings.index, untested));
+    sentences.push(`${words} ${untested.length === 1 ? 'was' : 'were'} not tested${silence ? `: ${silence}` : ''}.`);
+  }
+  const [first] = places;
+  if (verdict.outcome === 'place' && first && verdict.sockets.length === 1 && first.chip + first.contact > 0) {
+    const more =
+      first.chip >= first.contact
+        ? ['chip', first.chip, 'contact', first.contact]
+        : ['contact', first.contact, 'chip', first.chip];
+    sentences.push(
+      `Of this place, the ${more[0]} with ${percent(more[1] as number)}, the ${more[2]} with ${percent(more[3] as number)}.`,
+    );
+  }
+  if (verdict.outcome === 'place' && verdict.sockets.length > 2) {
+    sentences.push(
+      'Three and more bad chips at once are rare. Measure every supply rail at a socket before you pull one.',
+    );
+  }
+  if (unexplained.length > 0)
+    sentences.push(`No single cause explains ${lanesWords(findings.index, unexplained)} well.`);
+  if (observations.interpretations.length > 1) {
+    sentences.push(
+      `How this machine counts is not known, so the code has ${observations.interpretations.length} meanings; all are weighed here.`,
+    );
+  }
+  if (told.leftOut > 1e-3) {
+    sentences.push(
+      `Combinations of many faults at once were left out; together they hold at most ${percent(Math.min(1, told.leftOut))}.`,
+    );
+  }
+  return [...sentences, ...observations.notes];
+}
+
+function lastFailing({ findings, lastRun }: Weighed): number {
+  for (let r = lastRun ?? 0; r >= 0; r--) if ((findings.runs[r]?.failing.size ?? 0) > 0) return r;
+  return lastRun ?? 0;
+}

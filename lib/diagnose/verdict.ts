@@ -1,0 +1,237 @@
+import type { Diagnosis, LaneName, Place, Suspect, SuspectGroup } from '@/shared';
+import type { Lane } from '../brand';
+import { bankWords, listWords, sentenceCase } from '../layout/words';
+import { lanesWords } from './lane-words';
+import type { Findings } from './suspects';
+
+/** What the evidence as a whole comes to. */
+export interface Verdict {
+  readonly outcome: Diagnosis['outcome'];
+  readonly headline: string;
+  readonly sure: Diagnosis['sure'];
+  readonly probability: number | null;
+  readonly groups: readonly SuspectGroup[];
+  /** Sockets that the headline tells to handle. */
+  readonly sockets: readonly string[];
+}
+
+export interface Weighed {
+  readonly findings: Findings;
+  readonly suspects: readonly Suspect[];
+  readonly places: readonly Place[];
+  /** The last run that showed anything, null where none did. */
+  readonly lastRun: number | null;
+  /** Failing lanes that nothing in the model explains well. */
+  readonly unexplained: readonly Lane[];
+}
+
+/** A place or shared part leads when it is likelier than all others together. */
+const leads = 0.5;
+/** Members of a group hold together this share of the probability; none below a tenth of the first. */
+const groupHolds = 0.95;
+const mostMembers = 8;
+
+/** The words for a probability. `capped` where the evidence cannot prove more, such as a fault that went away. */
+export function sureWords(probability: number, capped: boolean): Diagnosis['sure'] {
+  if (capped || probability < 0.7) return 'not sure';
+  if (probability >= 0.99) return 'sure';
+  return probability >= 0.9 ? 'strong' : 'likely';
+}
+
+/** True where the last run passed though an earlier one failed. */
+export function wentAway({ findings, lastRun }: Weighed): boolean {
+  if (lastRun === null) return false;
+  return (
+    findings.runs[lastRun]?.failing.size === 0 && findings.runs.slice(0, lastRun).some((run) => run.failing.size > 0)
+  );
+}
+
+/** Decides what to say first: a place, a group, a shared part, or that there is nothing to say. */
+export function decide(weighed: Weighed): Verdict {
+  const { findings, lastRun, places, suspects, unexplained } = weighed;
+  const nothing = { probability: null, groups: [], sockets: [] };
+  if (lastRun === null) {
+    return { outcome: 'no-evidence', headline: 'Enter what the board reported.', sure: 'no reading', ...nothing };
+  }
+  const failing = new Set(findings.runs.flatMap((run) => [...run.failing]));
+  if (failing.size === 0) {
+    return { outcome: 'not-shown', headline: 'No chip to pull: nothing failed.', sure: 'no reading', ...nothing };
+  }
+  if (unexplained.length === failing.size) {
+    const headline = 'Nothing known explains this. Run the test again.';
+    return { outcome: 'unexplained', headline, sure: 'not sure', ...nothing };
+  }
+  const shared = suspects.filter((suspect) => suspect.kind === 'shared-part' || suspect.kind === 'short');
+  const sharedSum = Math.min(
+    1,
+    shared.reduce((sum, suspect) => sum + suspect.probability, 0),
+  );
+  const fitting = fittingVerdict(weighed);
+  if (fitting) return fitting;
+  const leading = places.filter((place) => place.probability >= leads);
+  if (leading.length > 0) return placeVerdict(weighed, leading);
+  if (sharedSum >= leads) return sharedVerdict(shared, sharedSum);
+  return groupVerdict(weighed, shared);
+}
+
+function placeVerdict(weighed: Weighed, leading: readonly Place[]): Verdict {
+  const capped = wentAway(weighed);
+  const [first] = leading as [Place];
+  const labels = leading.map((place) => place.socket);
+  const probability = Math.min(...leading.map((place) => place.probability));
+  return {
+    outcome: 'place',
+    headline: leading.length === 1 ? onePlace(weighed, first) : `Pull ${listWords(labels)}.`,
+    sure: sureWords(probability, capped),
+    probability,
+    groups: [],
+    sockets: labels,
+  };
+}
+
+function onePlace({ suspects }: Weighed, place: Place): string {
+  if (place.contact > place.chip) return `Look at socket ${place.socket} first: contacts, solder, trace.`;
+  const chip = suspects.find((suspect) => suspect.kind === 'chip' && suspect.socket === place.socket);
+  if (chip?.cameFrom) return `Pull the chip now in ${place.socket}: it came from ${chip.cameFrom}.`;
+  if (chip?.id.includes('#')) return `Pull the chip just fitted in ${place.socket}.`;
+  return `Pull ${place.socket} first.`;
+}
+
+/** A new failure right after chips were handled: the handling itself is looked at first. */
+function fittingVerdict({ suspects, findings, lastRun }: Weighed): Verdict | null {
+  const fitted = suspects.flatMap((suspect) => {
+    const probability = suspect.modes
+      .filter((mode) => mode.mode === 'fitting')
+      .reduce((sum, mode) => sum + mode.probability, 0);
+    return suspect.kind === 'position' && suspect.socket && probability >= 0.15
+      ? [{ socket: suspect.socket, probability }]
+      : [];
+  });
+  const total = Math.min(
+    1,
+    fitted.reduce((sum, each) => sum + each.probability, 0),
+  );
+  if (total < leads || lastRun === null || findings.runs[lastRun]?.failing.size === 0) return null;
+  const sockets = fitted.map((each) => each.socket);
+  return {
+    outcome: 'place',
+    headline: `Power off. Look how ${listWords(sockets)} ${sockets.length === 1 ? 'is' : 'are'} fitted: a bent leg, or a chip turned round.`,
+    sure: sureWords(total, true),
+    probability: total,
+    groups: [],
+    sockets,
+  };
+}
+
+function sharedVerdict(shared: readonly Suspect[], sum: number): Verdict {
+  const members = membersOf(
+    shared.map((suspect) => ({ id: suspect.id, label: suspect.label, share: suspect.probability })),
+    sum,
+  );
+  const [first] = shared as [Suspect];
+  const names = members.map((member) => shared.find((suspect) => suspect.id === member.id)?.sharedPart ?? member.label);
+  const one = first.probability >= leads * sum;
+  return {
+    outcome: 'shared',
+    headline:
+      one && first.kind === 'short'
+        ? `Do not pull a chip yet. Look for a ${first.label}.`
+        : `Do not pull a chip yet. Look at ${one ? `${names[0]} first` : listWords(names, 4)}.`,
+    sure: sureWords(one ? first.probability : sum, false),
+    probability: one ? first.probability : sum,
+    groups:
+      members.length > 1
+        ? [
+            {
+              members,
+              probability: sum,
+              why: 'What failed has no chip in common, but one of these serves it all.',
+              check:
+                'Measure the supply at a socket, then follow the signals of these parts with a scope, the likeliest first.',
+            },
+          ]
+        : [],
+    sockets: [],
+  };
+}
+
+interface Member {
+  readonly id: string;
+  readonly label: string;
+  readonly share: number;
+}
+
+function membersOf(candidates: readonly Member[], total: number): Member[] {
+  const sorted = [...candidates].sort((a, b) => b.share - a.share);
+  const most = sorted[0]?.share ?? 0;
+  const members: Member[] = [];
+  let held = 0;
+  for (const each of sorted) {
+    if (members.length >= mostMembers || held >= groupHolds * total || each.share < most / 10) break;
+    members.push(each);
+    held += each.share;
+  }
+  return members;
+}
+
+function groupVerdict(weighed: Weighed, shared: readonly Suspect[]): Verdict {
+  const { places, suspects, findings } = weighed;
+  const candidates = [
+    ...places.map((place) => ({
+      id: suspects.find((suspect) => suspect.socket === place.socket)?.id ?? `place:${place.socket}`,
+      label: place.socket,
+      share: place.probability,
+    })),
+    ...shared.map((suspect) => ({
+      id: suspect.id,
+      label: suspect.sharedPart ?? suspect.label,
+      share: suspect.probability,
+    })),
+  ];
+  const total = Math.min(
+    1,
+    candidates.reduce((sum, each) => sum + each.share, 0),
+  );
+  const members = membersOf(candidates, total);
+  const probability = Math.min(
+    1,
+    members.reduce((sum, member) => sum + member.share, 0),
+  );
+  const sockets = places
+    .filter((place) => members.some((member) => member.label === place.socket))
+    .map((place) => place.socket);
+  const holders = suspects.filter((suspect) => suspect.kind === 'chip' && suspect.modes[0]?.mode === 'holds-line');
+  const held =
+    holders.length > 1 &&
+    members.every((m) => shared.some((s) => s.id === m.id) || holders.some((h) => h.socket === m.label));
+  const names = members.map((member) => member.label);
+  const why = held
+    ? `${sentenceCase(lanesWords(findings.index, allFailing(findings)))} fail${held ? 's' : ''}. One chip that never lets go of the line does that, and so does what drives the line: the code cannot tell them apart.`
+    : 'The evidence fits these about equally well.';
+  const check = held
+    ? `Power off, take out ${listWords(sockets)} one at a time, and run again each time. If the bit comes back in the other banks, the chip that is out held the line. If it never does, look at the line and its driver.`
+    : sockets.length > 1
+      ? `Swap one of ${listWords(sockets)} with a chip of another bit and run again: if the code changes, it was that chip.`
+      : null;
+  return {
+    outcome: 'group',
+    headline: `One of ${listWords(names, 4).replace(/ and (?=[^,]*$)/, ' or ')}.`,
+    sure: 'not sure',
+    probability,
+    groups: [{ members, probability, why, check }],
+    sockets,
+  };
+}
+
+function allFailing(findings: Findings): Lane[] {
+  return [...new Set(findings.runs.flatMap((run) => [...run.failing]))];
+}
+
+/** Bank and bit of lanes, for the answer. */
+export function laneNames(findings: Findings, lanes: Iterable<Lane>): LaneName[] {
+  const { index } = findings;
+  return [...lanes].map((lane) => ({
+    bank: index.document.memory.banks[index.bankOf(lane)]?.id ?? bankWords('?'),
+    bit: index.bitOf(lane) as number,
+  }));
+}
