@@ -1,6 +1,6 @@
 export type { Colours, ThemeName } from './colours';
 export { loadFonts } from './fonts';
-export { fixed, makeStyles, sticky } from './make-styles';
+export { fixed, makeStyles, ruledPaper, sticky } from './make-styles';
 export type { Theme } from './theme';
 export { themeChoices, type ThemeChoice } from './theme-choice';
 export { FixedTheme, ThemeProvider, useTheme, useThemeChoice } from './theme-provider';

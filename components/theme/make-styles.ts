@@ -1,4 +1,4 @@
-import { StyleSheet } from 'react-native';
+import { StyleSheet, type ViewStyle } from 'react-native';
 import type { Theme } from './theme';
 import { useTheme } from './theme-provider';
 
@@ -26,3 +26,11 @@ export const sticky = 'sticky' as 'relative';
 
 /** `position: fixed`, which the web has and React Native's types do not name. */
 export const fixed = 'fixed' as 'absolute';
+
+/** Thin rules across, as on writing paper; for empty ground that should still look like a sheet. */
+export function ruledPaper({ colours, space, line }: Theme): ViewStyle {
+  const pitch = space.xxl;
+  return {
+    backgroundImage: `repeating-linear-gradient(to bottom, transparent 0, transparent ${pitch - line.thin}px, ${colours.rule} ${pitch - line.thin}px, ${colours.rule} ${pitch}px)`,
+  } as ViewStyle;
+}

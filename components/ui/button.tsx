@@ -1,6 +1,6 @@
 import { Link as RouterLink, type Href } from 'expo-router';
-import type { ReactNode } from 'react';
-import { Pressable, type PressableStateCallbackType, type StyleProp, type ViewStyle } from 'react-native';
+import { useState, type ReactNode } from 'react';
+import { Pressable, StyleSheet, type StyleProp, type ViewStyle } from 'react-native';
 import { makeStyles } from '@/components/theme';
 import { Text } from './text';
 
@@ -58,7 +58,11 @@ export function Button({ onPress, disabled = false, busy = false, busyLabel, pre
       onPress={() => {
         if (!busy) onPress();
       }}
-      style={(state) => [frame(styles, { kind, state, pressed, wide }), (disabled || busy) && styles.faded, style]}
+      style={(state) => [
+        frame(styles, { kind, held: Boolean(state.pressed || state.hovered), pressed, wide }),
+        (disabled || busy) && styles.faded,
+        style,
+      ]}
     >
       {icon}
       {iconOnly ? null : (
@@ -73,14 +77,18 @@ export function Button({ onPress, disabled = false, busy = false, busyLabel, pre
 /** A link that looks like a button: it goes somewhere, so it is a link for a screen reader and for a middle click. */
 export function ButtonLink({ href, ...look }: Look & { href: Href }) {
   const styles = useStyles();
+  const [hovered, setHovered] = useState(false);
   const { label, kind = 'secondary', icon, iconOnly, wide, style, ...aria } = look;
+  // Through `asChild` a style goes as an object only; a style function would be dropped.
   return (
     <RouterLink href={href} asChild>
       <Pressable
         role="link"
         {...aria}
         aria-label={aria['aria-label'] ?? (iconOnly ? label : undefined)}
-        style={(state) => [frame(styles, { kind, state, wide }), style]}
+        onHoverIn={() => setHovered(true)}
+        onHoverOut={() => setHovered(false)}
+        style={StyleSheet.flatten([frame(styles, { kind, held: hovered, wide }), style])}
       >
         {icon}
         {iconOnly ? null : (
@@ -93,10 +101,9 @@ export function ButtonLink({ href, ...look }: Look & { href: Href }) {
   );
 }
 
-type FrameState = { kind: ButtonKind; state: PressableStateCallbackType; pressed?: boolean; wide?: boolean };
+type FrameState = { kind: ButtonKind; held: boolean; pressed?: boolean; wide?: boolean };
 
-function frame(styles: ReturnType<typeof useStyles>, { kind, state, pressed, wide }: FrameState) {
-  const held = state.pressed || state.hovered;
+function frame(styles: ReturnType<typeof useStyles>, { kind, held, pressed, wide }: FrameState) {
   return [
     styles.frame,
     styles[kind],

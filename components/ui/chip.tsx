@@ -52,5 +52,6 @@ export const useChipStyles = makeStyles((t) => ({
   },
   held: { borderColor: t.colours.ink },
   selected: { backgroundColor: t.colours.ink, borderColor: t.colours.ink },
+  outlined: { borderColor: t.colours.ink },
   faded: { backgroundColor: t.colours.faded },
 }));

@@ -1,6 +1,6 @@
 import type { ReactNode } from 'react';
 import { View, type StyleProp, type ViewStyle } from 'react-native';
-import { makeStyles, useBreakpoint } from '@/components/theme';
+import { makeStyles, ruledPaper, useBreakpoint } from '@/components/theme';
 import { Text } from './text';
 import { useDocumentTitle } from './use-document-title';
 
@@ -22,12 +22,17 @@ export type PageProps = {
   style?: StyleProp<ViewStyle>;
 };
 
-/** A page's frame: its title in the tab and on the sheet, its width, and room around it. */
+/**
+ * A page's frame: its title in the tab and on the sheet, its width, and room around it.
+ * On a wide window a form or a column of prose is a sheet at the left of ruled paper.
+ */
 export function Page({ title, hideTitle, over, lead, actions, width = 'page', children, style }: PageProps) {
   const styles = useStyles();
-  const phone = useBreakpoint() === 'phone';
+  const breakpoint = useBreakpoint();
+  const phone = breakpoint === 'phone';
+  const column = width === 'form' || width === 'prose';
   useDocumentTitle(title);
-  return (
+  const content = (
     <View style={[styles.frame, width !== 'full' && (phone ? styles.roomPhone : styles.room), styles[width], style]}>
       {hideTitle ? null : (
         <View style={styles.head}>
@@ -48,16 +53,33 @@ export function Page({ title, hideTitle, over, lead, actions, width = 'page', ch
       {children}
     </View>
   );
+  if (!column || phone) return content;
+  return (
+    <View style={styles.ruled}>
+      <View style={styles.column}>{content}</View>
+    </View>
+  );
 }
 
 const useStyles = makeStyles((t) => ({
   frame: { width: '100%', gap: t.space.lg },
   room: { paddingHorizontal: t.space.xl, paddingVertical: t.space.xl },
   roomPhone: { paddingHorizontal: t.space.lg, paddingVertical: t.space.lg },
-  form: { maxWidth: t.measure.form + t.space.xl * 2 },
-  prose: { maxWidth: t.measure.prose + t.space.xl * 2 },
+  form: { width: t.measure.form + t.space.xl * 2, maxWidth: '100%' },
+  prose: { width: t.measure.prose + t.space.xl * 2, maxWidth: '100%' },
   page: { maxWidth: t.measure.page },
   full: { gap: t.space.none, flexGrow: 1 },
+  ruled: {
+    flexGrow: 1,
+    flexDirection: 'row',
+    ...ruledPaper(t),
+  },
+  column: {
+    flexShrink: 1,
+    backgroundColor: t.colours.sheet,
+    borderRightWidth: t.line.thin,
+    borderRightColor: t.colours.ruleStrong,
+  },
   head: {
     flexDirection: 'row',
     flexWrap: 'wrap',

@@ -13,6 +13,8 @@ export type SegmentedControlProps<Value extends string> = {
   options: readonly Choice<Value>[];
   value: Value;
   onChange: (value: Value) => void;
+  /** filled: the choice in ink, for what a page turns on. outlined: an ink edge, for what stands back. */
+  kind?: 'filled' | 'outlined';
 };
 
 /** One choice of a few, all in sight: a radio group drawn as chips. */
@@ -21,6 +23,7 @@ export function SegmentedControl<Value extends string>({
   options,
   value,
   onChange,
+  kind = 'filled',
 }: SegmentedControlProps<Value>) {
   const styles = useChipStyles();
   const index = options.findIndex((option) => option.value === value);
@@ -45,13 +48,13 @@ export function SegmentedControl<Value extends string>({
             style={(state) => [
               styles.chip,
               (state.hovered || state.pressed) && styles.held,
-              selected && styles.selected,
+              selected && (kind === 'filled' ? styles.selected : styles.outlined),
               option.disabled && styles.faded,
             ]}
           >
             <Text
               variant={selected ? 'smallStrong' : 'small'}
-              tone={selected ? 'onInk' : option.disabled ? 'soft' : 'ink'}
+              tone={selected && kind === 'filled' ? 'onInk' : option.disabled ? 'soft' : 'ink'}
             >
               {option.label}
             </Text>

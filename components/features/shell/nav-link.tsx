@@ -1,5 +1,6 @@
 import { Link } from 'expo-router';
-import { Pressable } from 'react-native';
+import { useState } from 'react';
+import { Pressable, StyleSheet } from 'react-native';
 import { makeStyles } from '@/components/theme';
 import { Text } from '@/components/ui/text';
 import type { Place } from './places';
@@ -14,17 +15,15 @@ type NavLinkProps = {
 /** One place of the navigation; red underline under the current one. */
 export function NavLink({ place, current, where }: NavLinkProps) {
   const styles = useStyles();
+  const [hovered, setHovered] = useState(false);
   return (
     <Link href={place.href} asChild>
       <Pressable
         role="link"
         aria-current={current ? 'page' : undefined}
-        style={(state) => [
-          styles.link,
-          styles[where],
-          current && styles.current,
-          state.hovered && !current && styles.hovered,
-        ]}
+        onHoverIn={() => setHovered(true)}
+        onHoverOut={() => setHovered(false)}
+        style={StyleSheet.flatten([styles.link, styles[where], current ? styles.current : hovered && styles.hovered])}
       >
         <Text variant={current ? 'label' : where === 'foot' ? 'small' : 'body'} align="center">
           {place.label}

@@ -10,5 +10,5 @@ const options: readonly { value: ThemeChoice; label: string }[] = [
 /** Chooses the theme; remembered on this device. */
 export function ThemeSwitch() {
   const { choice, choose } = useThemeChoice();
-  return <SegmentedControl label="Theme" options={options} value={choice} onChange={choose} />;
+  return <SegmentedControl kind="outlined" label="Theme" options={options} value={choice} onChange={choose} />;
 }
