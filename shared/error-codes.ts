@@ -29,6 +29,10 @@ export const errorCodes = {
   'link-invalid': { status: 410, title: 'This link was used already or has expired. Ask for a new one.' },
   'password-wrong': { status: 422, title: 'The present password is not right.' },
   'request-open': { status: 409, title: 'A request of yours is still waiting for an answer.' },
+  // Layouts
+  'layout-invalid': { status: 422, title: 'The layout has errors. Put them right and send it again.' },
+  'layout-retired': { status: 410, title: 'The layout of this board was withdrawn.' },
+  'own-version': { status: 403, title: 'Nobody decides on a version of his own. Another moderator must.' },
   // The server
   'not-ready': { status: 503, title: 'The server is not ready. Try again in a moment.' },
   internal: { status: 500, title: 'Something went wrong on the server. It has been noted.' },

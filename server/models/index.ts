@@ -1,6 +1,9 @@
 import { Sequelize, type Transaction } from 'sequelize';
 import { defineAuditEntry } from './audit-entry';
 import { defineEmailToken } from './email-token';
+import { defineLayout } from './layout';
+import { defineLayoutFamily, defineLayoutWord } from './layout-search';
+import { defineLayoutVersion } from './layout-version';
 import { defineOutboxMail } from './outbox-mail';
 import { defineRoleRequest } from './role-request';
 import { defineSeeding } from './seeding';
@@ -24,6 +27,10 @@ export const openDatabase = ({ url, pool }: { url: string; pool: number }) => {
     sequelize,
     AuditEntry: defineAuditEntry(sequelize),
     EmailToken: defineEmailToken(sequelize),
+    Layout: defineLayout(sequelize),
+    LayoutFamily: defineLayoutFamily(sequelize),
+    LayoutVersion: defineLayoutVersion(sequelize),
+    LayoutWord: defineLayoutWord(sequelize),
     OutboxMail: defineOutboxMail(sequelize),
     RefreshToken: defineRefreshToken(sequelize),
     RoleRequest: defineRoleRequest(sequelize),

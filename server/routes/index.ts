@@ -1,5 +1,7 @@
 import { accountRoutes } from './accounts';
 import { healthRoutes } from './health';
+import { layoutVersionRoutes } from './layout-versions';
+import { layoutRoutes } from './layouts';
 import { meRoutes } from './me';
 import { peopleRoutes } from './people';
 import { problemRoutes } from './problems';
@@ -16,4 +18,6 @@ export const routes: readonly Route[] = [
   ...meRoutes,
   ...peopleRoutes,
   ...roleRequestRoutes,
+  ...layoutRoutes,
+  ...layoutVersionRoutes,
 ];

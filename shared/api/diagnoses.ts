@@ -7,7 +7,7 @@ import { layoutDocument } from '@/shared/layout/document';
 /** Body of POST /diagnoses: a board, and what its self-test reported in one run after the other. */
 export const diagnosisRequest = z.strictObject({
   layout: z.union([layoutSlug, layoutDocument]).describe('The address of a published board, or a whole document.'),
-  runs: runs.min(1),
+  runs,
 });
 export type DiagnosisRequest = z.input<typeof diagnosisRequest>;
 

@@ -25,6 +25,13 @@ const table: Record<string, Standing> = {
   'PATCH /role-requests/:id': 'moderator',
   'GET /people': 'moderator',
   'PATCH /people/:id': 'moderator',
+  'GET /layouts': 'guest',
+  'GET /layout-filters': 'guest',
+  'GET /layout-schema': 'guest',
+  'GET /layouts/:slug': 'guest',
+  'GET /layouts/:slug/versions': 'guest',
+  'GET /layouts/:slug/versions/:number': 'guest',
+  'GET /me/layout-versions': 'contributor',
 };
 
 const nameOf = ({ method, path }: { method: string; path: string }) => `${method.toUpperCase()} ${path}`;

@@ -1,0 +1,58 @@
+import type { Layout } from '@/server/models/layout';
+import type { LayoutVersion } from '@/server/models/layout-version';
+import type { User } from '@/server/models/user';
+import type { VersionOf } from '@/server/services/layout-versions';
+import type { LayoutDocument } from '@/shared';
+import type { LayoutCard, PersonName, ReviewRow, VersionDetail, VersionRow } from '@/shared/api/layouts';
+
+/** A published board in the library. */
+export const presentLayoutCard = (layout: Layout): LayoutCard => {
+  const { slug, maker, name, revision, kind, year, families, dataBits, publishedNumber, publishedAt } = layout;
+  if (publishedNumber === null || publishedAt === null) throw new RangeError(`${slug} is listed but not published`);
+  const banks = layout.bankCount;
+  const sockets = layout.socketCount;
+  return {
+    ...{ slug, maker, name, revision, kind, year, families, dataBits, banks, sockets },
+    number: publishedNumber,
+    publishedAt: publishedAt.toISOString(),
+  };
+};
+
+const presentName = (user: User | undefined): PersonName | null => (user ? { id: user.id, name: user.name } : null);
+
+/** A version without its document. */
+export const presentVersionRow = ({ version, layout, author, moderator }: VersionOf): VersionRow => ({
+  id: version.id,
+  slug: layout.slug,
+  maker: layout.maker,
+  name: layout.name,
+  revision: layout.revision,
+  number: version.number,
+  state: version.state,
+  current: layout.publishedVersionId === version.id,
+  author: presentName(author),
+  moderator: presentName(moderator),
+  remarks: version.remarks,
+  problems: version.problemCount,
+  checksum: version.checksum,
+  change: version.change,
+  submittedAt: version.submittedAt?.toISOString() ?? null,
+  decidedAt: version.decidedAt?.toISOString() ?? null,
+});
+
+/** A version with its document. */
+export const presentVersionDetail = (row: VersionOf): VersionDetail => ({
+  ...presentVersionRow(row),
+  document: readStoredDocument(row.version),
+});
+
+/** A version as the moderator `userId` sees it in the queue. */
+export const presentReviewRow = (row: VersionOf, userId: string): ReviewRow => ({
+  ...presentVersionRow(row),
+  own: row.version.authorId === userId,
+  publishedNumber: row.layout.publishedNumber,
+});
+
+/** The document of a version. It was checked against the schema before it was stored. */
+export const readStoredDocument = ({ document }: Pick<LayoutVersion, 'document'>): LayoutDocument =>
+  JSON.parse(document) as LayoutDocument;
