@@ -1,6 +1,6 @@
 import { lane } from '../brand';
 import { type TypedField, buildTypedField } from './field-lanes';
-import { keysOf } from './keys';
+import { hasWordKeys, keysOf } from './keys';
 import { type LaneSet, intersection, isAlive } from './lane-set';
 import type { Prefix, ReadResult, ReportKey } from './meaning';
 import { type PrefixState, prefixStates } from './prefix-states';
@@ -79,6 +79,8 @@ function continuation({ state, lanes }: LiveState): string {
       entry.text.startsWith(text) &&
       (entry.speaks || entry.lanes.some((at) => lanes.has[at] === 1)),
   );
+  // Words that have a key each are put in whole, so nothing of them may stand there already.
+  if (text === '' && hasWordKeys(field)) return '';
   return commonStart(left.map((entry) => entry.text.slice(text.length)));
 }
 

@@ -24,6 +24,11 @@ function wordsOf(field: TypedField): { words: string[]; characters: string[] } {
   return { words: [], characters: words.flatMap((text) => [...text]) };
 }
 
+/** True where the words of a field have a key each. */
+export function hasWordKeys(field: TypedField): boolean {
+  return wordsOf(field).words.length > 0;
+}
+
 const isDigit = (character: string) => character >= '0' && character <= '9';
 
 /** Letters before digits as the code has them, but 0 to F in one row where digits go beyond 9. */

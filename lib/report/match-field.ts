@@ -31,6 +31,8 @@ function lexiconOf(part: FieldPart): Lexicon {
   return lexicon;
 }
 
+const noNotes: readonly string[] = [];
+
 /** "O read as 0" for each character that was taken otherwise. */
 function notesFor(given: string, taken: string): string[] {
   if (given === taken) return [];
@@ -44,24 +46,19 @@ function notesFor(given: string, taken: string): string[] {
 
 function wordPieces(part: FieldPart, typed: TypedText, at: number, tolerance: Tolerance): Piece[] {
   const { lengths, exact, folded, alike: alikes } = lexiconOf(part);
-  return lengths.flatMap((length) => {
+  const pieces: Piece[] = [];
+  for (const length of lengths) {
     const end = at + length;
-    if (end > typed.raw.length) return [];
+    if (end > typed.raw.length) continue;
     const given = typed.raw.slice(at, end);
-    const found = exact.has(given)
-      ? [given]
-      : tolerance.alike
-        ? alikes.get(typed.alike.slice(at, end))
-        : tolerance.fold
-          ? folded.get(typed.folded.slice(at, end))
-          : undefined;
-    return (found ?? []).map((text) => ({
-      end,
-      text,
-      notes: notesFor(given, text),
-      entry: part.table.get(text) ?? null,
-    }));
-  });
+    if (exact.has(given)) pieces.push({ end, text: given, notes: noNotes, entry: part.table.get(given) ?? null });
+    else if (tolerance.fold) {
+      const found = tolerance.alike ? alikes.get(typed.alike.slice(at, end)) : folded.get(typed.folded.slice(at, end));
+      for (const text of found ?? [])
+        pieces.push({ end, text, notes: notesFor(given, text), entry: part.table.get(text) ?? null });
+    }
+  }
+  return pieces;
 }
 
 /** The digit that a typed character stands for; null for none. A digit of the base is always itself. */
@@ -92,10 +89,12 @@ function runPieces({ alphabet, min, max }: Run, typed: TypedText, at: number, to
     if (digit === null) break;
     text += digit;
     if (text.length < min) continue;
-    pieces.push({ end: to + 1, text, notes: tolerance.fold ? notesFor(typed.raw.slice(at, to + 1), text) : [] });
+    pieces.push({ end: to + 1, text, notes: tolerance.fold ? notesFor(typed.raw.slice(at, to + 1), text) : noNotes });
   }
   return pieces.reverse();
 }
+
+const nothing: readonly Piece[] = [];
 
 const capitals = 'ABCDEFGHIJKLMNOPQRSTUVWXYZ';
 
@@ -110,7 +109,7 @@ function freePieces(typed: TypedText, at: number): Piece[] {
  * stand in place of the digits that look the same.
  */
 export function matchField(part: FieldPart, typed: TypedText, at: number, tolerance: Tolerance): Piece[] {
-  const words = part.words.length === 0 ? [] : wordPieces(part, typed, at, tolerance);
+  const words = part.words.length === 0 ? nothing : wordPieces(part, typed, at, tolerance);
   const runs =
     part.digits !== null
       ? runPieces(part.digits, typed, at, tolerance)

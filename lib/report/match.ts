@@ -31,8 +31,13 @@ const spacesLeftOut = 'spaces left out';
 class Matcher {
   readonly matches: Match[] = [];
   more = false;
-  stop: Stop = { part: 0, at: 0 };
-  private readonly dead = new Set<number>();
+  stopPart = 0;
+  stopAt = 0;
+  /** Places that lead nowhere, so that each is tried once for each part. */
+  private dead: Set<number> | null = null;
+  /** What the parts so far have taken, and where each begins. */
+  private readonly pieces: Piece[] = [];
+  private readonly starts: number[] = [];
 
   constructor(
     private readonly context: FormatContext,
@@ -40,42 +45,52 @@ class Matcher {
     private readonly tolerance: Tolerance,
   ) {}
 
-  /** Follows the parts from one on. Remembers dead ends, so each place is tried once for each part. */
-  follow(part: number, from: number, found: readonly { piece: Piece; start: number; part: Part }[]): boolean {
+  follow(part: number, from: number): boolean {
     const { raw } = this.typed;
-    const gap = this.tolerance.loose || (this.tolerance.fold && (part === 0 || part === this.context.parts.length));
+    const { parts } = this.context;
+    const gap = this.tolerance.loose || (this.tolerance.fold && (part === 0 || part === parts.length));
     const at = gap ? skipSpaces(raw, from) : from;
-    if (at > this.stop.at || (at === this.stop.at && part >= this.stop.part)) this.stop = { part, at };
-    const current = this.context.parts[part];
-    if (current === undefined) return at === raw.length && this.keep(found);
+    if (at > this.stopAt || (at === this.stopAt && part >= this.stopPart)) {
+      this.stopPart = part;
+      this.stopAt = at;
+    }
+    const current = parts[part];
+    if (current === undefined) return at === raw.length && this.keep();
     const key = part * (raw.length + 1) + at;
-    if (this.dead.has(key)) return false;
+    if (this.dead?.has(key)) return false;
     let any = false;
     for (const piece of piecesOf(current, this.typed, at, this.tolerance)) {
       if (this.matches.length >= mostMatches) {
         this.more = true;
         return true;
       }
-      if (this.follow(part + 1, piece.end, [...found, { piece, start: at, part: current }])) any = true;
+      this.pieces.push(piece);
+      this.starts.push(at);
+      if (this.follow(part + 1, piece.end)) any = true;
+      this.pieces.pop();
+      this.starts.pop();
     }
-    if (!any) this.dead.add(key);
+    if (!any) (this.dead ??= new Set()).add(key);
     return any;
   }
 
-  private keep(found: readonly { piece: Piece; start: number; part: Part }[]): true {
+  private keep(): true {
     const fields: FieldMatch[] = [];
-    const notes = new Set<string>();
+    const notes: string[] = [];
     let text = '';
     let end = 0;
-    for (const { piece, start, part } of found) {
-      if (start > end) notes.add(spacesLeftOut);
-      for (const note of piece.notes) notes.add(note);
+    for (let part = 0; part < this.pieces.length; part++) {
+      const piece = this.pieces[part]!;
+      const start = this.starts[part]!;
+      if (start > end) notes.push(spacesLeftOut);
+      if (piece.notes.length > 0) notes.push(...piece.notes);
       text += piece.text;
       end = piece.end;
-      if (part.kind === 'field') fields.push({ part, text: piece.text, start, entry: piece.entry ?? null });
+      const current = this.context.parts[part]!;
+      if (current.kind === 'field') fields.push({ part: current, text: piece.text, start, entry: piece.entry ?? null });
     }
-    if (end < this.typed.raw.length) notes.add(spacesLeftOut);
-    this.matches.push({ fields, text, notes: [...notes] });
+    if (end < this.typed.raw.length) notes.push(spacesLeftOut);
+    this.matches.push({ fields, text, notes: notes.length > 1 ? [...new Set(notes)] : notes });
     return true;
   }
 }
@@ -86,6 +101,6 @@ class Matcher {
  */
 export function matchText(context: FormatContext, typed: TypedText, tolerance: Tolerance): MatchResult {
   const matcher = new Matcher(context, typed, tolerance);
-  matcher.follow(0, 0, []);
-  return { matches: matcher.matches, more: matcher.more, stop: matcher.stop };
+  matcher.follow(0, 0);
+  return { matches: matcher.matches, more: matcher.more, stop: { part: matcher.stopPart, at: matcher.stopAt } };
 }

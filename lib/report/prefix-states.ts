@@ -83,7 +83,10 @@ function opened({ text }: Walk, field: TypedField, at: number, filled: readonly 
   const word = field.texts.find(
     (entry) => !entry.padded && entry.text.length > rest.length && fold(entry.text).startsWith(rest),
   );
-  const digits = (alphabet !== '' || rest === '') && rest.length <= field.width.max && [...rest].every((digit) => alphabet.includes(digit));
+  const digits =
+    (alphabet !== '' || rest === '') &&
+    rest.length <= field.width.max &&
+    [...rest].every((digit) => alphabet.includes(digit));
   if (word === undefined && !digits && !field.part.free) return [];
   const typed = word === undefined ? rest : word.text.slice(0, rest.length);
   return [{ filled, open: { field, text: typed }, fixed: '', done: false }];

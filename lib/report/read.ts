@@ -1,6 +1,6 @@
 import type { Convention } from './conventions';
 import type { FormatContext } from './format-context';
-import { matchText } from './match';
+import { type MatchResult, matchText } from './match';
 import type { Match, Stop, Tolerance } from './match-types';
 import type { ReadResult, ReportReading } from './meaning';
 import type { RawReading, Refusal } from './outcome';
@@ -112,7 +112,17 @@ function choose(reader: Reader, understood: readonly Understood[]): ReadResult {
   };
 }
 
-const furthest = (a: Stop, b: Stop): Stop => (b.at > a.at || (b.at === a.at && b.part > a.part) ? b : a);
+function furthest(a: Stop, b: Stop): Stop {
+  return b.at > a.at || (b.at === a.at && b.part > a.part) ? b : a;
+}
+
+/** Most codes are plain and have one meaning; they take this way. */
+function readExactly(reader: Reader, { matches, more }: MatchResult): ReadResult | null {
+  const [match] = matches;
+  if (match === undefined || more || matches.length > 1) return null;
+  const understood = understand(reader, match);
+  return understood.readings.length === 0 ? null : finished(reader, understood);
+}
 
 function checkLength(text: string): ReadResult | null {
   if (text.length > mostCharacters) {
@@ -130,6 +140,8 @@ export function readText(reader: Reader, text: string): ReadResult {
   const refused = checkLength(text);
   if (refused !== null) return refused;
   const typed = typedText(text);
+  const plain = readExactly(reader, matchText(reader.context, typed, exact));
+  if (plain !== null) return plain;
   let stop: Stop = { part: 0, at: 0 };
   for (const level of levels) {
     const found = matchText(reader.context, typed, level);

@@ -26,7 +26,9 @@ interface Site {
   readonly take: string | null;
 }
 
-const refuse = (reason: string, at: number): Resolved => ({ readings: [], refusal: { reason, at } });
+function refuse(reason: string, at: number): Resolved {
+  return { readings: [], refusal: { reason, at } };
+}
 
 const fieldNamed = (match: Match, name: FieldPart['field']['field']) =>
   match.fields.find(({ part }) => part.field.field === name);
@@ -100,25 +102,37 @@ function sitesOf(context: FormatContext, match: Match, convention: Convention): 
   });
 }
 
-function readingsAt(context: FormatContext, site: Site, bits: FailingBits, convention: Convention): RawReading[] {
+/** The code names a bank and no bit: one of its bits, and nothing says which. */
+function anyBitOf(context: FormatContext, site: Site, takes: readonly string[]): RawReading[] {
   const { index } = context;
-  const base = site.bank * index.bitCount;
-  const exists = (bit: number) => index.laneExists[base + bit] === 1;
-  const takes = site.take === null ? convention.takes : [...convention.takes, site.take];
-  const shared = { showsWord: bits.shown !== null, address: site.address };
-  if (bits.failing === null) {
-    // The code names a bank and no bit: one of its bits, and nothing says which.
-    return context.allBits.filter(exists).map((bit) => ({
-      ...shared,
-      failing: [{ lane: lane(base + bit), reads: 'unknown' }],
-      shown: [],
-      takes: [...takes, context.index.laneWords(lane(base + bit))],
-    }));
+  const lanes = context.allBits
+    .map((bit) => lane(site.bank * index.bitCount + bit))
+    .filter((at) => index.laneExists[at] === 1);
+  return lanes.map((at) => ({
+    failing: [{ lane: at, reads: 'unknown' }],
+    shown: [],
+    showsWord: false,
+    address: site.address,
+    takes: [...takes, index.laneWords(at)],
+  }));
+}
+
+function rightOnes({ index }: FormatContext, base: number, { failing, shown }: FailingBits): Lane[] {
+  const lanes: Lane[] = [];
+  for (const bit of shown ?? []) {
+    if (index.laneExists[base + bit] === 1 && !failing?.some((bad) => bad.bit === bit)) lanes.push(lane(base + bit));
   }
-  const failing = bits.failing.map(({ bit, reads }) => ({ lane: lane(base + bit), reads }));
-  const bad = new Set(bits.failing.map(({ bit }) => bit));
-  const shown = (bits.shown ?? []).filter((bit) => exists(bit) && !bad.has(bit)).map((bit) => lane(base + bit));
-  return [{ ...shared, failing, shown, takes }];
+  return lanes;
+}
+
+function readingsAt(context: FormatContext, site: Site, bits: FailingBits, convention: Convention): RawReading[] {
+  const base = site.bank * context.index.bitCount;
+  const takes = site.take === null ? convention.takes : [...convention.takes, site.take];
+  if (bits.failing === null) return anyBitOf(context, site, takes);
+  const failing: FailingLane[] = [];
+  for (const { bit, reads } of bits.failing) failing.push({ lane: lane(base + bit), reads });
+  const shown = rightOnes(context, base, bits);
+  return [{ failing, shown, showsWord: bits.shown !== null, address: site.address, takes }];
 }
 
 function direct(lanes: readonly Lane[], convention: Convention): Resolved {

@@ -35,34 +35,47 @@ export interface Silence {
   readonly passed: (reading: RawReading) => readonly Lane[];
 }
 
-function earliestGroup(reading: RawReading, groupOf: ReadonlyMap<Lane, number>): number {
-  return Math.min(...reading.failing.map(({ lane: bad }) => groupOf.get(bad) ?? Infinity));
-}
-
 /** Prepares the meaning of silence of one format. Lists are judged as a whole by whoever has the whole list. */
 export function buildSilence(format: ReportFormat, index: LayoutIndex): Silence {
   const groups = format.after === 'stops' ? testSequence(format, index) : [];
   if (groups.length === 0) return { passed: ({ shown }) => shown };
-  const together = format.testOrder?.bits === 'together';
-  const groupOf = new Map(groups.flatMap((group, at) => group.map((member) => [member, at] as const)));
-  const before: Lane[][] = [[]];
-  const lanesBefore = (at: number) => {
-    for (let next = before.length; next <= at; next++) before[next] = [...before[next - 1]!, ...groups[next - 1]!];
-    return before[at]!;
-  };
-  const passed = (reading: RawReading): readonly Lane[] => {
-    const first = earliestGroup(reading, groupOf);
-    if (first === Infinity) return reading.shown;
-    const bad = new Set(reading.failing.map((failing) => failing.lane));
-    const beside = reading.showsWord
-      ? reading.shown
-      : together
-        ? groups[first]!.filter((member) => !bad.has(member))
-        : [];
-    const earlier = lanesBefore(first);
-    return beside.length === 0
-      ? earlier
-      : [...earlier, ...beside.filter((member) => (groupOf.get(member) ?? Infinity) >= first)];
-  };
-  return { passed };
+  const order = new TestOrder(groups, format.testOrder?.bits === 'together', index.laneCount);
+  return { passed: (reading) => order.passed(reading) };
+}
+
+/** Lanes by the group in which they are tested. */
+class TestOrder {
+  private readonly groupOf: Int32Array;
+  /** Lanes of all groups before each one; worked out when first asked for. */
+  private readonly before: (readonly Lane[])[] = [[]];
+
+  constructor(
+    private readonly groups: readonly (readonly Lane[])[],
+    private readonly together: boolean,
+    laneCount: number,
+  ) {
+    this.groupOf = new Int32Array(laneCount).fill(groups.length);
+    groups.forEach((group, at) => {
+      for (const member of group) this.groupOf[member] = at;
+    });
+  }
+
+  private lanesBefore(at: number): readonly Lane[] {
+    for (let next = this.before.length; next <= at; next++) {
+      this.before[next] = [...this.before[next - 1]!, ...this.groups[next - 1]!];
+    }
+    return this.before[at]!;
+  }
+
+  passed({ failing, shown, showsWord }: RawReading): readonly Lane[] {
+    let first = this.groups.length;
+    for (const { lane: bad } of failing) first = Math.min(first, this.groupOf[bad]!);
+    if (first === this.groups.length) return shown;
+    const earlier = this.lanesBefore(first);
+    const beside = showsWord ? shown : this.together ? this.groups[first]! : [];
+    const also = beside.filter(
+      (member) => this.groupOf[member]! >= first && !failing.some(({ lane: bad }) => bad === member),
+    );
+    return also.length === 0 ? earlier : [...earlier, ...also];
+  }
 }

@@ -48,9 +48,25 @@ export function alike(text: string): string {
   return result;
 }
 
+/** A text as typed; its other forms are worked out when they are asked for, as most codes are plain. */
+class Typed implements TypedText {
+  private foldedText: string | null = null;
+  private alikeText: string | null = null;
+
+  constructor(readonly raw: string) {}
+
+  get folded(): string {
+    return (this.foldedText ??= fold(this.raw));
+  }
+
+  get alike(): string {
+    return (this.alikeText ??= alike(this.raw));
+  }
+}
+
 /** Prepares a text for tolerant matching. */
 export function typedText(raw: string): TypedText {
-  return { raw, folded: fold(raw), alike: alike(raw) };
+  return new Typed(raw);
 }
 
 /** A space or a sign that only separates. */
