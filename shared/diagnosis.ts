@@ -99,7 +99,7 @@ export const group = z.strictObject({
 });
 
 export const nextCheck = z.strictObject({
-  action: z.enum(['swap', 'replace', 'pull-in-turn', 'probe', 'soak', 'read-again']),
+  action: z.enum(['swap', 'replace', 'reseat', 'pull-in-turn', 'measure', 'probe', 'soak', 'read-again']),
   label: z.string().describe('What to do, in one short sentence.'),
   sockets: z.array(z.string()).describe('The sockets that it handles, in the order of the words; two for a swap.'),
   minutes: z.number().positive(),

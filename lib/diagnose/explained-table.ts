@@ -37,6 +37,7 @@ export function tableSteps(nodes: readonly Node[], part: Component): number {
  * nothing outside the group explains it.
  */
 export function solveByTable(nodes: readonly Node[], part: Component, quiet: Float64Array): Solution {
+  if (part.positives.length === 1) return solveOne(nodes, part, quiet);
   const place = new Map(part.positives.map((o, i) => [o, i]));
   const size = 2 ** part.positives.length;
   const own = part.nodes.map((v) => nodes[v] as Node);
@@ -91,6 +92,29 @@ export function solveByTable(nodes: readonly Node[], part: Component, quiet: Flo
     backward = previous;
   }
   return { z, dropped: 0, mass };
+}
+
+/** The table of a single positive, written out: it is the most common group by far. */
+function solveOne(nodes: readonly Node[], part: Component, quiet: Float64Array): Solution {
+  const only = part.positives[0] as number;
+  const missed = part.nodes.map((v) => {
+    const node = nodes[v] as Node;
+    let shown = 0;
+    node.touches.forEach((touches, s) => {
+      if (touches.includes(only)) shown += (node.share[s] as number) * (1 - (node.miss[s] as number));
+    });
+    return 1 - shown;
+  });
+  const allMiss = missed.reduce((product, m) => product * m, quiet[only] as number);
+  const mass = part.nodes.map((v, i) => {
+    const node = nodes[v] as Node;
+    const othersMiss = (missed[i] as number) > 0 ? allMiss / (missed[i] as number) : 0;
+    return node.share.map((share, s) => {
+      const own = node.touches[s]?.includes(only) ? (node.miss[s] as number) : 1;
+      return share * (1 - othersMiss * own);
+    });
+  });
+  return { z: 1 - allMiss, dropped: 0, mass };
 }
 
 /** Lets one cause explain one positive, with probability 1 - miss, in a table of explained subsets. */

@@ -1,6 +1,6 @@
 import { bankIndex, type Lane } from '../brand';
 import type { LayoutIndex } from '../layout/layout-index';
-import { bankWords, bitWords, listWords, numbersWords, rangeWords } from '../layout/words';
+import { bankWords, bitName, bitWords, listWords, numbersWords, rangeWords } from '../layout/words';
 
 /**
  * Lanes in the fewest words: "bit 3 of bank B", "bits 0 to 4 of bank C, and banks A and B", "bit 3 of every
@@ -29,13 +29,20 @@ export function lanesWords(index: LayoutIndex, lanes: Iterable<Lane>): string {
   return parts.length === 2 ? `${parts[0]}, and ${parts[1]}` : listWords(parts);
 }
 
+/** True where `lanesWords` gives a singular: "bit 3 of bank B", "bank B", "every bank". */
+export function saidAsOne(index: LayoutIndex, lanes: Iterable<Lane>): boolean {
+  const words = lanesWords(index, lanes);
+  return !/ and |^bits |^banks /.test(words);
+}
+
 /** "bit 3", "bits 0 to 4 and 6", "bits 2 and 3 and the parity bit". */
 function bitsWords(index: LayoutIndex, bits: readonly number[]): string {
   const { memory } = index.document;
-  const plain = bits.filter((bit) => !index.isCheckBit[bit] && memory.bitNames === undefined);
-  const named = bits.filter((bit) => !plain.includes(bit)).map((bit) => bitWords(memory, bit));
-  const counted = plain.length === 0 ? [] : [plain.length === 1 ? `bit ${plain[0]}` : `bits ${numbersWords(plain)}`];
-  return listWords([...counted, ...named]);
+  const plain = bits.filter((bit) => !index.isCheckBit[bit]);
+  const checks = bits.filter((bit) => index.isCheckBit[bit]).map((bit) => bitWords(memory, bit));
+  const names = plain.map((bit) => bitName(memory, bit));
+  const counted = names.every((name) => /^\d+$/.test(name)) ? numbersWords(names.map(Number)) : listWords(names);
+  return listWords([...(plain.length === 0 ? [] : [`${plain.length === 1 ? 'bit' : 'bits'} ${counted}`]), ...checks]);
 }
 
 /** "bank B", "banks A to D", "every bank". */
@@ -43,7 +50,7 @@ export function banksOf(index: LayoutIndex, banks: readonly number[]): string {
   const ids = banks.map((bank) => index.document.memory.banks[bank]?.id ?? '');
   if (ids.length === 1) return bankWords(ids[0] as string);
   if (ids.length === index.bankCount) return 'every bank';
-  return `banks ${rangeWords(ids)}`;
+  return `banks ${ids.every((id) => /^\d{1,9}$/.test(id)) ? numbersWords(ids.map(Number)) : rangeWords(ids)}`;
 }
 
 function bitsOf(index: LayoutIndex, bank: number): number[] {

@@ -22,7 +22,7 @@ interface Kind {
 
 /** Counts whose weight is below this share of the whole are left out: less than a double can tell. */
 const negligible = 1e-17;
-/** No more than this many members at once are told apart; the weight of more is below `negligible` for rare causes. */
+/** No more than this many members at once are counted. */
 const most = 12;
 
 /** Takes variables together that the positives cannot tell apart. Exact up to the last digits of a double. */
@@ -128,7 +128,11 @@ function countsOf(single: HiddenVariable, members: number): Counts {
   const first = single.states[0]?.weight ?? 0;
   const second = single.states[1]?.weight ?? 0;
   const counts: Counts = [];
-  const cap = Math.min(members, most);
+  let cap = 1;
+  // The chance of more than `cap` members at once falls fast for rare causes.
+  for (let tail = members * (first + second); cap < Math.min(members, most) && tail > negligible; cap++) {
+    tail *= ((members - cap) * (first + second)) / (cap + 1);
+  }
   for (let a = 0; a <= cap; a++) {
     const row: number[] = [];
     for (let b = 0; a + b <= cap; b++) {

@@ -20,7 +20,9 @@ export interface CheckInput {
 }
 
 /** Minutes with their risk (common practice, no source). */
-const minutes = { swap: 8, pullInTurn: 12, probe: 10, soak: 480, readAgain: 2 };
+const minutes = { swap: 8, pullInTurn: 12, probe: 10, measure: 6.5, soak: 480, readAgain: 2 };
+/** From here on a swap has nothing left to tell. */
+const provenFrom = 0.95;
 /** Work on soldered chips costs about this many times as much (common practice, no source). */
 const solderedFactor = 10;
 
@@ -40,13 +42,17 @@ export function nextChecks(input: CheckInput): NextCheck[] {
     case 'shared':
       return [probe(verdict)];
     case 'group': {
+      if (wentAway(weighed)) return [soak(verdict)];
       const inTurn = pullInTurn(input);
       return inTurn ? [inTurn] : [readAgain()];
     }
     case 'place': {
       if (wentAway(weighed)) return [soak(verdict)];
-      const swap = swapCheck(input);
-      return swap ? [swap] : [];
+      if (verdict.headline.includes('fitted:')) return [refit(verdict)];
+      const [first] = weighed.places as [Place];
+      if (first.contact > first.chip) return [measure(input, first)];
+      if (first.chip >= provenFrom) return [substitute(first, isSoldered(weighed.findings.index, first.socket))];
+      return [swapCheck(input)];
     }
   }
 }
@@ -70,6 +76,35 @@ function soak(verdict: Verdict): NextCheck {
     minutes: minutes.soak,
     bits: 0,
     outcomes: [],
+  };
+}
+
+function refit(verdict: Verdict): NextCheck {
+  const sockets = [...verdict.sockets];
+  const label = `Power off, look at every leg in ${listWords(sockets)}, refit, and run again.`;
+  return { action: 'reseat', label, sockets, minutes: minutes.swap, bits: 0, outcomes: [] };
+}
+
+/** A contact is measured to the leg of the chip: the socket alone would leave the contact out. */
+function measure({ weighed }: CheckInput, place: Place): NextCheck {
+  const { index } = weighed.findings;
+  const socket = index.socketByLabel.get(place.socket);
+  const neighbour = socket === undefined ? null : partnerFor(index, socket, { failing: new Set(), passed: new Set() });
+  const from = neighbour === null ? 'the line' : `the same pin of ${labelOf(index, neighbour)}`;
+  return {
+    action: 'measure',
+    label: `Power off, measure from ${from} to the leg of the chip in ${place.socket}, pin by pin; the data pins lead elsewhere.`,
+    sockets: [place.socket],
+    minutes: minutes.measure,
+    bits: 0,
+    outcomes: [
+      { sees: 'open at a leg', means: `the contact or trace at ${place.socket}`, probability: place.contact },
+      {
+        sees: 'all joined',
+        means: 'look further: the line, its driver, the chip',
+        probability: Math.max(0, 1 - place.contact),
+      },
+    ],
   };
 }
 
@@ -147,14 +182,14 @@ function moved(
   return new Set([...lanes].map((lane) => (own.includes(lane) ? (other[own.indexOf(lane)] as Lane) : lane)));
 }
 
-function swapCheck(input: CheckInput): NextCheck | null {
+function swapCheck(input: CheckInput): NextCheck {
   const { weighed, runs, priors } = input;
   const { findings, places } = weighed;
   const { index } = findings;
   const [place] = places as [Place];
   const socket = index.socketByLabel.get(place.socket);
   const last = weighed.lastRun === null ? undefined : findings.runs[weighed.lastRun];
-  if (socket === undefined || !last || last.failing.size === 0) return null;
+  if (socket === undefined || !last || last.failing.size === 0) return readAgain();
   const partner = partnerFor(index, socket, last);
   const soldered = isSoldered(index, place.socket);
   if (partner === null || soldered) return substitute(place, soldered);
@@ -193,6 +228,8 @@ function swapCheck(input: CheckInput): NextCheck | null {
     return { sees: reported(input, outcome.failing), means: outcome.means, probability };
   });
   const rest = Math.max(0, 1 - told);
+  // Where most of the time the swap shows something else, it does not decide between chip and contact.
+  if (rest > 0.5) return substitute(place, false);
   return {
     action: 'swap',
     label: `Power off, swap ${labels[0]} with ${labels[1]}, run again.`,
@@ -230,7 +267,7 @@ function substitute(place: Place, soldered: boolean): NextCheck {
 /** What the board will show: the code in the format that was used last, else the lanes in words. */
 function reported({ runs, weighed }: CheckInput, failing: ReadonlySet<Lane>): string {
   const { index } = weighed.findings;
-  if (failing.size === 0) return 'nothing';
+  if (failing.size === 0) return 'no failure';
   const codes = runs
     .flatMap((run) => run.evidence)
     .filter((each): each is Extract<Evidence, { kind: 'code' }> => each.kind === 'code');

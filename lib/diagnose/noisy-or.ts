@@ -45,15 +45,18 @@ export interface NoisyOrAnswer {
 /** The share of probability that may be left out while the answer still counts as exact. */
 export const exactWithin = 1e-9;
 /** Work that one answer may take before combinations of many faults are left out, in elementary steps. */
-const workLimit = 600_000;
+const workLimit = 300_000;
 /** A group whose table of explained subsets costs less than this is summed in one go. */
 const smallTable = 3_000;
 /** Up to this the table is still taken where the group only falls apart after many variables are fixed. */
 const largeTable = 150_000;
 const longCut = 3;
+/** Below this many positives a table is cheaper than finding out which variables are alike. */
+const mergeFrom = 5;
 
 /** Posterior of every state of every variable, given that all positives came out positive. Never throws. */
 export function inferNoisyOr(model: NoisyOrModel): NoisyOrAnswer {
+  if (model.positives <= mergeFrom) return inferMerged(model);
   const merged = mergeAlike(model);
   const answer = inferMerged(merged.model);
   return { ...answer, marginals: merged.unmerge(answer.marginals) };

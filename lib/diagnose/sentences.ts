@@ -1,6 +1,6 @@
 import type { Lane } from '../brand';
 import { sentenceCase } from '../layout/words';
-import { lanesWords } from './lane-words';
+import { lanesWords, saidAsOne } from './lane-words';
 import type { Observations } from './observations';
 import { wentAway, type Verdict, type Weighed } from './verdict';
 
@@ -13,7 +13,11 @@ export interface Told {
   readonly problems: readonly string[];
 }
 
-const percent = (p: number) => `${p > 0.99 && p < 1 ? 'more than 99' : Math.round(p * 100)} %`;
+function percent(p: number): string {
+  if (p > 0.995) return 'more than 99 %';
+  if (p < 0.005) return 'less than 1 %';
+  return `${Math.round(p * 100)} %`;
+}
 
 /** Why the headline says what it says, and what is not known, the most important first. */
 export function tell(told: Told): string[] {
@@ -27,11 +31,9 @@ export function tell(told: Told): string[] {
   if (run && run.failing.size > 0) {
     const failed = sentenceCase(lanesWords(findings.index, run.failing));
     const alone = run.failing.size === 1 && run.passed.size > 0 ? ' alone' : '';
-    const verb = run.failing.size === 1 && !/ and /.test(failed) ? 'fails' : 'fail';
+    const verb = gone ? 'failed' : saidAsOne(findings.index, run.failing) ? 'fails' : 'fail';
     const passed = run.passed.size > 0 ? ` ${sentenceCase(lanesWords(findings.index, run.passed))} passed.` : '';
-    sentences.push(
-      `${failed}${alone} ${gone ? verb.replace('fails', 'failed').replace(/^fail$/, 'failed') : verb}.${passed}`,
-    );
+    sentences.push(`${failed}${alone} ${verb}.${passed}`);
   } else if (run) {
     sentences.push(`${sentenceCase(lanesWords(findings.index, run.passed))} passed.`);
   }
@@ -43,7 +45,9 @@ export function tell(told: Told): string[] {
   if (untested.length > 0) {
     const silence = observations.silence[lastRun];
     const words = sentenceCase(lanesWords(findings.index, untested));
-    sentences.push(`${words} ${untested.length === 1 ? 'was' : 'were'} not tested${silence ? `: ${silence}` : ''}.`);
+    sentences.push(
+      `${words} ${saidAsOne(findings.index, untested) ? 'was' : 'were'} not tested${silence ? `: ${silence}` : ''}.`,
+    );
   }
   const [first] = places;
   if (verdict.outcome === 'place' && first && verdict.sockets.length === 1 && first.chip + first.contact > 0) {

@@ -21,6 +21,8 @@ export interface Findings {
 /** Suspects below this are not listed, unless fewer than `leastListed` would be. */
 const worthListing = 0.005;
 const leastListed = 3;
+/** From here the overlap of chip and contact is worth a second sum. */
+const countedTwiceFrom = 0.3;
 const mostListed = 24;
 
 /** The parts by probability, with reasons. Those that the evidence does not touch at all are left out. */
@@ -29,9 +31,14 @@ export function listSuspects(findings: Findings): Suspect[] {
   return parts
     .map((part, at) => ({ part, at, probability: probabilityOf(posterior, at) }))
     .filter(({ part }) => touchesAnything(findings, part))
-    .sort((a, b) => b.probability - a.probability || a.at - b.at)
+    .sort((a, b) => likelier(b.probability, a.probability) || a.at - b.at)
     .filter(({ probability }, i) => i < mostListed && (probability >= worthListing || i < leastListed))
     .map(({ part, at, probability }, i) => describe(findings, { part, at, probability, rank: i + 1 }));
+}
+
+/** Difference of two probabilities, 0 where only the last digits of a double differ. */
+function likelier(a: number, b: number): number {
+  return Math.abs(a - b) < 1e-9 ? 0 : a - b;
 }
 
 function touchesAnything({ runs }: Findings, part: Part): boolean {
@@ -201,12 +208,12 @@ export function listPlaces(findings: Findings): Place[] {
   });
   const sorted = [...perSocket]
     .map(([socket, entry]) => ({ socket, ...entry, sum: Math.min(1, entry.chip + entry.contact) }))
-    .sort((a, b) => b.sum - a.sum || a.socket - b.socket)
+    .sort((a, b) => likelier(b.sum, a.sum) || a.socket - b.socket)
     .filter(({ sum }, i) => i < mostListed && (sum >= worthListing || i < leastListed));
   return sorted.map(({ socket, chip, contact, parts: both, sum }, i) => ({
     socket: labelOf(index, socket),
     // Chip and contact may be bad together; the sum of the two would count that twice.
-    probability: i < 4 && sum > 0.02 ? posterior.anyOf(both) : sum,
+    probability: i < 4 && sum > countedTwiceFrom ? posterior.anyOf(both) : sum,
     chip,
     contact,
   }));

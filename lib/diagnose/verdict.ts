@@ -1,7 +1,7 @@
 import type { Diagnosis, LaneName, Place, Suspect, SuspectGroup } from '@/shared';
 import type { Lane } from '../brand';
 import { bankWords, listWords, sentenceCase } from '../layout/words';
-import { lanesWords } from './lane-words';
+import { lanesWords, saidAsOne } from './lane-words';
 import type { Findings } from './suspects';
 
 /** What the evidence as a whole comes to. */
@@ -206,16 +206,19 @@ function groupVerdict(weighed: Weighed, shared: readonly Suspect[]): Verdict {
     members.every((m) => shared.some((s) => s.id === m.id) || holders.some((h) => h.socket === m.label));
   const names = members.map((member) => member.label);
   const why = held
-    ? `${sentenceCase(lanesWords(findings.index, allFailing(findings)))} fail${held ? 's' : ''}. One chip that never lets go of the line does that, and so does what drives the line: the code cannot tell them apart.`
+    ? `${sentenceCase(lanesWords(findings.index, allFailing(findings)))} ${saidAsOne(findings.index, allFailing(findings)) ? 'fails' : 'fail'}. One chip that never lets go of the line does that, and so does what drives the line: the code cannot tell them apart.`
     : 'The evidence fits these about equally well.';
-  const check = held
-    ? `Power off, take out ${listWords(sockets)} one at a time, and run again each time. If the bit comes back in the other banks, the chip that is out held the line. If it never does, look at the line and its driver.`
-    : sockets.length > 1
-      ? `Swap one of ${listWords(sockets)} with a chip of another bit and run again: if the code changes, it was that chip.`
-      : null;
+  const check = wentAway(weighed)
+    ? 'Clean the legs and contacts, then let the test run for hours, cold and warm. Swap them back if it does not return.'
+    : held
+      ? `Power off, take out ${listWords(sockets)} one at a time, and run again each time. If the bit comes back in the other banks, the chip that is out held the line. If it never does, look at the line and its driver.`
+      : sockets.length > 1
+        ? `Swap one of ${listWords(sockets)} with a chip of another bit and run again: if the code changes, it was that chip.`
+        : null;
+  const oneOf = listWords(names, 4).replace(/ and (?=[^,]*$)/, ' or ');
   return {
     outcome: 'group',
-    headline: `One of ${listWords(names, 4).replace(/ and (?=[^,]*$)/, ' or ')}.`,
+    headline: wentAway(weighed) ? `Not repaired yet: suspect ${oneOf}.` : `One of ${oneOf}.`,
     sure: 'not sure',
     probability,
     groups: [{ members, probability, why, check }],

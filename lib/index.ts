@@ -1,0 +1,29 @@
+/**
+ * The engine's one public door. Everything here is pure: no I/O, no clock, no randomness that is not passed
+ * in. The same code answers in the browser with no network and on the server.
+ */
+export { buildLayoutIndex } from './layout/build-layout-index';
+export type { LayoutIndex } from './layout/layout-index';
+export { channelsOf, servedLanes, type Channel } from './layout/served-lanes';
+export { compileFormat, type CompileResult } from './report/compile-format';
+export type {
+  CompiledFormat,
+  FailingLane,
+  Prefix,
+  ReadReport,
+  ReadResult,
+  ReportKey,
+  ReportReading,
+} from './report/meaning';
+export { compiledFormats } from './diagnose/compiled-formats';
+export { diagnose } from './diagnose/diagnose';
+export { lanesWords } from './diagnose/lane-words';
+export { priors, type Priors } from './diagnose/priors';
+export {
+  inferNoisyOr,
+  type HiddenState,
+  type HiddenVariable,
+  type NoisyOrAnswer,
+  type NoisyOrModel,
+} from './diagnose/noisy-or';
+export type { BankIndex, BitIndex, Lane, SocketIndex } from './brand';
