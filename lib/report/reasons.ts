@@ -64,7 +64,9 @@ function digitRange(context: FormatContext, part: FieldPart): string {
     bits.map((_, place) => place),
     radix,
   );
-  return `${'0'.repeat(radix === 10 ? 1 : top.length)} to ${top}`;
+  const { digits } = part.field;
+  const shown = digits === undefined || radix === 10 ? top : top.slice(-digits.max).padStart(digits.min, '0');
+  return `${'0'.repeat(radix === 10 ? 1 : shown.length)} to ${shown}`;
 }
 
 function addressRange({ index }: FormatContext, part: FieldPart): string {
@@ -77,7 +79,8 @@ function addressRange({ index }: FormatContext, part: FieldPart): string {
       .toString(radix)
       .toUpperCase(),
   );
-  return `${from!.padStart(to!.length, '0')} to ${to}`;
+  const width = Math.max(to!.length, radix === 10 ? 1 : (part.field.digits?.min ?? 1));
+  return `${from!.padStart(width, '0')} to ${to!.padStart(width, '0')}`;
 }
 
 /** What a field takes, without its noun: "A to D", "0 to 7". Empty where nothing short can be said. */

@@ -98,7 +98,9 @@ function writeWord(writer: Writer, part: FieldPart, saying: Saying): Written {
   );
   const same = context.fields.filter(({ field }) => field.field === part.field.field);
   const shown = new Set(same.flatMap((other) => bitsOfField(context, other, saying.place)));
-  if (saying.bits.some((bit) => !shown.has(bit))) return cannot('the code does not show that bit');
+  // Whatever was written, it is the value read or the mask that has to show the failing bit.
+  if (part.field.field !== 'written' && saying.bits.some((bit) => !shown.has(bit)))
+    return cannot('the code does not show that bit');
   const constant = context.format.written;
   const start =
     constant === undefined || part.field.field === 'mask'
