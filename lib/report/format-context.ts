@@ -118,7 +118,7 @@ export function bitsOfField(
   const shows = field === 'mask' || field === 'written' || field === 'read';
   const { dataBits, allBits } = context;
   if (shows && site !== null && site.bits.length < dataBits.length && (width === null || width < dataBits.length))
-    return site.bits;
+    return width === null ? site.bits : site.bits.slice(0, width);
   return shows && width !== null && width >= allBits.length ? allBits : dataBits;
 }
 
