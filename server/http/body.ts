@@ -23,6 +23,21 @@ const refuseDeep = (bytes: Buffer): void => {
   }
 };
 
+/**
+ * Refuses a body that says it is too long, before any of it is read: the reader itself would answer only after the
+ * last byte has come.
+ */
+const refuseLong =
+  (bytes: number): RequestHandler =>
+  (req, _res, next) => {
+    if (Number(req.headers['content-length'] ?? 0) > bytes) throw tooLarge(bytes);
+    next();
+  };
+
+/** The problem of a body with more than `bytes` bytes. */
+export const tooLarge = (bytes: number): AppError =>
+  new AppError('body-too-large', { message: `At most ${bytes.toLocaleString('en')} bytes are taken here.` });
+
 /** Reads a JSON body of at most `bytes` bytes (after unpacking); refuses other kinds, and nesting beyond 64 levels. */
 export const readJson = (bytes: number): RequestHandler[] => [
   (req, _res, next) => {
@@ -30,6 +45,7 @@ export const readJson = (bytes: number): RequestHandler[] => [
     if (hasBody && !req.is(['json', '+json'])) throw new AppError('unsupported-media-type');
     next();
   },
+  refuseLong(bytes),
   express.json({
     limit: bytes,
     strict: false,

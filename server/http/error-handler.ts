@@ -1,5 +1,6 @@
 import type { ErrorRequestHandler, RequestHandler } from 'express';
 import type { Logger } from 'pino';
+import { tooLarge } from './body';
 import { AppError } from '@/server/errors';
 import type { ProblemDocument } from '@/shared/api/problem';
 import { errorCodes } from '@/shared/error-codes';
@@ -37,6 +38,7 @@ const presentProblem = (error: AppError, requestId: string): ProblemDocument => 
     ...(error.message === title ? {} : { detail: error.message }),
     requestId,
     ...(error.fields.length ? { fields: [...error.fields] } : {}),
+    ...(error.problems.length ? { problems: [...error.problems] } : {}),
   };
 };
 
@@ -46,9 +48,7 @@ const asAppError = (cause: unknown): AppError => {
   const { type, limit, status } = (cause ?? {}) as { type?: unknown; limit?: unknown; status?: unknown };
   switch (type) {
     case 'entity.too.large':
-      return new AppError('body-too-large', {
-        message: `At most ${Number(limit).toLocaleString('en')} bytes are taken here.`,
-      });
+      return tooLarge(Number(limit));
     case 'entity.parse.failed':
       return new AppError('malformed-json', { message: placeOf(cause) });
     case 'encoding.unsupported':

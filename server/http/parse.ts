@@ -2,6 +2,7 @@ import type { Request } from 'express';
 import type { z } from 'zod';
 import { AppError } from '@/server/errors';
 import type { FieldProblem } from '@/shared/api/problem';
+import { flattenIssues, pointerOf, type SchemaIssue } from '@/shared/schema-issues';
 
 /** Most field problems that one answer lists. */
 const mostListed = 500;
@@ -24,7 +25,8 @@ export const parse = (req: Request, schemas: Schemas): Parsed => {
   const fields: FieldProblem[] = [];
   const read = (part: FieldProblem['in']) => {
     const result = schemas[part]?.safeParse(part === 'body' ? (req.body as unknown) : req[part]);
-    if (result && !result.success) fields.push(...result.error.issues.flatMap((issue) => describe(part, issue)));
+    if (result && !result.success)
+      fields.push(...flattenIssues(result.error.issues).map((issue) => describe(part, issue)));
     return result?.data;
   };
   const parsed = { params: read('params'), query: read('query'), body: read('body') };
@@ -36,18 +38,9 @@ export const parse = (req: Request, schemas: Schemas): Parsed => {
   return parsed;
 };
 
-const describe = (part: FieldProblem['in'], issue: z.core.$ZodIssue): FieldProblem[] => {
-  if (issue.code !== 'unrecognized_keys') {
-    return [{ in: part, pointer: pointer(issue.path), code: issue.code, message: issue.message }];
-  }
-  return issue.keys.map((key) => ({
-    in: part,
-    pointer: pointer([...issue.path, key]),
-    code: issue.code,
-    message: 'There is no such field.',
-  }));
-};
-
-/** JSON pointer (RFC 6901) of a path into a document; "" is the whole. */
-export const pointer = (path: readonly PropertyKey[]): string =>
-  path.map((step) => `/${String(step).replaceAll('~', '~0').replaceAll('/', '~1')}`).join('');
+const describe = (part: FieldProblem['in'], { path, code, message }: SchemaIssue): FieldProblem => ({
+  in: part,
+  pointer: pointerOf(path),
+  code,
+  message,
+});

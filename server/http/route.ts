@@ -67,10 +67,10 @@ export const ok = (body: unknown, headers?: Readonly<Record<string, string>>): R
 });
 
 /** 201 with a body and the address of what was made. */
-export const created = (location: string, body: unknown): Reply => ({
+export const created = (location: string, body: unknown, headers?: Readonly<Record<string, string>>): Reply => ({
   status: 201,
   body,
-  headers: { Location: location },
+  headers: { Location: location, ...headers },
 });
 
 /** 202: taken, the rest happens later (by mail). */

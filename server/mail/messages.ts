@@ -1,12 +1,13 @@
 import type { Config } from '@/server/config';
 import type { Mail } from '@/server/services/outbox';
 
-interface Recipient {
+export interface Recipient {
   readonly name: string;
   readonly email: string;
 }
 
-const letter = (to: Recipient, subject: string, lines: readonly string[]): Mail => ({
+/** A mail of paragraphs with a greeting and our name. */
+export const letter = (to: Recipient, subject: string, lines: readonly string[]): Mail => ({
   recipient: to.email,
   subject,
   body: [`Hello ${to.name},`, ...lines, 'Rowcall'].join('\n\n') + '\n',

@@ -1,9 +1,19 @@
+import type { Context } from '@/server/context';
 import type { Layout } from '@/server/models/layout';
 import type { LayoutVersion } from '@/server/models/layout-version';
 import type { User } from '@/server/models/user';
 import type { VersionOf } from '@/server/services/layout-versions';
 import type { LayoutDocument } from '@/shared';
-import type { LayoutCard, PersonName, ReviewRow, VersionDetail, VersionRow } from '@/shared/api/layouts';
+import type {
+  ImportAnswer,
+  LayoutCard,
+  PersonName,
+  ReviewDetail,
+  ReviewRow,
+  VersionDetail,
+  VersionRow,
+} from '@/shared/api/layouts';
+import type { LayoutProblem } from '@/shared/layout/problem';
 
 /** A published board in the library. */
 export const presentLayoutCard = (layout: Layout): LayoutCard => {
@@ -46,11 +56,28 @@ export const presentVersionDetail = (row: VersionOf): VersionDetail => ({
   document: readStoredDocument(row.version),
 });
 
-/** A version as the moderator `userId` sees it in the queue. */
-export const presentReviewRow = (row: VersionOf, userId: string): ReviewRow => ({
+/** A version as the moderator who asks sees it in the queue. */
+export const presentReviewRow = ({ who }: Context, row: VersionOf): ReviewRow => ({
   ...presentVersionRow(row),
-  own: row.version.authorId === userId,
+  own: who.standing !== 'guest' && row.version.authorId === who.userId,
   publishedNumber: row.layout.publishedNumber,
+});
+
+/** A version as a moderator sees it, with its document and what the check says of it. */
+export const presentReviewDetail = (
+  context: Context,
+  row: VersionOf,
+  problemList: readonly LayoutProblem[],
+): ReviewDetail => ({
+  ...presentReviewRow(context, row),
+  document: readStoredDocument(row.version),
+  problemList: [...problemList],
+});
+
+/** A version that was just taken in, with the warnings of the check. */
+export const presentImport = (row: VersionOf, warnings: readonly LayoutProblem[]): ImportAnswer => ({
+  version: presentVersionRow(row),
+  problems: [...warnings],
 });
 
 /** The document of a version. It was checked against the schema before it was stored. */

@@ -5,6 +5,7 @@ import { layoutRoutes } from './layouts';
 import { meRoutes } from './me';
 import { peopleRoutes } from './people';
 import { problemRoutes } from './problems';
+import { reviewRoutes } from './reviews';
 import { roleRequestRoutes } from './role-requests';
 import { sessionRoutes } from './sessions';
 import type { Route } from '@/server/http/route';
@@ -20,4 +21,5 @@ export const routes: readonly Route[] = [
   ...roleRequestRoutes,
   ...layoutRoutes,
   ...layoutVersionRoutes,
+  ...reviewRoutes,
 ];

@@ -1,16 +1,22 @@
 import { z } from 'zod';
-import { versionTag } from '@/server/http/if-match';
-import { ok, route, type Route } from '@/server/http/route';
-import { presentVersionDetail, presentVersionRow } from '@/server/presenters/layout';
+import { requiredVersion, versionTag } from '@/server/http/if-match';
+import { created, ok, route, type Route } from '@/server/http/route';
+import { presentImport, presentVersionDetail, presentVersionRow } from '@/server/presenters/layout';
+import { checkLayout } from '@/server/services/layout-check';
+import { importLayout, resubmitVersion } from '@/server/services/layout-import';
 import { listOwnVersions, listVersions, loadVersion } from '@/server/services/layout-versions';
 import {
+  importAnswer,
+  layoutCheck,
   layoutSlug,
   ownVersionsQuery,
+  sentDocument,
   versionDetail,
   versionNumber,
   versionsAnswer,
   versionsPage,
 } from '@/shared/api/layouts';
+import { limits } from '@/shared/limits';
 
 const tag = 'layout versions';
 const ofBoard = z.strictObject({ slug: layoutSlug });
@@ -43,6 +49,51 @@ export const layoutVersionRoutes: readonly Route[] = [
       const row = await loadVersion(context, params);
       return ok(presentVersionDetail(row), versionTag(row.version.change));
     },
+  }),
+  route({
+    method: 'post',
+    path: '/layouts',
+    may: 'contributor',
+    tag,
+    summary: 'Send a layout document: a new board, or a new version of the board with that maker, name and revision.',
+    body: sentDocument,
+    bodyBytes: limits.layoutBytes,
+    answer: { status: 201, schema: importAnswer, words: 'The version waits for a moderator.' },
+    problems: ['layout-invalid', 'conflict', 'too-many-attempts'],
+    handler: async ({ context, body }) => {
+      const { warnings, ...row } = await importLayout(context, body);
+      const { layout, version } = row;
+      const location = `/api/v1/layouts/${layout.slug}/versions/${version.number}`;
+      return created(location, presentImport(row, warnings), versionTag(version.change));
+    },
+  }),
+  route({
+    method: 'put',
+    path: '/layouts/:slug/versions/:number',
+    may: 'contributor',
+    tag,
+    summary: 'Change a version of your own that was returned or still waits, and submit it again.',
+    params: ofVersion,
+    body: sentDocument,
+    bodyBytes: limits.layoutBytes,
+    answer: { status: 200, schema: importAnswer, words: 'The version waits for a moderator again.' },
+    problems: ['not-found', 'layout-invalid', 'version-required', 'version-conflict', 'conflict'],
+    handler: async ({ context, params, body, request }) => {
+      const change = requiredVersion(request);
+      const { warnings, ...row } = await resubmitVersion(context, { ...params, change, document: body });
+      return ok(presentImport(row, warnings), versionTag(row.version.change));
+    },
+  }),
+  route({
+    method: 'post',
+    path: '/layout-checks',
+    may: 'guest',
+    tag,
+    summary: 'Check a layout document without storing it: every problem of its form and of its content.',
+    body: sentDocument,
+    bodyBytes: limits.layoutBytes,
+    answer: { status: 200, schema: layoutCheck, words: 'The problems, errors first; none if the list is empty.' },
+    handler: ({ context, body }) => ok(checkLayout(context, body)),
   }),
   route({
     method: 'get',

@@ -15,6 +15,7 @@ const allowances = {
   'sign-up-caller': { points: 60, seconds: hour },
   'mail-address': { points: 5, seconds: hour },
   'mail-caller': { points: 60, seconds: hour },
+  'layout-import': { points: 300, seconds: hour },
   'password-change': { points: 10, seconds: 15 * minute },
 } as const;
 

@@ -1,4 +1,4 @@
-import { Op } from 'sequelize';
+import { Op, type Transaction } from 'sequelize';
 import { z } from 'zod';
 import { readCursor, toPage } from './cursor';
 import type { Context, Platform } from '@/server/context';
@@ -87,10 +87,15 @@ const before = (cursor: string) => {
 };
 
 /** Adds boards and people to versions, in three queries however many they are. */
-export const withPeople = async ({ db }: Platform, versions: readonly LayoutVersion[]): Promise<VersionOf[]> => {
+export const withPeople = async (
+  { db }: Platform,
+  versions: readonly LayoutVersion[],
+  transaction?: Transaction,
+): Promise<VersionOf[]> => {
   const userIds = versions.flatMap(({ authorId, moderatorId }) => [authorId, moderatorId]).filter((id) => id !== null);
-  const layouts = await db.Layout.findAll({ where: { id: unique(versions.map(({ layoutId }) => layoutId)) } });
-  const users = await db.User.findAll({ where: { id: unique(userIds) } });
+  const layoutIds = versions.map(({ layoutId }) => layoutId);
+  const layouts = await db.Layout.findAll({ where: { id: unique(layoutIds) }, transaction });
+  const users = await db.User.findAll({ where: { id: unique(userIds) }, transaction });
   const layoutOf = new Map(layouts.map((layout) => [layout.id, layout]));
   const userOf = new Map<string | null, User>(users.map((user) => [user.id, user]));
   return versions.flatMap((version) => {

@@ -1,5 +1,6 @@
 import { z } from 'zod';
 import { errorCodes, type ErrorCode } from '@/shared/error-codes';
+import { layoutProblem } from '@/shared/layout/problem';
 
 /** One field of a request that cannot be used. */
 export const fieldProblem = z.strictObject({
@@ -20,6 +21,10 @@ export const problemDocument = z.object({
   detail: z.string().optional().describe('What is particular to this occurrence.'),
   requestId: z.string().describe('Name this when asking for help.'),
   fields: z.array(fieldProblem).optional(),
+  problems: z
+    .array(layoutProblem)
+    .optional()
+    .describe('With layout-invalid: everything that is wrong or doubtful in the layout document.'),
 });
 
 export type ProblemDocument = z.output<typeof problemDocument>;

@@ -32,6 +32,15 @@ const table: Record<string, Standing> = {
   'GET /layouts/:slug/versions': 'guest',
   'GET /layouts/:slug/versions/:number': 'guest',
   'GET /me/layout-versions': 'contributor',
+  'POST /layouts': 'contributor',
+  'PUT /layouts/:slug/versions/:number': 'contributor',
+  'POST /layout-checks': 'guest',
+  'GET /reviews': 'moderator',
+  'GET /reviews/:id': 'moderator',
+  'POST /reviews/:id/publish': 'moderator',
+  'POST /reviews/:id/return': 'moderator',
+  'POST /reviews/:id/reject': 'moderator',
+  'POST /layouts/:slug/versions/:number/retire': 'moderator',
 };
 
 const nameOf = ({ method, path }: { method: string; path: string }) => `${method.toUpperCase()} ${path}`;
