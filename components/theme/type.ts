@@ -18,8 +18,10 @@ const variant = (fontFamily: string, fontSize: number, lineHeight: number) =>
 export const textStyles = {
   answer: variant(family.monoBold, 60, 64),
   codeLarge: variant(family.monoBold, 40, 46),
+  codeMedium: variant(family.monoBold, 28, 34),
   code: variant(family.monoBold, 18, 24),
   codeSmall: variant(family.monoBold, 15, 20),
+  key: variant(family.textBold, 24, 30),
   mono: variant(family.mono, 16, 24),
   display: variant(family.textBold, 34, 40),
   title: variant(family.textBold, 27, 33),

@@ -1,0 +1,69 @@
+import { View } from 'react-native';
+import { makeStyles } from '@/components/theme';
+import { Sheet, type SheetProps } from '@/components/ui/sheet';
+import { Text } from '@/components/ui/text';
+import type { Diagnosis } from '@/shared';
+import { GroupMembers } from './group-members';
+import { Headline } from './headline';
+
+const bars: Record<Diagnosis['outcome'], SheetProps['bar']> = {
+  place: 'pencil',
+  group: 'pencil',
+  shared: 'mark',
+  'not-shown': 'tick',
+  unexplained: 'mark',
+  'no-evidence': 'pen',
+};
+
+/** Words over the headline that say what kind of answer it is, where the headline alone may be misread. */
+const kinds: Partial<Record<Diagnosis['outcome'], string>> = {
+  group: 'Cannot be told apart yet',
+  shared: 'A part that many chips share',
+  unexplained: 'No cause fits',
+};
+
+/** Sentences of an answer that stand at once; the rest follows under it. */
+const atOnce = 4;
+
+/** The answer: what to do, how sure that is, and why. */
+export function AnswerCard({ diagnosis }: { diagnosis: Diagnosis }) {
+  const styles = useStyles();
+  const kind = kinds[diagnosis.outcome];
+  const first = diagnosis.sentences.slice(0, atOnce).join(' ');
+  const more = diagnosis.sentences.slice(atOnce);
+  return (
+    <Sheet bar={bars[diagnosis.outcome]} gap="sm" label="Answer">
+      {kind === undefined ? null : (
+        <Text variant="small" tone="soft">
+          {kind}
+        </Text>
+      )}
+      <Headline diagnosis={diagnosis} />
+      {first === '' ? null : <Text>{first}</Text>}
+      {more.length === 0 ? null : (
+        <View style={styles.more}>
+          {more.map((sentence) => (
+            <Text key={sentence} variant="small" tone="soft">
+              {sentence}
+            </Text>
+          ))}
+        </View>
+      )}
+      {diagnosis.groups.map((group) => (
+        <GroupMembers key={group.why} group={group} />
+      ))}
+      {diagnosis.pairs.map(({ parts, labels, probability }) => (
+        <Text key={parts.join()} variant="small">
+          {`Two faults at once are likely: ${labels[0]} and ${labels[1]} (${Math.round(probability * 100)} %).`}
+        </Text>
+      ))}
+      {diagnosis.exact ? null : (
+        <Text variant="fine" tone="soft">
+          {`Not every combination of faults was weighed; what was left out holds at most ${Math.ceil(diagnosis.leftOut * 100)} %.`}
+        </Text>
+      )}
+    </Sheet>
+  );
+}
+
+const useStyles = makeStyles((t) => ({ more: { gap: t.space.xs } }));

@@ -1,0 +1,39 @@
+import { useState } from 'react';
+import { View } from 'react-native';
+import { Button } from '@/components/ui/button';
+import { Panel } from '@/components/ui/panel';
+import { Text } from '@/components/ui/text';
+import type { Diagnosis } from '@/shared';
+import { SuspectEntry } from './suspect-entry';
+
+/** Suspects that stand at once. */
+const atOnce = 4;
+
+/** The suspects in order, each with its reasons. */
+export function SuspectList({ diagnosis, onShow }: { diagnosis: Diagnosis; onShow: (socket: string) => void }) {
+  const [all, setAll] = useState(false);
+  const { suspects } = diagnosis;
+  if (suspects.length === 0) return null;
+  const shown = all ? suspects : suspects.slice(0, atOnce);
+  return (
+    <Panel title="Suspects">
+      <View role="list" aria-label="Suspects">
+        {shown.map((suspect) => (
+          <SuspectEntry key={suspect.id} suspect={suspect} onShow={onShow} />
+        ))}
+      </View>
+      {suspects.length > atOnce ? (
+        <Button
+          kind="quiet"
+          label={all ? 'Show the first only' : `Show ${suspects.length - atOnce} more`}
+          aria-expanded={all}
+          onPress={() => setAll(!all)}
+        />
+      ) : (
+        <Text variant="fine" tone="soft">
+          All others hold less than these together.
+        </Text>
+      )}
+    </Panel>
+  );
+}

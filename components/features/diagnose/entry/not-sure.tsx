@@ -1,0 +1,78 @@
+import { View } from 'react-native';
+import { makeStyles } from '@/components/theme';
+import { Button } from '@/components/ui/button';
+import { Dialog } from '@/components/ui/dialog';
+import { Field } from '@/components/ui/field';
+import { Text } from '@/components/ui/text';
+import type { BenchFormat } from '../bench';
+import { bitsTab, type Entry } from './use-entry';
+
+type NotSureProps = { open: boolean; onClose: () => void; format: BenchFormat; entry: Entry };
+
+const after = {
+  stops: 'The test stops at the first failure, so what comes after it was not tested.',
+  'lists-lanes': 'The test goes on and reports every failing lane. Enter them one after the other.',
+  'lists-banks': 'The test goes on and reports each failing bank once, with all its failing bits.',
+} as const;
+
+/** Help with a code: where it is seen, what it looks like, what nobody knows of it, and the ways round it. */
+export function NotSure({ open, onClose, format, entry }: NotSureProps) {
+  const styles = useStyles();
+  const { definition } = format;
+  return (
+    <Dialog open={open} onClose={onClose} title={definition.name}>
+      {definition.where === undefined ? null : <Part title="Where to look" text={definition.where} />}
+      <Part title="What it looks like" text={`It expects ${entry.code?.prefix.expects ?? 'a code'}.`} />
+      <Part title="What silence means" text={after[definition.after]} />
+      {definition.notes === undefined ? null : <Part title="Remarks" text={definition.notes} />}
+      {format.open.length === 0 ? null : (
+        <View style={styles.part}>
+          <Text variant="strong">What is not known</Text>
+          {format.open.map(([one, other]) => (
+            <Text key={one}>{`Either ${one}, or ${other}.`}</Text>
+          ))}
+          <Text variant="small" tone="soft">
+            Type the code as it is. Both meanings are weighed, and the answer says so; a second report often settles it.
+          </Text>
+        </View>
+      )}
+      <View style={styles.part}>
+        <Text variant="strong">It is a long code, or you have a keyboard</Text>
+        <Field
+          mono
+          multiline
+          label="Type or paste it"
+          value={entry.code?.text ?? ''}
+          onChangeText={entry.setCode}
+          error={entry.code?.prefix.reason ?? undefined}
+        />
+        <Button kind="primary" label="Use this" onPress={onClose} />
+      </View>
+      <View style={styles.part}>
+        <Text variant="strong">You cannot read the code at all</Text>
+        <Text variant="small" tone="soft">
+          If you know which bits fail, from a scope or from another test, mark them instead.
+        </Text>
+        <Button
+          label="Mark failing bits"
+          onPress={() => {
+            entry.chooseTab(bitsTab);
+            onClose();
+          }}
+        />
+      </View>
+    </Dialog>
+  );
+}
+
+function Part({ title, text }: { title: string; text: string }) {
+  const styles = useStyles();
+  return (
+    <View style={styles.part}>
+      <Text variant="strong">{title}</Text>
+      <Text>{text}</Text>
+    </View>
+  );
+}
+
+const useStyles = makeStyles((t) => ({ part: { gap: t.space.xs, alignItems: 'stretch' } }));

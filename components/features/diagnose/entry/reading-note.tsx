@@ -1,0 +1,60 @@
+import { View } from 'react-native';
+import { makeStyles } from '@/components/theme';
+import { Text } from '@/components/ui/text';
+import { lanesWords } from '@/lib';
+import { sentenceCase } from '@/lib/layout/words';
+import type { Bench } from '../bench';
+import type { Entry } from './use-entry';
+
+/** Under the code: why it is impossible, else how it is read, and what was read otherwise than typed. */
+export function ReadingNote({ id, bench, entry }: { id: string; bench: Bench; entry: Entry }) {
+  const styles = useStyles();
+  return (
+    <View id={id} role="status" style={styles.note}>
+      <Words bench={bench} entry={entry} />
+    </View>
+  );
+}
+
+function Words({ bench, entry }: { bench: Bench; entry: Entry }) {
+  const { code, format, refused } = entry;
+  if (refused !== null) return <Problem text={refused} />;
+  if (code === null || format === null || code.text === '') return null;
+  if (code.prefix.reason !== null) return <Problem text={code.prefix.reason} />;
+  if (!code.prefix.complete) return null;
+  const read = format.compiled.read(code.text + code.ghost);
+  if (!read.ok) return <Problem text={read.reason} />;
+  const meanings = read.readings.map(({ failing, takes }) => ({
+    words: sentenceCase(
+      lanesWords(
+        bench.index,
+        failing.map(({ lane }) => lane),
+      ),
+    ),
+    takes: takes.join(', '),
+  }));
+  return (
+    <>
+      {meanings.map(({ words, takes }) => (
+        <Text key={`${words}${takes}`} variant="small">
+          {takes === '' ? `${words}.` : `${words}, if ${takes}.`}
+        </Text>
+      ))}
+      {read.notes.map((note) => (
+        <Text key={note} variant="small" tone="mark">
+          {`${sentenceCase(note)}.`}
+        </Text>
+      ))}
+    </>
+  );
+}
+
+function Problem({ text }: { text: string }) {
+  return (
+    <Text variant="smallStrong" tone="pencil">
+      {text}
+    </Text>
+  );
+}
+
+const useStyles = makeStyles((t) => ({ note: { minHeight: t.text.small.lineHeight, gap: t.space.hair } }));
