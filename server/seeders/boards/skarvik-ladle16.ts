@@ -49,7 +49,10 @@ export const skarvikLadle16: LayoutDocumentInput = {
     windows: [
       {
         range: { from: '0x000000', to: '0x03FFFF' },
-        lanes: [numbers(8, 15), numbers(0, 7)],
+        lanes: [
+          [...numbers(8, 15), 17],
+          [...numbers(0, 7), 16],
+        ],
         banks: ['X', 'Y'],
         interleave: [[1]],
       },
