@@ -1,5 +1,5 @@
 import type { LayoutDocumentInput } from '@/shared';
-import { labelled, lineOfSockets, numbers } from './place';
+import { labelled, lineOfSockets } from './place';
 
 const oddLabels = labelled('K3/', [1, 3, 5, 7, 9, 11, 13, 15]);
 const evenLabels = labelled('K3/', [2, 4, 6, 8, 10, 12, 14, 16]);

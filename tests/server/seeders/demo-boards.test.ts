@@ -90,16 +90,13 @@ describe('every demo board', () => {
     expect(crowded).toEqual([]);
   });
 
-  it.each(boards)(
-    '$slug says where its facts come from and shows a worked example of each format',
-    ({ document }) => {
-      expect(document.sources.length).toBeGreaterThanOrEqual(2);
-      expect(document.examples.every(({ source }) => source !== undefined)).toBe(true);
-      expect(new Set(document.examples.map(({ format }) => format))).toEqual(
-        new Set(document.reportFormats.map(({ id }) => id)),
-      );
-    },
-  );
+  it.each(boards)('$slug says where its facts come from and shows a worked example of each format', ({ document }) => {
+    expect(document.sources.length).toBeGreaterThanOrEqual(2);
+    expect(document.examples.every(({ source }) => source !== undefined)).toBe(true);
+    expect(new Set(document.examples.map(({ format }) => format))).toEqual(
+      new Set(document.reportFormats.map(({ id }) => id)),
+    );
+  });
 });
 
 describe('the demo boards together', () => {
