@@ -47,6 +47,8 @@ export interface AddressMap {
   readonly windows: readonly PreparedWindow[];
   /** The highest last address of this window and those before it, so that a search can stop. */
   readonly reach: readonly number[];
+  /** The windows behind which each bank lies. */
+  readonly byBank: ReadonlyMap<number, readonly PreparedWindow[]>;
 }
 
 function carriedBits(index: LayoutIndex, window: AddressWindow, bank: BankIndex | undefined): BitIndex[][] {
@@ -79,7 +81,13 @@ export function buildAddressMap(index: LayoutIndex): AddressMap {
     .sort((a, b) => a.window.range.from - b.window.range.from);
   let furthest = -1;
   const reach = windows.map(({ window }) => (furthest = Math.max(furthest, window.range.to)));
-  return { index, windows, reach };
+  const byBank = new Map<number, PreparedWindow[]>();
+  for (const window of windows) {
+    for (const bank of new Set(window.banks)) {
+      if (bank !== undefined) byBank.set(bank, [...(byBank.get(bank) ?? []), window]);
+    }
+  }
+  return { index, windows, reach, byBank };
 }
 
 function placeIn(prepared: PreparedWindow, index: LayoutIndex, address: number): WordPlace | null {
@@ -186,7 +194,7 @@ function addressIn(
 
 /** The CPU addresses at which one bit of a word is read: none where no window shows it. */
 export function encodeAddress(map: AddressMap, target: { bank: BankIndex; word: number; bit: number }): AddressOf[] {
-  return map.windows.flatMap((prepared) =>
+  return (map.byBank.get(target.bank) ?? []).flatMap((prepared) =>
     addressIn(prepared, map, target).map((address) => ({
       address: cpuAddress(address),
       register: prepared.window.register ?? null,

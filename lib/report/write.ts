@@ -124,10 +124,10 @@ function writeWord(writer: Writer, part: FieldPart, saying: Saying): Written {
 
 function writeAddress({ context }: Writer, part: FieldPart, { address }: Saying): Written {
   if (address === null) return cannot('no address leads to it');
-  const { windows, digits } = context.index.document.addressMap;
+  const { digits } = context.index.document.addressMap;
   const size = 2 ** part.field.shift;
   const radix = part.radix ?? 16;
-  const top = Math.max(0, ...windows.map(({ range }) => Math.floor(range.to / size)));
+  const top = Math.floor((context.map.reach[context.map.reach.length - 1] ?? 0) / size);
   const usual = part.field.shift === 0 && digits !== undefined ? digits : radix === 10 ? 1 : top.toString(radix).length;
   const text = padded(
     part,
@@ -210,10 +210,7 @@ function sayings({ context }: Writer, lanes: readonly Lane[]): Saying[] {
   const hasAddress = context.fields.some(({ field }) => field.field === 'address') && context.map.windows.length > 0;
   const { bank } = plain;
   if (!hasAddress || bank === null) return [plain];
-  const firstWords = new Set([
-    0,
-    ...context.map.windows.filter(({ banks: behind }) => behind.includes(bank)).map(({ window }) => window.firstWord),
-  ]);
+  const firstWords = new Set([0, ...(context.map.byBank.get(bank) ?? []).map(({ window }) => window.firstWord)]);
   const found = [...firstWords].flatMap((word) =>
     bits.flatMap((bit) =>
       encodeAddress(context.map, { bank, word, bit }).flatMap(({ address }) => {
