@@ -33,7 +33,7 @@ export function diagnose(index: LayoutIndex, runs: readonly Run[], priors: Prior
   );
   const observations = observe(index, runs, compiledFormats(index));
   const parts = listParts(index, timeline, priors);
-  const { posterior, best } = weighAll(parts, observations.interpretations, priors);
+  const { posterior, best, shares } = weighAll(parts, observations.interpretations, priors);
   const findings: Findings = {
     index,
     parts,
@@ -50,7 +50,8 @@ export function diagnose(index: LayoutIndex, runs: readonly Run[], priors: Prior
     suspects: anyFailed ? listSuspects(findings) : [],
     places: anyFailed ? listPlaces(findings) : [],
     lastRun,
-    unexplained: anyFailed ? unexplainedLanes(findings) : [],
+    interpretations: observations.interpretations,
+    unexplained: anyFailed ? unexplainedLanes(findings, explainedFrom * Math.max(...shares)) : [],
   };
   const verdict = decide(weighed);
   const last = lastRun === null ? undefined : best.runs[lastRun];
@@ -91,7 +92,8 @@ function findLast<T>(list: readonly T[], wanted: (item: T) => boolean): number |
   return null;
 }
 
-function unexplainedLanes({ parts, posterior, runs }: Findings): Lane[] {
+/** Where several interpretations remain, the causes of the likeliest hold only its share. */
+function unexplainedLanes({ parts, posterior, runs }: Findings, enough: number): Lane[] {
   const explained = new Map<Lane, number>();
   const wanted = new Set(runs.flatMap((run) => [...run.failing]));
   parts.forEach((part, p) =>
@@ -105,7 +107,7 @@ function unexplainedLanes({ parts, posterior, runs }: Findings): Lane[] {
       }),
     ),
   );
-  return [...wanted].filter((lane) => (explained.get(lane) ?? 0) < explainedFrom).sort((a, b) => a - b);
+  return [...wanted].filter((lane) => (explained.get(lane) ?? 0) < enough).sort((a, b) => a - b);
 }
 
 function laneStates({ index, runs }: Findings, last: RunObservation | undefined): LaneState[] {

@@ -2,6 +2,7 @@ import type { Diagnosis, LaneName, Place, Suspect, SuspectGroup } from '@/shared
 import type { Lane } from '../brand';
 import { bankWords, listWords, sentenceCase } from '../layout/words';
 import { lanesWords, saidAsOne } from './lane-words';
+import type { Interpretation } from './observations';
 import type { Findings } from './suspects';
 
 /** What the evidence as a whole comes to. */
@@ -21,6 +22,8 @@ export interface Weighed {
   readonly places: readonly Place[];
   /** The last run that showed anything, null where none did. */
   readonly lastRun: number | null;
+  /** The ways to understand the evidence; more than one where a convention is unknown. */
+  readonly interpretations: readonly Interpretation[];
   /** Failing lanes that nothing in the model explains well. */
   readonly unexplained: readonly Lane[];
 }
@@ -167,7 +170,8 @@ function membersOf(candidates: readonly Member[], total: number): Member[] {
   const members: Member[] = [];
   let held = 0;
   for (const each of sorted) {
-    if (members.length >= mostMembers || held >= groupHolds * total || each.share < most / 10) break;
+    const tied = each.share > (members.at(-1)?.share ?? Infinity) * 0.99;
+    if (members.length >= mostMembers || each.share < most / 10 || (held >= groupHolds * total && !tied)) break;
     members.push(each);
     held += each.share;
   }
@@ -205,16 +209,21 @@ function groupVerdict(weighed: Weighed, shared: readonly Suspect[]): Verdict {
     holders.length > 1 &&
     members.every((m) => shared.some((s) => s.id === m.id) || holders.some((h) => h.socket === m.label));
   const names = members.map((member) => member.label);
-  const why = held
-    ? `${sentenceCase(lanesWords(findings.index, allFailing(findings)))} ${saidAsOne(findings.index, allFailing(findings)) ? 'fails' : 'fail'}. One chip that never lets go of the line does that, and so does what drives the line: the code cannot tell them apart.`
-    : 'The evidence fits these about equally well.';
-  const check = wentAway(weighed)
-    ? 'Clean the legs and contacts, then let the test run for hours, cold and warm. Swap them back if it does not return.'
+  const open = openConvention(weighed);
+  const why = open
+    ? open
     : held
-      ? `Power off, take out ${listWords(sockets)} one at a time, and run again each time. If the bit comes back in the other banks, the chip that is out held the line. If it never does, look at the line and its driver.`
-      : sockets.length > 1
-        ? `Swap one of ${listWords(sockets)} with a chip of another bit and run again: if the code changes, it was that chip.`
-        : null;
+      ? `${sentenceCase(lanesWords(findings.index, allFailing(findings)))} ${saidAsOne(findings.index, allFailing(findings)) ? 'fails' : 'fail'}. One chip that never lets go of the line does that, and so does what drives the line: the code cannot tell them apart.`
+      : 'The evidence fits these about equally well.';
+  const check = open
+    ? 'Find out how this machine counts: look for a code that names the first or the last, in the manual or by taking out one chip that is known.'
+    : wentAway(weighed)
+      ? 'Clean the legs and contacts, then let the test run for hours, cold and warm. Swap them back if it does not return.'
+      : held
+        ? `Power off, take out ${listWords(sockets)} one at a time, and run again each time. If the bit comes back in the other banks, the chip that is out held the line. If it never does, look at the line and its driver.`
+        : sockets.length > 1
+          ? `Swap one of ${listWords(sockets)} with a chip of another bit and run again: if the code changes, it was that chip.`
+          : null;
   const oneOf = listWords(names, 4).replace(/ and (?=[^,]*$)/, ' or ');
   return {
     outcome: 'group',
@@ -224,6 +233,16 @@ function groupVerdict(weighed: Weighed, shared: readonly Suspect[]): Verdict {
     groups: [{ members, probability, why, check }],
     sockets,
   };
+}
+
+/** What the code means under each convention that remains, null where only one does. */
+function openConvention({ interpretations, findings }: Weighed): string | null {
+  if (interpretations.length < 2) return null;
+  const meanings = interpretations.slice(0, 4).map(({ takes, runs }) => {
+    const lanes = new Set(runs.flatMap((run) => [...run.failing]));
+    return `${takes.join(', ')}: ${lanesWords(findings.index, lanes)}`;
+  });
+  return `It is not known how this machine counts. ${sentenceCase(meanings.join('; '))}.`;
 }
 
 function allFailing(findings: Findings): Lane[] {

@@ -55,15 +55,13 @@ const variable = (positives: number): fc.Arbitrary<HiddenVariable> => {
   );
 };
 
-const model = fc
-  .integer({ min: 1, max: 7 })
-  .chain((positives) =>
-    fc.record({
-      variables: fc.array(variable(positives), { minLength: 1, maxLength: 7 }),
-      positives: fc.constant(positives),
-      leak: fc.constant(0.001),
-    }),
-  );
+const model = fc.integer({ min: 1, max: 7 }).chain((positives) =>
+  fc.record({
+    variables: fc.array(variable(positives), { minLength: 1, maxLength: 7 }),
+    positives: fc.constant(positives),
+    leak: fc.constant(0.001),
+  }),
+);
 
 describe('the posterior of causes, given the lanes that failed', () => {
   it('equals the sum over every combination of causes, to 1e-9', () => {
