@@ -6,7 +6,7 @@ const alias = { '^@/(.*)$': '<rootDir>/$1' };
 
 // d3 ships ES modules only; react-native-web's main field points at ES modules too.
 const transformIgnorePatterns = [
-  'node_modules/(?!((jest-)?react-native|@react-native(-community)?|react-native-web|expo(nent)?|@expo(nent)?/.*|@expo-google-fonts/.*|expo-.*|@expo/.*|d3-.*|internmap|react-native-svg|react-native-.*)/)',
+  'node_modules/(?!((jest-)?react-native|@react-native(-community)?|react-native-web|expo(nent)?|@expo(nent)?/.*|@expo-google-fonts/.*|expo-.*|@expo/.*|d3-.*|internmap|react-native-svg|react-native-.*|standard-navigation|@react-navigation/.*)/)',
 ];
 
 const node = (name) => ({
@@ -39,11 +39,16 @@ module.exports = {
       globalSetup: '<rootDir>/server/scripts/test-database.mjs',
       globalTeardown: '<rootDir>/server/scripts/test-database-stop.mjs',
     },
-    node('browser'),
+    {
+      ...node('browser'),
+      globalSetup: '<rootDir>/server/scripts/test-browser.mjs',
+      globalTeardown: '<rootDir>/server/scripts/test-browser-stop.mjs',
+    },
     {
       ...expoWeb,
       displayName: 'ui',
       testMatch: ['<rootDir>/tests/ui/**/*.test.ts?(x)'],
+      setupFilesAfterEnv: [...(expoWeb.setupFilesAfterEnv ?? []), '<rootDir>/tests/ui/support/setup.ts'],
       moduleNameMapper: { ...expoWeb.moduleNameMapper, ...alias },
       transform: { '\\.mjs$': 'babel-jest', ...expoWeb.transform },
       transformIgnorePatterns,

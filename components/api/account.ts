@@ -39,11 +39,13 @@ export const askToContribute = (body: RoleRequestInput) =>
 /** Signs in; the session is in cookies that the page cannot read. */
 export const signIn = (body: SignInRequest) => request<SessionAnswer>('/sessions', { method: 'POST', body });
 
+const isNotSession = ({ queryKey }: { queryKey: readonly unknown[] }) => queryKey[0] !== sessionQuery.queryKey[0];
+
 /** Takes over the answer of a sign-in: the person is known at once, and what a guest was shown is asked again. */
 export function acceptSession(queryClient: QueryClient, { person }: SessionAnswer): void {
   rememberSignedIn(true);
   queryClient.setQueryData(sessionQuery.queryKey, person);
-  void queryClient.invalidateQueries({ predicate: ({ queryKey }) => queryKey[0] !== sessionQuery.queryKey[0] });
+  void queryClient.invalidateQueries({ predicate: isNotSession });
 }
 
 /** Signs out here. What only this person may see is forgotten at once. */
@@ -53,8 +55,9 @@ export function useSignOut() {
     mutationFn: () => request<void>('/sessions/current', { method: 'DELETE' }),
     onSuccess: () => {
       rememberSignedIn(false);
-      queryClient.clear();
+      // Not clear(): a page that shows the session would go on showing the query that was thrown away.
       queryClient.setQueryData(sessionQuery.queryKey, null);
+      queryClient.removeQueries({ predicate: isNotSession });
     },
   });
 }

@@ -38,7 +38,7 @@ export function Chip({ label, onPress, selected, disabled, ...aria }: ChipProps)
 
 /** The look of a chip, shared with the segmented control. */
 export const useChipStyles = makeStyles((t) => ({
-  row: { flexDirection: 'row', flexWrap: 'wrap', gap: t.space.sm },
+  row: { flexDirection: 'row', flexWrap: 'wrap', flexShrink: 1, maxWidth: '100%', gap: t.space.sm },
   chip: {
     minHeight: t.target,
     minWidth: t.target,

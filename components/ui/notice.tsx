@@ -48,7 +48,7 @@ const useStyles = makeStyles((t) => ({
     borderColor: t.colours.rule,
     borderLeftWidth: t.line.bar,
   },
-  words: { flexGrow: 1, flexShrink: 1, flexBasis: 220, gap: t.space.xs },
+  words: { flexGrow: 1, flexShrink: 1, flexBasis: t.measure.form / 2, gap: t.space.xs },
   action: { flexDirection: 'row', flexWrap: 'wrap', gap: t.space.sm, marginTop: t.space.xs },
   info: { borderLeftColor: t.colours.pen },
   good: { borderLeftColor: t.colours.tick },

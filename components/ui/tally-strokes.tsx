@@ -16,7 +16,7 @@ type TallyStrokesProps = {
 const fiveUpright = ['M6 4 L4.5 26', 'M13 3 L12 26.5', 'M20 4.5 L19.5 26', 'M27 3 L26.5 25.5'];
 const across = 'M1 24 L34 8';
 const apart = 48;
-const box = { width: 84, height: 30 };
+const [boxWidth, boxHeight] = [84, 30] as const;
 
 /** A probability as tally strokes, one a tenth, with the number in words beside them. */
 export function TallyStrokes({ probability, layout = 'above', size = 'md' }: TallyStrokesProps) {
@@ -27,7 +27,7 @@ export function TallyStrokes({ probability, layout = 'above', size = 'md' }: Tal
   return (
     <View style={layout === 'above' ? styles.above : styles.beside}>
       <View aria-hidden style={size === 'lg' ? styles.large : styles.middle}>
-        <Svg width="100%" height="100%" viewBox={`0 0 ${box.width} ${box.height}`}>
+        <Svg width="100%" height="100%" viewBox={`0 0 ${boxWidth} ${boxHeight}`}>
           {/* Faint strokes first, so that the drawn ones lie on top. */}
           {strokes
             .map((stroke, at) => ({ ...stroke, faint: at >= drawn }))
@@ -36,7 +36,7 @@ export function TallyStrokes({ probability, layout = 'above', size = 'md' }: Tal
               <Path
                 key={`${shift}${d}`}
                 d={d}
-                x={shift}
+                transform={`translate(${shift} 0)`}
                 stroke={faint ? colours.ruleStrong : colours.ink}
                 strokeWidth={line.ink}
                 strokeLinecap="round"
@@ -55,6 +55,6 @@ export function TallyStrokes({ probability, layout = 'above', size = 'md' }: Tal
 const useStyles = makeStyles((t) => ({
   above: { alignItems: 'flex-end', gap: t.space.xs },
   beside: { flexDirection: 'row', alignItems: 'center', gap: t.space.sm },
-  middle: { width: box.width, height: box.height },
-  large: { width: box.width * 1.25, height: box.height * 1.25 },
+  middle: { width: t.target * 1.5, aspectRatio: boxWidth / boxHeight },
+  large: { width: t.target * 2, aspectRatio: boxWidth / boxHeight },
 }));

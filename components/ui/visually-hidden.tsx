@@ -1,22 +1,24 @@
 import type { ReactNode } from 'react';
-import { StyleSheet, Text, type TextProps, type ViewStyle } from 'react-native';
+import { Text, type TextProps, type ViewStyle } from 'react-native';
+import { makeStyles } from '@/components/theme';
 
-const styles = StyleSheet.create({
+const useStyles = makeStyles((t) => ({
   hidden: {
     position: 'absolute',
-    width: 1,
-    height: 1,
-    margin: -1,
+    width: t.line.thin,
+    height: t.line.thin,
+    margin: -t.line.thin,
     overflow: 'hidden',
     clipPath: 'inset(50%)',
   } as ViewStyle,
-});
+}));
 
 /** Words for a screen reader only. */
 export function VisuallyHidden({
   children,
   ...rest
 }: { children: ReactNode } & Pick<TextProps, 'id' | 'role' | 'aria-live' | 'aria-level'>) {
+  const styles = useStyles();
   return (
     <Text {...rest} style={styles.hidden}>
       {children}
