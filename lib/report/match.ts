@@ -2,7 +2,7 @@ import type { FormatContext, Part } from './format-context';
 import { matchField } from './match-field';
 import { matchFixedText } from './match-fixed-text';
 import type { FieldMatch, Match, Piece, Stop, Tolerance } from './match-types';
-import { type TypedText, isSpace } from './typed-text';
+import { type TypedText, isSeparator, isSpace } from './typed-text';
 
 export interface MatchResult {
   readonly matches: readonly Match[];
@@ -48,13 +48,12 @@ class Matcher {
   follow(part: number, from: number): boolean {
     const { raw } = this.typed;
     const { parts } = this.context;
-    const gap = this.tolerance.loose || (this.tolerance.fold && (part === 0 || part === parts.length));
-    const at = gap ? skipSpaces(raw, from) : from;
+    const current = parts[part];
+    const at = this.gapBefore(part) ? skipSpaces(raw, from) : from;
     if (at > this.stopAt || (at === this.stopAt && part >= this.stopPart)) {
       this.stopPart = part;
       this.stopAt = at;
     }
-    const current = parts[part];
     if (current === undefined) return at === raw.length && this.keep();
     const key = part * (raw.length + 1) + at;
     if (this.dead?.has(key)) return false;
@@ -72,6 +71,14 @@ class Matcher {
     }
     if (!any) (this.dead ??= new Set()).add(key);
     return any;
+  }
+
+  /** Whether spaces may stand before a part. Fixed text that begins with a space takes them itself. */
+  private gapBefore(part: number): boolean {
+    const { parts } = this.context;
+    const current = parts[part];
+    if (current === undefined || part === 0) return this.tolerance.fold;
+    return this.tolerance.loose && (current.kind === 'field' || !isSeparator(current.text[0]!));
   }
 
   private keep(): true {

@@ -50,7 +50,10 @@ function namedBank(context: FormatContext, match: Match, convention: Convention)
   for (const field of match.fields) {
     const bank = placedBank(context, field, convention);
     if (bank === undefined) continue;
-    if (bank === null) return { reason: bankReason(context, field), at: field.start };
+    if (bank === null) {
+      const count = field.entry === null ? countOf(field, convention) : 0;
+      return { reason: typeof count === 'string' ? count : bankReason(context, field), at: field.start };
+    }
     if (named !== undefined && named !== bank)
       return { reason: noSuchBankHere(context, bank, field.text), at: field.start };
     named = bank;
@@ -122,7 +125,7 @@ function rightOnes({ index }: FormatContext, base: number, { failing, shown }: F
   for (const bit of shown ?? []) {
     if (index.laneExists[base + bit] === 1 && !failing?.some((bad) => bad.bit === bit)) lanes.push(lane(base + bit));
   }
-  return lanes;
+  return lanes.sort((a, b) => a - b);
 }
 
 function readingsAt(context: FormatContext, site: Site, bits: FailingBits, convention: Convention): RawReading[] {
@@ -131,6 +134,7 @@ function readingsAt(context: FormatContext, site: Site, bits: FailingBits, conve
   if (bits.failing === null) return anyBitOf(context, site, takes);
   const failing: FailingLane[] = [];
   for (const { bit, reads } of bits.failing) failing.push({ lane: lane(base + bit), reads });
+  failing.sort((a, b) => a.lane - b.lane);
   const shown = rightOnes(context, base, bits);
   return [{ failing, shown, showsWord: bits.shown !== null, address: site.address, takes }];
 }
