@@ -43,6 +43,8 @@ export function nextChecks(input: CheckInput): NextCheck[] {
       return [probe(verdict)];
     case 'group': {
       if (wentAway(weighed)) return [soak(verdict)];
+      if (weighed.interpretations.length > 1)
+        return [{ ...readAgain(), label: verdict.groups[0]?.check ?? readAgain().label }];
       const inTurn = pullInTurn(input);
       return inTurn ? [inTurn] : [readAgain()];
     }

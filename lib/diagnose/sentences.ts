@@ -2,7 +2,7 @@ import type { Lane } from '../brand';
 import { sentenceCase } from '../layout/words';
 import { lanesWords, saidAsOne } from './lane-words';
 import type { Observations } from './observations';
-import { wentAway, type Verdict, type Weighed } from './verdict';
+import { openConvention, wentAway, type Verdict, type Weighed } from './verdict';
 
 export interface Told {
   readonly weighed: Weighed;
@@ -28,7 +28,10 @@ export function tell(told: Told): string[] {
   const gone = wentAway(weighed);
   const shown = gone ? lastFailing(weighed) : lastRun;
   const run = findings.runs[shown];
-  if (run && run.failing.size > 0) {
+  const open = openConvention(weighed);
+  if (open) {
+    sentences.push(open);
+  } else if (run && run.failing.size > 0) {
     const failed = sentenceCase(lanesWords(findings.index, run.failing));
     const alone = run.failing.size === 1 && run.passed.size > 0 ? ' alone' : '';
     const verb = gone ? 'failed' : saidAsOne(findings.index, run.failing) ? 'fails' : 'fail';
@@ -66,11 +69,6 @@ export function tell(told: Told): string[] {
   }
   if (unexplained.length > 0)
     sentences.push(`No single cause explains ${lanesWords(findings.index, unexplained)} well.`);
-  if (observations.interpretations.length > 1) {
-    sentences.push(
-      `How this machine counts is not known, so the code has ${observations.interpretations.length} meanings; all are weighed here.`,
-    );
-  }
   if (told.leftOut > 1e-3) {
     sentences.push(
       `Combinations of many faults at once were left out; together they hold at most ${percent(Math.min(1, told.leftOut))}.`,

@@ -32,7 +32,7 @@ export interface Weighed {
 const leads = 0.5;
 /** Members of a group hold together this share of the probability; none below a tenth of the first. */
 const groupHolds = 0.95;
-const mostMembers = 8;
+const mostMembers = 24;
 
 /** The words for a probability. `capped` where the evidence cannot prove more, such as a fault that went away. */
 export function sureWords(probability: number, capped: boolean): Diagnosis['sure'] {
@@ -192,10 +192,7 @@ function groupVerdict(weighed: Weighed, shared: readonly Suspect[]): Verdict {
       share: suspect.probability,
     })),
   ];
-  const total = Math.min(
-    1,
-    candidates.reduce((sum, each) => sum + each.share, 0),
-  );
+  const total = candidates.reduce((sum, each) => sum + each.share, 0);
   const members = membersOf(candidates, total);
   const probability = Math.min(
     1,
@@ -227,7 +224,12 @@ function groupVerdict(weighed: Weighed, shared: readonly Suspect[]): Verdict {
   const oneOf = listWords(names, 4).replace(/ and (?=[^,]*$)/, ' or ');
   return {
     outcome: 'group',
-    headline: wentAway(weighed) ? `Not repaired yet: suspect ${oneOf}.` : `One of ${oneOf}.`,
+    headline:
+      held && !open
+        ? heldHeadline(weighed, members, sockets)
+        : wentAway(weighed)
+          ? `Not repaired yet: suspect ${oneOf}.`
+          : `One of ${oneOf}.`,
     sure: 'not sure',
     probability,
     groups: [{ members, probability, why, check }],
@@ -235,8 +237,15 @@ function groupVerdict(weighed: Weighed, shared: readonly Suspect[]): Verdict {
   };
 }
 
+function heldHeadline({ findings }: Weighed, members: readonly Member[], sockets: readonly string[]): string {
+  const drivers = members.map((member) => member.label).filter((label) => !sockets.includes(label));
+  const chips = `one of ${sockets.length} chips that holds the line`;
+  const line = sentenceCase(lanesWords(findings.index, allFailing(findings)));
+  return `${line}: ${[...drivers.slice(0, 2), chips].join(', or ')}.`;
+}
+
 /** What the code means under each convention that remains, null where only one does. */
-function openConvention({ interpretations, findings }: Weighed): string | null {
+export function openConvention({ interpretations, findings }: Weighed): string | null {
   if (interpretations.length < 2) return null;
   const meanings = interpretations.slice(0, 4).map(({ takes, runs }) => {
     const lanes = new Set(runs.flatMap((run) => [...run.failing]));
