@@ -1,5 +1,1 @@
-import { Page } from '@/components/ui/page';
-
-export default function Route() {
-  return <Page title="What did the board report?">{null}</Page>;
-}
+export { LookupScreen as default } from '@/components/features/lookup/lookup-screen';

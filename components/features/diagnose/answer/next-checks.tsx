@@ -85,10 +85,14 @@ export function doneOf({ action, sockets }: NextCheck): { label: string; changes
     case 'replace':
       if (one === undefined) return null;
       return { label: 'I fitted a good chip', changes: [{ kind: 'replace', socket: one, with: 'known-good' }] };
+    case 'reseat':
+      if (one === undefined) return null;
+      return { label: 'I reseated it', changes: [{ kind: 'reseat', socket: one }] };
     case 'read-again':
       return { label: 'I ran it again', changes: [] };
     case 'soak':
       return { label: 'It has run', changes: sockets.map((socket): Change => ({ kind: 'reseat', socket })) };
+    case 'measure':
     case 'probe':
     case 'pull-in-turn':
       return null;

@@ -1,0 +1,125 @@
+import { useId, useState, type ReactNode } from 'react';
+import { ScrollView, View } from 'react-native';
+import { makeStyles } from '@/components/theme';
+import { Button } from '@/components/ui/button';
+import { SegmentedControl } from '@/components/ui/segmented-control';
+import { Text } from '@/components/ui/text';
+import type { WorkspaceModel } from '../use-workspace-model';
+import { runTitle } from '../evidence-words';
+import { runInHand } from '../workspace-runs';
+import { BitsEntry } from './bits-entry';
+import { CodeDisplay } from './code-display';
+import { CodeKeys } from './code-keys';
+import { EnteredList } from './entered-list';
+import { NotSure } from './not-sure';
+import { PassEntry } from './pass-entry';
+import { ReadingNote } from './reading-note';
+import { bitsTab, passTab } from './use-entry';
+
+type EntryPanelProps = {
+  model: WorkspaceModel;
+  /** What stands between the code and the keys: on a phone the sketch. */
+  between?: ReactNode;
+  /** Holds the keys at the foot of the screen, under the thumb. */
+  keysAtFoot?: boolean;
+};
+
+/** What did the board report? The format, the code, and the keys that the format can take. */
+export function EntryPanel({ model, between, keysAtFoot = false }: EntryPanelProps) {
+  const styles = useStyles();
+  const { bench, workspace, entry } = model;
+  const noteId = useId();
+  const expectsId = useId();
+  const [unsure, setUnsure] = useState(false);
+  const { format, code } = entry;
+  const tabs = [
+    ...bench.formats.map(({ definition }) => ({ value: definition.id, label: definition.name })),
+    { value: bitsTab, label: 'Failing bits' },
+    { value: passTab, label: 'All passed' },
+  ];
+  const choice = (
+    <SegmentedControl label="How it was reported" options={tabs} value={entry.tab} onChange={entry.chooseTab} />
+  );
+  return (
+    <View style={styles.panel}>
+      <View style={styles.top}>
+        <EntryTitle model={model} />
+        {keysAtFoot ? (
+          <ScrollView horizontal showsHorizontalScrollIndicator={false} contentContainerStyle={styles.tabs}>
+            {choice}
+          </ScrollView>
+        ) : (
+          choice
+        )}
+        <EnteredList model={model} />
+        {format !== null && code !== null ? (
+          <View>
+            <CodeDisplay
+              format={format.compiled}
+              code={code}
+              onChange={entry.setCode}
+              onSubmit={() => entry.submit(entry.lists && !entry.editing ? 'more' : 'answer')}
+              describedBy={`${expectsId} ${noteId}`}
+            />
+            <View style={styles.expects}>
+              <Text id={expectsId} variant="small" tone="soft" style={styles.words}>
+                {code.prefix.expects}
+              </Text>
+              <Button kind="quiet" label="Not sure?" aria-haspopup="dialog" onPress={() => setUnsure(true)} />
+            </View>
+            <ReadingNote id={noteId} bench={bench} entry={entry} />
+            <NotSure open={unsure} onClose={() => setUnsure(false)} format={format} entry={entry} />
+          </View>
+        ) : null}
+        {entry.tab === bitsTab ? (
+          <BitsEntry document={bench.document} bits={entry.bits} onChange={entry.setBits} />
+        ) : null}
+        {entry.tab === passTab ? <PassEntry document={bench.document} onPass={entry.pass} /> : null}
+        {workspace.runs.length > 0 ? <EditActions model={model} /> : null}
+      </View>
+      {between}
+      {entry.tab === passTab ? null : <CodeKeys entry={entry} atFoot={keysAtFoot} />}
+    </View>
+  );
+}
+
+function EntryTitle({ model: { workspace } }: { model: WorkspaceModel }) {
+  const { runs, step } = workspace;
+  const place = step.at === 'entry' ? step.place : null;
+  const at = place?.run ?? runInHand(runs);
+  const run = runs[at];
+  const later = at > 0 || (run?.evidence.length ?? 0) > 0;
+  return (
+    <View>
+      {run !== undefined && later ? (
+        <Text variant="small" tone="soft">
+          {`Run ${runTitle(run, at)}`}
+        </Text>
+      ) : null}
+      <Text variant="title">
+        {place !== null ? 'What did it report?' : later ? 'What does it report now?' : 'What did the board report?'}
+      </Text>
+    </View>
+  );
+}
+
+/** The ways out of typing where there is an answer to go back to. */
+function EditActions({ model: { workspace, entry, diagnosis } }: { model: WorkspaceModel }) {
+  const styles = useStyles();
+  if (diagnosis.evidence.length === 0) return null;
+  return (
+    <View style={styles.row}>
+      <Button kind="quiet" label="Back to the answer" onPress={() => workspace.goTo({ at: 'answer' })} />
+      {entry.editing ? <Button kind="danger" label="Take this report out" onPress={entry.remove} /> : null}
+    </View>
+  );
+}
+
+const useStyles = makeStyles((t) => ({
+  panel: { gap: t.space.lg, flexGrow: 1 },
+  top: { gap: t.space.md },
+  tabs: { paddingVertical: t.space.hair },
+  expects: { flexDirection: 'row', alignItems: 'center', justifyContent: 'space-between', gap: t.space.sm },
+  words: { flexShrink: 1 },
+  row: { flexDirection: 'row', flexWrap: 'wrap', gap: t.space.sm },
+}));

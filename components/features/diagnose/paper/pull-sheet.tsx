@@ -1,0 +1,222 @@
+import { View } from 'react-native';
+import { BoardSketch } from '@/components/board/board-sketch';
+import type { SketchMarks, SketchView } from '@/components/board/sketch-types';
+import { makeStyles } from '@/components/theme';
+import { createDomElement } from '@/components/ui/dom-element';
+import { percentWords } from '@/components/ui/percent';
+import { Text } from '@/components/ui/text';
+import { Wordmark } from '@/components/features/shell/wordmark';
+import type { Diagnosis, Run } from '@/shared';
+import { suspectKind, suspectName } from '../answer/suspect-words';
+import type { Bench } from '../bench';
+import { evidenceWords, runTitle } from '../evidence-words';
+import { pullSteps } from './pull-steps';
+
+type PullSheetProps = {
+  bench: Bench;
+  runs: readonly Run[];
+  diagnosis: Diagnosis;
+  marks: SketchMarks;
+  view: SketchView;
+};
+
+/** Suspects, and pieces of evidence of a run, that fit on one page. */
+const mostSuspects = 4;
+const mostEvidence = 8;
+
+/** One page for the bench: what was reported, what to pull, how sure, the steps, and blanks to fill in by hand. */
+export function PullSheet({ bench, runs, diagnosis, marks, view }: PullSheetProps) {
+  const styles = useStyles();
+  const { board, rails } = bench.document;
+  return (
+    <View aria-hidden dataSet={{ paper: 'pull-sheet' }} style={styles.page}>
+      {createDomElement('style', { children: paperRules })}
+      <View style={styles.head}>
+        <View style={styles.words}>
+          <Text variant="heading" level={1}>{`${board.maker} ${board.name}, revision ${board.revision}`}</Text>
+          <Text variant="small">Pull sheet. Compare the revision with the board before you pull anything.</Text>
+        </View>
+        <Wordmark />
+      </View>
+      <View style={styles.blanks}>
+        <Blank label="Date" />
+        <Blank label="Technician" />
+        <Blank label="Serial number" />
+      </View>
+      <View style={styles.answer}>
+        <Text variant="title" level={2}>
+          {diagnosis.headline}
+        </Text>
+        <Text variant="small">
+          {diagnosis.probability === null ? '' : `${percentWords(diagnosis.probability)}. `}
+          {diagnosis.sentences.slice(0, 4).join(' ')}
+        </Text>
+      </View>
+      <View style={styles.columns}>
+        <View style={styles.left}>
+          <BoardSketch
+            {...{ index: bench.index, marks, view: { ...view, table: false, zoom: 'whole' } }}
+            onView={ignore}
+            print
+            compact={false}
+            showControls={false}
+            greatestHeight={330}
+          />
+        </View>
+        <View style={styles.right}>
+          <Reported bench={bench} runs={runs} />
+          <Suspects diagnosis={diagnosis} />
+        </View>
+      </View>
+      <View style={styles.columns}>
+        <View style={styles.left}>
+          <Text variant="smallStrong" level={3}>
+            Steps
+          </Text>
+          {pullSteps(bench, diagnosis).map((step) => (
+            <View key={step} style={styles.step}>
+              <View style={styles.box} />
+              <Text variant="small" style={styles.words}>
+                {step}
+              </Text>
+            </View>
+          ))}
+        </View>
+        <View style={styles.right}>
+          <Text variant="smallStrong" level={3}>
+            Measured at the socket
+          </Text>
+          {rails.slice(0, 6).map(({ name, pins }) => (
+            <Blank key={name} label={`${name}, pin ${pins.join(' and ')}`} />
+          ))}
+          {rails.length === 0 ? <Blank label="Supply" /> : null}
+        </View>
+      </View>
+      <View style={styles.cautions}>
+        {diagnosis.cautions.map(({ id, text }) => (
+          <Text key={id} variant="fine">
+            {text}
+          </Text>
+        ))}
+        <Text variant="fine">The equipment’s service manual and local rules come first.</Text>
+      </View>
+    </View>
+  );
+}
+
+// Until it is printed the sheet lies beside the page, where the sketch can measure itself.
+const paperRules = `
+@page { margin: 12mm; }
+@media print { [data-paper] { position: static !important; width: auto !important; } }
+`;
+
+const ignore = () => undefined;
+
+function Reported({ bench, runs }: { bench: Bench; runs: readonly Run[] }) {
+  return (
+    <View>
+      <Text variant="smallStrong" level={3}>
+        What it reported
+      </Text>
+      {runs.map((run, at) => (
+        <View key={at}>
+          <Text variant="small">{runTitle(run, at)}</Text>
+          {run.evidence.slice(0, mostEvidence).map((seen, index) => {
+            const { text, note } = evidenceWords(seen, bench.formatName);
+            return (
+              <Text key={index} variant="codeSmall">
+                {text}
+                <Text variant="fine">{`  ${note}`}</Text>
+              </Text>
+            );
+          })}
+          {run.evidence.length > mostEvidence ? (
+            <Text variant="fine">{`and ${run.evidence.length - mostEvidence} more`}</Text>
+          ) : null}
+        </View>
+      ))}
+    </View>
+  );
+}
+
+function Suspects({ diagnosis }: { diagnosis: Diagnosis }) {
+  const styles = useStyles();
+  if (diagnosis.suspects.length === 0) return null;
+  return (
+    <View style={styles.suspects}>
+      <Text variant="smallStrong" level={3}>
+        Suspects
+      </Text>
+      {diagnosis.suspects.slice(0, mostSuspects).map((suspect) => (
+        <View key={suspect.id} style={styles.suspect}>
+          <Text variant="codeSmall">{`${suspect.rank}  ${suspectName(suspect)}`}</Text>
+          <Text variant="small" style={styles.words}>
+            {suspectKind(suspect)}
+          </Text>
+          <Text variant="smallStrong">{percentWords(suspect.probability)}</Text>
+        </View>
+      ))}
+    </View>
+  );
+}
+
+function Blank({ label }: { label: string }) {
+  const styles = useStyles();
+  return (
+    <View style={styles.blank}>
+      <Text variant="fine">{label}</Text>
+      <View style={styles.line} />
+    </View>
+  );
+}
+
+const useStyles = makeStyles((t) => ({
+  page: {
+    gap: t.space.md,
+    position: 'absolute',
+    top: 0,
+    left: -t.measure.page * 2,
+    width: t.measure.prose,
+    backgroundColor: t.colours.sheet,
+  },
+  head: {
+    flexDirection: 'row',
+    justifyContent: 'space-between',
+    alignItems: 'flex-end',
+    gap: t.space.lg,
+    paddingBottom: t.space.sm,
+    borderBottomWidth: t.line.ink,
+    borderBottomColor: t.colours.ink,
+  },
+  words: { flex: 1, minWidth: 0 },
+  blanks: { flexDirection: 'row', gap: t.space.lg },
+  blank: {
+    flexGrow: 1,
+    flexBasis: 0,
+    flexDirection: 'row',
+    alignItems: 'flex-end',
+    gap: t.space.sm,
+    minHeight: t.space.xl,
+  },
+  line: { flex: 1, minWidth: t.space.huge, borderBottomWidth: t.line.thin, borderBottomColor: t.colours.ink },
+  answer: { gap: t.space.xs, paddingVertical: t.space.sm },
+  columns: { flexDirection: 'row', gap: t.space.xl },
+  left: { flexBasis: 0, flexGrow: 5, minWidth: 0, gap: t.space.xs },
+  right: { flexBasis: 0, flexGrow: 3, minWidth: 0, gap: t.space.sm },
+  suspects: { gap: t.space.xs },
+  suspect: { flexDirection: 'row', alignItems: 'baseline', gap: t.space.sm },
+  step: { flexDirection: 'row', gap: t.space.sm, alignItems: 'flex-start' },
+  box: {
+    width: t.space.lg,
+    height: t.space.lg,
+    marginTop: t.space.hair,
+    borderWidth: t.line.thin,
+    borderColor: t.colours.ink,
+  },
+  cautions: {
+    gap: t.space.hair,
+    paddingTop: t.space.sm,
+    borderTopWidth: t.line.thin,
+    borderTopColor: t.colours.ink,
+  },
+}));

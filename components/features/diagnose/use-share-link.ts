@@ -1,0 +1,26 @@
+import { useCallback } from 'react';
+import { useAnnouncer } from '@/components/ui/announcer';
+
+/** Hands the link of the page on: by the device's own sheet where it has one, else to the clipboard. */
+export function useShareLink(title: string): () => void {
+  const { toast } = useAnnouncer();
+  return useCallback(() => {
+    const url = window.location.href;
+    const copy = () =>
+      navigator.clipboard.writeText(url).then(
+        () => toast({ kind: 'good', text: 'The link is copied. It holds the whole look-up.' }),
+        () => toast({ kind: 'problem', text: 'The link cannot be copied here. Copy it from the address bar.' }),
+      );
+    // Only phones have a sheet that is better than the clipboard.
+    const byHand = window.matchMedia?.('(pointer: coarse)').matches && typeof navigator.share === 'function';
+    if (!byHand) {
+      void (navigator.clipboard
+        ? copy()
+        : Promise.resolve(toast({ kind: 'problem', text: 'Copy the link from the address bar.' })));
+      return;
+    }
+    navigator.share({ title, url }).catch((error: unknown) => {
+      if (!(error instanceof DOMException && error.name === 'AbortError')) void copy();
+    });
+  }, [title, toast]);
+}

@@ -1,0 +1,62 @@
+import { View } from 'react-native';
+import { useShowBoardInHeader } from '@/components/features/shell/current-board';
+import { rememberBoard } from '@/components/features/lookup/device-boards';
+import { Notice } from '@/components/ui/notice';
+import { Page } from '@/components/ui/page';
+import { ApiProblem } from '@/components/api/problem';
+import { boardName } from '@/components/api/layouts';
+import { useEffect } from 'react';
+import { SocketPanel } from './answer/socket-panel';
+import type { Bench } from './bench';
+import { PullSheet } from './paper/pull-sheet';
+import { usePrint } from './paper/use-print';
+import { useKeepAwake } from './use-keep-awake';
+import { useWorkspace } from './use-workspace';
+import { useWorkspaceModel } from './use-workspace-model';
+import { WorkspaceColumns } from './workspace-columns';
+
+type WorkspaceScreenProps = { bench: Bench; fromDevice: boolean; error: Error | null };
+
+/** The workspace of a board that is there. */
+export function WorkspaceScreen({ bench, fromDevice, error }: WorkspaceScreenProps) {
+  const { board } = bench.document;
+  const workspace = useWorkspace();
+  const model = useWorkspaceModel(bench, workspace);
+  const { printing, print } = usePrint();
+  const short = `${board.name}, rev ${board.revision}`;
+  const { slug } = workspace;
+  useKeepAwake();
+  useShowBoardInHeader(short, slug);
+  useEffect(() => rememberBoard({ slug, name: boardName(board) }), [slug, board]);
+
+  const { runs, diagnosis, marks, view } = { runs: workspace.runs, ...model };
+  const title = diagnosis.outcome === 'no-evidence' ? short : `${diagnosis.headline} ${short}`;
+  return (
+    <Page title={title} hideTitle width="full">
+      <View dataSet={{ print: 'hide' }}>
+        {workspace.problems.length === 0 ? null : (
+          <Notice kind="problem" live title="Not all of this link could be read. What could be is kept.">
+            {workspace.problems.slice(0, 3).join(' ')}
+          </Notice>
+        )}
+        {fromDevice && error instanceof ApiProblem && error.status === 404 ? (
+          <Notice kind="warning" title="This board is no longer published.">
+            You see the copy that is kept on this device.
+          </Notice>
+        ) : null}
+      </View>
+      <View dataSet={{ print: 'hide' }} style={{ flexGrow: 1 }}>
+        <WorkspaceColumns model={model} onPrint={print} />
+      </View>
+      <SocketPanel
+        bench={bench}
+        slug={slug}
+        diagnosis={diagnosis}
+        socket={model.opened}
+        onClose={() => model.open(null)}
+        onChange={model.beginChange}
+      />
+      {printing ? <PullSheet {...{ bench, runs, diagnosis, marks, view }} /> : null}
+    </Page>
+  );
+}
