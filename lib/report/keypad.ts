@@ -110,7 +110,7 @@ function deadReason({ reader }: Keypad, states: readonly PrefixState[]): string 
         case 'mask':
           return maskReason(match, bits);
         case 'address':
-          return addressReason(context, text, numberOf(text, field.part.radix ?? 16) * 2 ** field.part.field.shift)
+          return addressReason(context, match, numberOf(text, field.part.radix ?? 16) * 2 ** field.part.field.shift)
             .reason;
         default:
           return null;

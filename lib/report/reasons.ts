@@ -1,14 +1,6 @@
+import type { AddressWindow } from '@/shared';
 import type { BankIndex, Lane } from '../brand';
-import {
-  addressWords,
-  bankWords,
-  bitName,
-  bitWords,
-  listWords,
-  numbersWords,
-  rangeWords,
-  sentenceCase,
-} from '../layout/words';
+import { bankWords, bitName, bitWords, listWords, numbersWords, rangeWords, sentenceCase } from '../layout/words';
 import type { FieldPart, FormatContext } from './format-context';
 import { bitsOfField } from './format-context';
 import type { FieldMatch, Stop } from './match-types';
@@ -71,16 +63,8 @@ function digitRange(context: FormatContext, part: FieldPart): string {
 
 function addressRange({ index }: FormatContext, part: FieldPart): string {
   const { windows } = index.document.addressMap;
-  const size = 2 ** part.field.shift;
-  const ends = [Math.min(...windows.map(({ range }) => range.from)), Math.max(...windows.map(({ range }) => range.to))];
-  const radix = part.radix ?? 16;
-  const [from, to] = ends.map((end) =>
-    Math.floor(end / size)
-      .toString(radix)
-      .toUpperCase(),
-  );
-  const width = Math.max(to!.length, radix === 10 ? 1 : (part.field.digits?.min ?? 1));
-  return `${from!.padStart(width, '0')} to ${to!.padStart(width, '0')}`;
+  const from = Math.min(...windows.map(({ range }) => range.from));
+  return spanWords(part, { from, to: Math.max(...windows.map(({ range }) => range.to)) });
 }
 
 /** What a field takes, without its noun: "A to D", "0 to 7". Empty where nothing short can be said. */
@@ -202,19 +186,29 @@ export function noSuchBankHere({ index }: FormatContext, bank: BankIndex, text: 
 /** What an address outside every window belongs to, or which window is nearest. */
 export function addressReason(
   { index }: FormatContext,
-  text: string,
+  { part, text }: Pick<FieldMatch, 'part' | 'text'>,
   address: number,
 ): { readonly reason: string; readonly known: boolean } {
   const { addressMap } = index.document;
   const elsewhere = addressMap.elsewhere.find(({ range }) => address >= range.from && address <= range.to);
   if (elsewhere !== undefined) return { reason: sentence(`${text}: ${elsewhere.means}`), known: true };
-  const away = ({ range }: (typeof addressMap.windows)[number]) =>
+  const away = ({ range }: AddressWindow) =>
     address < range.from ? range.from - address : Math.max(0, address - range.to);
   const nearest = [...addressMap.windows].sort((a, b) => away(a) - away(b))[0];
   if (nearest === undefined) return { reason: `${text}: this layout has no address windows.`, known: false };
-  const [from, to] = [nearest.range.from, nearest.range.to].map((end) => addressWords(addressMap, end));
-  const where = `The nearest is ${from} to ${to}, ${bankListWords(nearest.banks)}.`;
+  const where = `The nearest is ${spanWords(part, nearest.range)}, ${bankListWords(nearest.banks)}.`;
   return { reason: `${text} is outside this board's memory. ${where}`, known: false };
+}
+
+/** A span of addresses as the code writes them. */
+function spanWords({ field, radix }: FieldPart, range: AddressWindow['range']): string {
+  const written = [range.from, range.to].map((end) =>
+    Math.floor(end / 2 ** field.shift)
+      .toString(radix ?? 16)
+      .toUpperCase(),
+  );
+  const width = field.digits?.min ?? (radix === 10 ? 1 : written[1]!.length);
+  return written.map((end) => end.padStart(width, '0')).join(' to ');
 }
 
 function bankListWords(ids: readonly string[]): string {

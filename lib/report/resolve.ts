@@ -66,7 +66,7 @@ function addressSites(context: FormatContext, field: FieldMatch, named: BankInde
   const value = field.entry?.value ?? numberOf(field.text, field.part.radix ?? 10);
   const from = value * size;
   const places = decodeSpan(context.map, from, from + size - 1);
-  if (places.length === 0) return { ...addressReason(context, field.text, from), at: field.start };
+  if (places.length === 0) return { ...addressReason(context, field, from), at: field.start };
   const fitting = named === undefined ? places : places.filter((place) => place.bank === named);
   if (fitting.length === 0) return { reason: noSuchBankHere(context, named!, field.text), at: field.start };
   const banks = new Set(fitting.map((place) => place.bank));
