@@ -1,16 +1,27 @@
+const { request } = require('node:http');
 const { getDefaultConfig } = require('expo/metro-config');
 
 const config = getDefaultConfig(__dirname);
-const resolveBefore = config.resolver.resolveRequest;
 
-// zod brings the words of its errors in some fifty languages; the client speaks English only.
-const zodLocales = /^\.\.\/locales\/index\.(js|cjs)$/;
+// In development the bundler serves the page and hands the API on, so that both are one origin, as in the product.
+const apiPort = process.env.ROWCALL_API_PORT;
 
-config.resolver.resolveRequest = (context, name, platform) => {
-  const resolve = resolveBefore ?? context.resolveRequest;
-  const wanted =
-    zodLocales.test(name) && /[\\/]zod[\\/]/.test(context.originModulePath) ? name.replace('index', 'en') : name;
-  return resolve(context, wanted, platform);
+const handOn = (incoming, outgoing) => {
+  const { method, headers, url } = incoming;
+  const onward = request({ host: '127.0.0.1', port: apiPort, method, headers, path: url }, (answer) => {
+    outgoing.writeHead(answer.statusCode ?? 502, answer.headers);
+    answer.pipe(outgoing);
+  });
+  onward.on('error', () => {
+    if (!outgoing.headersSent) outgoing.writeHead(503, { 'Content-Type': 'text/plain' });
+    outgoing.end('The server is starting. Try again in a moment.\n');
+  });
+  incoming.pipe(onward);
 };
+
+if (apiPort) {
+  config.server.enhanceMiddleware = (bundler) => (incoming, outgoing, next) =>
+    /^\/(api|dev)\//.test(incoming.url) ? handOn(incoming, outgoing) : bundler(incoming, outgoing, next);
+}
 
 module.exports = config;

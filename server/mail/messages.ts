@@ -48,7 +48,7 @@ export const passwordChangedMail = (config: Config, to: Recipient): Mail =>
   ]);
 
 /** Tells the answer to a request for the role of contributor. */
-export const roleDecisionMail = (config: Config, to: Recipient, granted: boolean): Mail =>
+export const roleDecisionMail = (config: Config, to: Recipient, { granted }: { granted: boolean }): Mail =>
   letter(to, granted ? 'You are a contributor now' : 'Your request to contribute', [
     granted
       ? `you can now document boards for others: ${config.publicUrl}/contribute`

@@ -1,4 +1,4 @@
-import { z } from 'zod';
+import type { z } from 'zod';
 import { AppError } from '@/server/errors';
 
 /** Where a page of a list ended: the values that the list is sorted by, in a text that only we read. */

@@ -93,6 +93,6 @@ export const decideRoleRequest = (
     await request.update({ state: decision, openFor: null, decidedBy: by.userId, decidedAt: now() }, { transaction });
     const subject = { kind: 'user', id: person.id };
     await recordAct(context, { act: `role-request-${decision}`, subject, detail: { request: id } }, transaction);
-    await queueMail(context, roleDecisionMail(config, person, granted), transaction);
+    await queueMail(context, roleDecisionMail(config, person, { granted }), transaction);
     return { request, person };
   });

@@ -19,7 +19,6 @@ export const newPassword = z
   .normalize('NFKC')
   .min(10, 'At least 10 characters.')
   .refine((text) => new TextEncoder().encode(text).length <= passwordBytes, 'At most 72 bytes.')
-  // eslint-disable-next-line no-control-regex
   .regex(/^[^\u0000-\u001f\u007f]*$/, 'Control characters are not allowed.');
 
 /** A password as it is given to be checked: nothing is said about its form. */

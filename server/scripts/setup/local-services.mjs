@@ -19,9 +19,9 @@ export const demoAccounts = ['technician', 'contributor', 'moderator', 'owner'].
 
 /**
  * Starts the database, the mail catcher and the object store of a development machine, all on loopback with their
- * data in `folder`, and returns the environment for the server. Variables that are set already win.
+ * data in `folder`, and returns the environment for the server. The variables of `set` win.
  */
-export const startLocalServices = async ({ folder, port, stops }) => {
+export const startLocalServices = async ({ folder, port, stops, set }) => {
   const secrets = keptSecrets(folder);
   const ports = await keptPorts(folder);
   const database = await startMariadb({
@@ -55,7 +55,7 @@ export const startLocalServices = async ({ folder, port, stops }) => {
     DEMO_PASSWORD: demoPassword,
     LOG_LEVEL: 'warn',
     AWS_SDK_JS_NODE_VERSION_SUPPORT_WARNING_DISABLED: 'true',
-    ...process.env,
+    ...set,
   };
   return { env, database };
 };

@@ -27,14 +27,12 @@ const own = (user, ...paths) => {
   if (user) spawnSync('chown', ['-R', `${user}:`, ...paths]);
 };
 
-/** The last complaints of MariaDB in its log, for a message of one line. */
+/** What MariaDB complained of in its log, for a message of one line: a full disk, or the first error. */
 const complaint = (log) => {
   const text = existsSync(log) ? readFileSync(log, 'utf8') : '';
   const errors = text.split('\n').filter((line) => line.includes('[ERROR]'));
-  return (errors.find((line) => /space|errno: 28/i.test(line)) ?? errors.at(-1) ?? 'it gave no reason').replace(
-    /^.*\[ERROR\]\s*/,
-    '',
-  );
+  const told = errors.find((line) => /space|errno: 28/i.test(line)) ?? errors[0];
+  return told?.replace(/^.*\[ERROR\]\s*/, '') ?? 'it gave no reason';
 };
 
 /** Stops a server that an earlier run left behind on the same folder. */
@@ -103,7 +101,7 @@ export const startMariadb = async ({ folder, port, password, databases, hasty = 
   child.once('error', () => {});
   for (let waited = 0; !(await answers(port)); waited += 100) {
     if (child.exitCode !== null || child.pid === undefined) {
-      throw new GiveUp(`MariaDB cannot use the data folder ${folder}: ${complaint(log)}`);
+      throw new GiveUp(`MariaDB cannot use ${folder} (move it away to start afresh): ${complaint(log)}`);
     }
     if (waited > 60_000) {
       child.kill('SIGKILL');
