@@ -47,11 +47,25 @@ interface Builder {
   readonly timeline: Timeline;
   readonly priors: Priors;
   readonly scopes: Scopes;
+  /** The list that repeats a scope for every run, made once a scope. */
+  readonly everyRun: Map<Scope, readonly Scope[]>;
 }
+
+const firstRuns = new WeakMap<LayoutIndex, { priors: Priors; parts: readonly Part[] }>();
 
 /** Every cause of the model for this layout, as the chips lay in each run. */
 export function listParts(index: LayoutIndex, timeline: Timeline, priors: Priors): readonly Part[] {
-  const builder: Builder = { index, timeline, priors, scopes: new Scopes(index) };
+  // Nearly every question is about one run on an untouched board: its causes are listed once a layout.
+  const untouched = timeline.runCount === 1 && timeline.handled.size === 0;
+  const before = untouched ? firstRuns.get(index) : undefined;
+  if (before?.priors === priors) return before.parts;
+  const parts = listAfresh({ index, timeline, priors, scopes: new Scopes(index), everyRun: new Map() });
+  if (untouched) firstRuns.set(index, { priors, parts });
+  return parts;
+}
+
+function listAfresh(builder: Builder): readonly Part[] {
+  const { index, timeline } = builder;
   return [
     ...timeline.chips.map((chip) => chipPart(builder, chip)),
     ...index.document.sockets.map((_, socket) => positionPart(builder, socket as SocketIndex)),
@@ -62,8 +76,16 @@ export function listParts(index: LayoutIndex, timeline: Timeline, priors: Priors
 }
 
 /** The two kinds of a fault: always there, or coming and going. */
-function twoKinds({ priors, timeline }: Builder, prior: number, scopes: Scope | readonly (Scope | null)[]): Kind[] {
-  const perRun = 'lanes' in scopes ? new Array<Scope>(timeline.runCount).fill(scopes) : scopes;
+function twoKinds(
+  { priors, timeline, everyRun }: Builder,
+  prior: number,
+  scopes: Scope | readonly (Scope | null)[],
+): Kind[] {
+  let perRun: readonly (Scope | null)[];
+  if ('lanes' in scopes) {
+    perRun = everyRun.get(scopes) ?? new Array<Scope>(timeline.runCount).fill(scopes);
+    everyRun.set(scopes, perRun as readonly Scope[]);
+  } else perRun = scopes;
   const hard = {
     intermittent: false,
     prior: prior * (1 - priors.intermittentShare),
@@ -100,7 +122,11 @@ function chipPart(builder: Builder, chip: Chip): Part {
   const { index, priors, scopes } = builder;
   const share = chip.quality === 'known-good' ? priors.knownGoodShare : 1;
   /** A scope in each run by where the chip is then. */
-  const moving = (at: (socket: SocketIndex) => Scope | null) => {
+  const moving = (at: (socket: SocketIndex) => Scope | null): Scope | readonly (Scope | null)[] => {
+    if (chip.since === 0 && chip.socketInRun.every((socket) => socket === chip.cameFrom)) {
+      const scope = at(chip.cameFrom);
+      if (scope) return scope;
+    }
     const made = new Map<SocketIndex, Scope | null>();
     return chip.socketInRun.map((socket) => {
       if (socket === null) return null;

@@ -10,7 +10,7 @@ export interface Posterior {
   /** Natural logarithm of the probability of all observations. */
   readonly logEvidence: number;
   /** By part, cause and kind. */
-  readonly kinds: readonly (readonly Float64Array[])[];
+  readonly kinds: readonly (readonly ArrayLike<number>[])[];
   /** Probability that at least one of these parts has failed; exact within `leftOut`. */
   readonly anyOf: (parts: ReadonlySet<number>) => number;
   /** Upper bound of the share of probability that was left out. */
@@ -21,52 +21,56 @@ interface Slot {
   readonly part: number;
   readonly cause: number;
   readonly variable: HiddenVariable;
-  readonly touching: boolean;
 }
 
 /** Weighs the parts against what the runs showed, by the noisy-OR model of `priors`. */
 export function weigh(parts: readonly Part[], runs: readonly RunObservation[], priors: Priors): Posterior {
   const evidence = new Evidence(runs);
-  const slots: Slot[] = parts.flatMap((part, p) =>
+  const touching: Slot[] = [];
+  /** Logarithms of what each part contributes without touching any failure, and of its not being there. */
+  const apart = new Float64Array(parts.length);
+  const absent = new Float64Array(parts.length);
+  const kinds: ArrayLike<number>[][] = parts.map((part, p) =>
     part.causes.map((cause, c) => {
       const variable = variableOf(cause, evidence);
-      return { part: p, cause: c, variable, touching: variable.states.some((state) => state.touches.length > 0) };
+      absent[p] = (absent[p] as number) + Math.log(variable.absent);
+      if (variable.states.some((state) => state.touches.length > 0)) {
+        touching.push({ part: p, cause: c, variable });
+        return [];
+      }
+      const total = totalOf(variable);
+      apart[p] = (apart[p] as number) + Math.log(total);
+      return variable.states.map((state) => state.weight / total);
     }),
   );
-  const solve = (left: readonly Slot[]) => {
-    const touching = left.filter((slot) => slot.touching);
-    const answer = inferNoisyOr({
-      variables: touching.map((slot) => slot.variable),
-      positives: evidence.positives,
-      leak: priors.leak,
-    });
-    let log = answer.logEvidence + evidence.negatives * Math.log(1 - priors.leak);
-    for (const slot of left) if (!slot.touching) log += Math.log(totalOf(slot.variable));
-    return { answer, touching, log };
-  };
-  const { answer, touching, log } = solve(slots);
-  const kinds = parts.map((part) => part.causes.map((cause) => new Float64Array(cause.kinds.length)));
-  for (const slot of slots) {
-    if (slot.touching) continue;
-    const total = totalOf(slot.variable);
-    kinds[slot.part]?.[slot.cause]?.set(slot.variable.states.map((state) => state.weight / total));
-  }
-  touching.forEach((slot, i) => kinds[slot.part]?.[slot.cause]?.set(answer.marginals[i] ?? []));
-
+  const always = apart.reduce((a, b) => a + b, evidence.negatives * Math.log(1 - priors.leak));
+  const solve = (slots: readonly Slot[]) =>
+    inferNoisyOr({ variables: slots.map((slot) => slot.variable), positives: evidence.positives, leak: priors.leak });
+  const answer = solve(touching);
+  touching.forEach(({ part, cause }, i) => {
+    (kinds[part] as ArrayLike<number>[])[cause] = answer.marginals[i] as Float64Array;
+  });
   const anyOf = (chosen: ReadonlySet<number>): number => {
-    let absent = 0;
-    for (const slot of slots) if (chosen.has(slot.part)) absent += Math.log(slot.variable.absent);
-    const without = solve(slots.filter((slot) => !chosen.has(slot.part)));
-    return Math.min(1, Math.max(0, 1 - Math.exp(without.log + absent - log)));
+    const without = solve(touching.filter((slot) => !chosen.has(slot.part)));
+    let log = without.logEvidence - answer.logEvidence;
+    for (const p of chosen) log += (absent[p] ?? 0) - (apart[p] ?? 0);
+    return Math.min(1, Math.max(0, 1 - Math.exp(log)));
   };
-  return { logEvidence: log, kinds, anyOf, leftOut: answer.leftOut };
+  return { logEvidence: answer.logEvidence + always, kinds, anyOf, leftOut: answer.leftOut };
 }
 
 /** Probability of a part: the sum over its modes, which are so rare together that their overlap is nothing. */
 export function probabilityOf(posterior: Posterior, part: number): number {
   let sum = 0;
-  for (const kinds of posterior.kinds[part] ?? []) for (const p of kinds) sum += p;
+  for (const kinds of posterior.kinds[part] ?? []) sum += sumOf(kinds);
   return Math.min(1, sum);
+}
+
+/** Sum of a list of numbers. */
+export function sumOf(list: ArrayLike<number>): number {
+  let sum = 0;
+  for (let i = 0; i < list.length; i++) sum += list[i] as number;
+  return sum;
 }
 
 function totalOf(variable: HiddenVariable): number {
@@ -86,6 +90,7 @@ class Evidence {
   private readonly numberOf: ReadonlyMap<Lane, number>[];
   private readonly counted = new Map<Scope, { passed: number[]; failing: number[][] }>();
   private readonly lists = new Map<string, readonly number[]>();
+  private readonly reached = new Map<Kind['scopes'], { passed: number; touches: readonly number[] }>();
 
   constructor(private readonly runs: readonly RunObservation[]) {
     let next = 0;
@@ -95,15 +100,25 @@ class Evidence {
   }
 
   stateOf(kind: Kind): HiddenVariable['states'][number] {
+    const { passed, touches } = this.reachOf(kind.scopes);
+    return { weight: kind.prior * kind.miss ** passed, touches, miss: kind.miss };
+  }
+
+  /** Many causes share one list of scopes, so it is counted once. */
+  private reachOf(scopes: Kind['scopes']): { passed: number; touches: readonly number[] } {
+    const before = this.reached.get(scopes);
+    if (before) return before;
     let passed = 0;
     const touches: number[] = [];
-    kind.scopes.forEach((scope, r) => {
+    scopes.forEach((scope, r) => {
       if (!scope) return;
       const counts = this.countsOf(scope);
       passed += counts.passed[r] ?? 0;
       touches.push(...(counts.failing[r] ?? []));
     });
-    return { weight: kind.prior * kind.miss ** passed, touches: this.once(touches), miss: kind.miss };
+    const reach = { passed, touches: this.once(touches) };
+    this.reached.set(scopes, reach);
+    return reach;
   }
 
   private countsOf(scope: Scope) {

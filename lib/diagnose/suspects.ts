@@ -5,7 +5,7 @@ import { sentenceCase } from '../layout/words';
 import type { Cause, Part } from './causes';
 import { lanesWords } from './lane-words';
 import type { RunObservation } from './observations';
-import { probabilityOf, type Posterior } from './posterior';
+import { probabilityOf, sumOf, type Posterior } from './posterior';
 import { labelOf } from './timeline';
 
 /** What the words about a suspect are made from. */
@@ -48,7 +48,7 @@ function touchesAnything({ runs }: Findings, part: Part): boolean {
 }
 
 function leadingCause(findings: Findings, { part, at }: { part: Part; at: number }): { cause: Cause; at: number } {
-  const perCause = (findings.posterior.kinds[at] ?? []).map((kinds) => kinds.reduce((a, b) => a + b, 0));
+  const perCause = (findings.posterior.kinds[at] ?? []).map(sumOf);
   const best = perCause.indexOf(Math.max(...perCause));
   return { cause: part.causes[Math.max(0, best)] as Cause, at: Math.max(0, best) };
 }
