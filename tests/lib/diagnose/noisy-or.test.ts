@@ -95,7 +95,7 @@ describe('the posterior of causes, given the lanes that failed', () => {
     expect(Math.exp(answer.logEvidence) / expected.evidence).toBeCloseTo(1, 10);
   });
 
-  it('takes the widest variables apart where a table of all failing lanes would be too large, and stays exact', () => {
+  it('takes the widest variables apart where a table of all failing lanes would be too large, and is no further off than it says', () => {
     // 4 banks of 6 bits, all failing: 24 positives. One part for all, one a bank, one a bit, one a lane.
     const lanes = Array.from({ length: 24 }, (_, i) => i);
     const two = (touches: number[], weight: number): HiddenVariable => ({
@@ -152,7 +152,8 @@ describe('the posterior of causes, given the lanes that failed', () => {
     };
     visit(0, 1, []);
     const [first] = answer.marginals;
-    expect((first?.[0] ?? 0) + (first?.[1] ?? 0)).toBeCloseTo(whole / evidence, 9);
+    const off = Math.abs((first?.[0] ?? 0) + (first?.[1] ?? 0) - whole / evidence);
+    expect(off).toBeLessThanOrEqual(answer.leftOut + 1e-12);
     expect(answer.leftOut).toBeLessThan(1e-6);
   });
 });
