@@ -27,3 +27,4 @@ export {
   type NoisyOrModel,
 } from './diagnose/noisy-or';
 export type { BankIndex, BitIndex, Lane, SocketIndex } from './brand';
+export { validateLayout } from './layout/validate';

@@ -5,6 +5,7 @@ import { caughtMail } from './http/caught-mail';
 import { errorHandler, notFound } from './http/error-handler';
 import { requestLog } from './http/log';
 import { mountRoutes } from './http/mount';
+import { openapiPage } from './http/openapi-page';
 import { checkOrigin, generalLimit, securityHeaders } from './http/security';
 import { webExport } from './http/web';
 import { findWho } from './http/who';
@@ -20,6 +21,7 @@ export const buildApp = (platform: Platform): Express => {
   app.use(requestLog(logger), securityHeaders(config));
   app.use('/api', generalLimit(config), checkOrigin(config), cookieParser(), findWho(platform));
   app.use('/api/v1', mountRoutes(platform, routes));
+  app.use('/api/v1/docs', openapiPage());
   app.use('/api', notFound);
   if (config.mail.caughtFolder !== undefined) app.use(caughtMail(config.mail.caughtFolder));
   app.use(webExport(config.webFolder), notFound);

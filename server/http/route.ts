@@ -22,6 +22,13 @@ interface Call<Params, Query, Body> {
   readonly response: Response;
 }
 
+interface RouteExample<Params, Query, Body> {
+  readonly params?: Params;
+  readonly query?: Query;
+  readonly body?: Body;
+  readonly answer?: () => unknown;
+}
+
 /**
  * One route of the API, under /api/v1. Express, the table test of roles and the OpenAPI document all read
  * this declaration, so it is the only place where a route is described.
@@ -35,6 +42,10 @@ export interface RouteSpec<Params extends z.ZodType, Query extends z.ZodType, Bo
   /** One line for the API's documentation. */
   readonly summary: string;
   readonly tag: string;
+  /** More for the API's documentation, in Markdown. */
+  readonly details?: string;
+  /** A worked example for the API's documentation; `answer` is asked for when the documentation is made. */
+  readonly example?: RouteExample<z.input<Params>, z.input<Query>, z.input<Body>>;
   readonly params?: Params;
   readonly query?: Query;
   readonly body?: Body;

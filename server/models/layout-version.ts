@@ -6,6 +6,7 @@ import {
   type Model,
   type Sequelize,
 } from 'sequelize';
+import type { LayoutDocument } from '@/shared';
 import type { VersionState } from '@/shared/api/layouts';
 
 /** One version of a board's layout document. Once it was published the document never changes. */
@@ -32,6 +33,10 @@ export interface LayoutVersion extends Model<InferAttributes<LayoutVersion>, Inf
   createdAt: CreationOptional<Date>;
   updatedAt: CreationOptional<Date>;
 }
+
+/** The document of a version. It was checked against the schema before it was stored. */
+export const readStoredDocument = ({ document }: Pick<LayoutVersion, 'document'>): LayoutDocument =>
+  JSON.parse(document) as LayoutDocument;
 
 /** States whose document is fixed for good. */
 const fixed: ReadonlySet<VersionState> = new Set(['published', 'retired']);

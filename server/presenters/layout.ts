@@ -1,9 +1,8 @@
 import type { Context } from '@/server/context';
 import type { Layout } from '@/server/models/layout';
-import type { LayoutVersion } from '@/server/models/layout-version';
+import { readStoredDocument } from '@/server/models/layout-version';
 import type { User } from '@/server/models/user';
 import type { VersionOf } from '@/server/services/layout-versions';
-import type { LayoutDocument } from '@/shared';
 import type {
   ImportAnswer,
   LayoutCard,
@@ -79,7 +78,3 @@ export const presentImport = (row: VersionOf, warnings: readonly LayoutProblem[]
   version: presentVersionRow(row),
   problems: [...warnings],
 });
-
-/** The document of a version. It was checked against the schema before it was stored. */
-export const readStoredDocument = ({ document }: Pick<LayoutVersion, 'document'>): LayoutDocument =>
-  JSON.parse(document) as LayoutDocument;

@@ -1,8 +1,10 @@
 import { accountRoutes } from './accounts';
+import { diagnosisRoutes } from './diagnoses';
 import { healthRoutes } from './health';
 import { layoutVersionRoutes } from './layout-versions';
 import { layoutRoutes } from './layouts';
 import { meRoutes } from './me';
+import { openapiRoutes } from './openapi';
 import { peopleRoutes } from './people';
 import { problemRoutes } from './problems';
 import { reviewRoutes } from './reviews';
@@ -10,8 +12,7 @@ import { roleRequestRoutes } from './role-requests';
 import { sessionRoutes } from './sessions';
 import type { Route } from '@/server/http/route';
 
-/** Every route of the API, under /api/v1. */
-export const routes: readonly Route[] = [
+const described: readonly Route[] = [
   ...healthRoutes,
   ...problemRoutes,
   ...accountRoutes,
@@ -19,7 +20,11 @@ export const routes: readonly Route[] = [
   ...meRoutes,
   ...peopleRoutes,
   ...roleRequestRoutes,
+  ...diagnosisRoutes,
   ...layoutRoutes,
   ...layoutVersionRoutes,
   ...reviewRoutes,
 ];
+
+/** Every route of the API, under /api/v1. */
+export const routes: readonly Route[] = [...described, ...openapiRoutes(() => routes)];

@@ -1,8 +1,9 @@
 import { z } from 'zod';
 import { requiredVersion, versionTag } from '@/server/http/if-match';
 import { created, ok, route, type Route } from '@/server/http/route';
+import { exampleCheck, exampleDocument, exampleSlug } from './examples';
 import { presentImport, presentVersionDetail, presentVersionRow } from '@/server/presenters/layout';
-import { checkLayout } from '@/server/services/layout-check';
+import { checkSentLayout } from '@/server/services/layout-check';
 import { importLayout, resubmitVersion } from '@/server/services/layout-import';
 import { listOwnVersions, listVersions, loadVersion } from '@/server/services/layout-versions';
 import {
@@ -30,6 +31,7 @@ export const layoutVersionRoutes: readonly Route[] = [
     tag,
     summary:
       'The versions of a board, the newest first. Those not yet published show to their author and to moderators.',
+    example: { params: { slug: exampleSlug } },
     params: ofBoard,
     answer: { status: 200, schema: versionsAnswer, words: 'The versions, without their documents.' },
     problems: ['not-found'],
@@ -42,6 +44,7 @@ export const layoutVersionRoutes: readonly Route[] = [
     may: 'guest',
     tag,
     summary: 'One version of a board, whole.',
+    example: { params: { slug: exampleSlug, number: 1 } },
     params: ofVersion,
     answer: { status: 200, schema: versionDetail, words: 'The version with its document; ETag is its change.' },
     problems: ['not-found'],
@@ -56,6 +59,9 @@ export const layoutVersionRoutes: readonly Route[] = [
     may: 'contributor',
     tag,
     summary: 'Send a layout document: a new board, or a new version of the board with that maker, name and revision.',
+    details:
+      'The version waits in state `submitted` until a moderator publishes it, returns it with words or rejects it. A document with an error is refused with `layout-invalid` and every problem in `problems`; try it with `POST /layout-checks` first.',
+    example: { body: exampleDocument },
     body: sentDocument,
     bodyBytes: limits.layoutBytes,
     answer: { status: 201, schema: importAnswer, words: 'The version waits for a moderator.' },
@@ -90,10 +96,14 @@ export const layoutVersionRoutes: readonly Route[] = [
     may: 'guest',
     tag,
     summary: 'Check a layout document without storing it: every problem of its form and of its content.',
+    details:
+      'Problems of form (what the schema says, see `GET /layout-schema`) have codes that begin with `schema-`; the others are found by looking at the layout as a whole. `pointer` is a JSON pointer into the document.',
+    example: { body: exampleDocument, answer: exampleCheck },
     body: sentDocument,
     bodyBytes: limits.layoutBytes,
     answer: { status: 200, schema: layoutCheck, words: 'The problems, errors first; none if the list is empty.' },
-    handler: ({ context, body }) => ok(checkLayout(context, body)),
+    problems: ['too-many-requests'],
+    handler: ({ context, body }) => ok(checkSentLayout(context, body)),
   }),
   route({
     method: 'get',

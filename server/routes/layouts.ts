@@ -1,6 +1,7 @@
 import type { Request, Response } from 'express';
 import { z } from 'zod';
 import { handled, ok, route, type Reply, type Route } from '@/server/http/route';
+import { exampleList, exampleSlug } from './examples';
 import { presentLayoutCard } from '@/server/presenters/layout';
 import { listLayoutFilters, listLayouts } from '@/server/services/layouts';
 import { sendablePublished, type Encoding } from '@/server/services/published-layouts';
@@ -25,6 +26,7 @@ export const layoutRoutes: readonly Route[] = [
     may: 'guest',
     tag,
     summary: 'Find published boards, by maker, name and revision.',
+    example: { query: { q: 't-64 loom', limit: 10 }, answer: exampleList },
     query: layoutsQuery,
     answer: { status: 200, schema: layoutsPage, words: 'One page; send nextCursor as cursor for the next.' },
     handler: async ({ context, query }) => {
@@ -47,6 +49,7 @@ export const layoutRoutes: readonly Route[] = [
     may: 'guest',
     tag,
     summary: 'The published layout of a board, whole.',
+    example: { params: { slug: exampleSlug } },
     params: z.strictObject({ slug: layoutSlug }),
     answer: {
       status: 200,

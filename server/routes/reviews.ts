@@ -62,7 +62,7 @@ export const reviewRoutes: readonly Route[] = [
     problems: ['not-found'],
     handler: async ({ context, params }) => {
       const row = await loadReview(context, params.id);
-      const { problems: problemList } = checkLayout(context, JSON.parse(row.version.document));
+      const { problems: problemList } = checkLayout(JSON.parse(row.version.document));
       return ok(presentReviewDetail(context, row, problemList), versionTag(row.version.change));
     },
   }),

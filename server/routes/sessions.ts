@@ -20,6 +20,7 @@ export const sessionRoutes: readonly Route[] = [
     may: 'guest',
     tag,
     summary: 'Sign in: cookies for a browser, or a bearer token for a script.',
+    example: { body: { email: 'contributor@rowcall.example', password: 'a password of yours', bearer: true } },
     body: signInRequest,
     answer: { status: 201, schema: sessionAnswer, words: 'Signed in.' },
     problems: ['sign-in-failed', 'email-not-confirmed', 'too-many-attempts'],

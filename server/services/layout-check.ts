@@ -1,3 +1,5 @@
+import { validateLayout } from '@/lib';
+import { spendComputing } from './computing-limit';
 import type { Context } from '@/server/context';
 import { AppError } from '@/server/errors';
 import type { LayoutDocument } from '@/shared';
@@ -5,21 +7,25 @@ import type { LayoutCheck } from '@/shared/api/layouts';
 import type { LayoutProblem } from '@/shared/layout/problem';
 import { readLayoutDocument } from '@/shared/layout/read-document';
 
-const validateLayout = (_document: LayoutDocument): readonly LayoutProblem[] => [];
-
 /** Most problems that one answer lists. */
 const mostListed = 500;
 
 const isError = ({ severity }: LayoutProblem): boolean => severity === 'error';
 
 /** Every problem of what somebody sent as a layout document, errors first; nothing is stored. */
-export const checkLayout = (_context: Context, sent: unknown): LayoutCheck => {
+export const checkLayout = (sent: unknown): LayoutCheck => {
   const { problems } = findProblems(sent);
   return {
     publishable: !problems.some(isError),
     problems: problems.slice(0, mostListed),
     more: Math.max(0, problems.length - mostListed),
   };
+};
+
+/** The check for whoever asks: the same, within what one caller may have computed. */
+export const checkSentLayout = (context: Context, sent: unknown): LayoutCheck => {
+  spendComputing(context, 'document');
+  return checkLayout(sent);
 };
 
 /** Reads a layout document that can be published; throws `layout-invalid` with every problem if it has an error. */

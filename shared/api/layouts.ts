@@ -120,7 +120,7 @@ export type VersionsPage = z.output<typeof versionsPage>;
  * A layout document as it is sent. It is read by the service, so that problems of form and of content come in one
  * list; the API's documentation shows the schema of the document.
  */
-export const sentDocument = z.unknown().meta({ $ref: '#/components/schemas/LayoutDocument' });
+export const sentDocument = z.unknown().meta({ $ref: '#/components/schemas/LayoutDocumentInput' });
 
 /** Answer of POST /layouts and PUT /layouts/:slug/versions/:number. */
 export const importAnswer = z.strictObject({

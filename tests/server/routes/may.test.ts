@@ -32,6 +32,8 @@ const table: Record<string, Standing> = {
   'GET /layouts/:slug/versions': 'guest',
   'GET /layouts/:slug/versions/:number': 'guest',
   'GET /me/layout-versions': 'contributor',
+  'GET /openapi.json': 'guest',
+  'POST /diagnoses': 'guest',
   'POST /layouts': 'contributor',
   'PUT /layouts/:slug/versions/:number': 'contributor',
   'POST /layout-checks': 'guest',
