@@ -63,7 +63,7 @@ export function Page({ title, hideTitle, over, lead, actions, width = 'page', ch
 
 const useStyles = makeStyles((t) => ({
   frame: { width: '100%', gap: t.space.lg },
-  room: { paddingHorizontal: t.space.xl, paddingVertical: t.space.xl },
+  room: { paddingHorizontal: t.space.xl, paddingVertical: t.space.xl, gap: t.space.xl },
   roomPhone: { paddingHorizontal: t.space.lg, paddingVertical: t.space.lg },
   form: { width: t.measure.form + t.space.xl * 2, maxWidth: '100%' },
   prose: { width: t.measure.prose + t.space.xl * 2, maxWidth: '100%' },

@@ -52,6 +52,7 @@ function Results({ filters: asked, me, onChange }: ResultsProps) {
   const { data, error, isPending, hasNextPage, isFetchingNextPage, fetchNextPage, refetch } = useInfiniteQuery(
     peopleQueryOptions(asked),
   );
+  const columns = usePeopleColumns(me, onChange);
   if (isPending) return <Loading label="Loading people" />;
   if (error) {
     return (
@@ -65,27 +66,34 @@ function Results({ filters: asked, me, onChange }: ResultsProps) {
       <Table
         caption="People"
         hideCaption
-        columns={columnsFor(me, onChange)}
+        columns={columns}
         rows={data.pages.flatMap((page) => page.items)}
         rowKey={(person) => person.id}
         empty={<EmptyState title="Nobody answers to that.">Try a part of the name, or another role.</EmptyState>}
       />
       {hasNextPage ? (
-        <Button label="Show more" busy={isFetchingNextPage} busyLabel="Loading…" onPress={() => void fetchNextPage()} />
+        <Button
+          label="Show more"
+          busy={isFetchingNextPage}
+          busyLabel="Loading…"
+          onPress={() => void fetchNextPage()}
+          style={styles.more}
+        />
       ) : null}
     </View>
   );
 }
 
-function columnsFor(me: OwnPerson, onChange: (person: PersonRow) => void): Column<PersonRow>[] {
+function usePeopleColumns(me: OwnPerson, onChange: (person: PersonRow) => void): Column<PersonRow>[] {
+  const styles = useStyles();
   const mayChange = (person: PersonRow) => person.id !== me.id && rolesInPowerOf[me.role].includes(person.role);
   return [
     { key: 'name', header: 'Name', cell: (person) => person.name, share: 3 },
     { key: 'email', header: 'E-mail address', cell: (person) => person.email, share: 4 },
     {
       key: 'confirmed',
-      header: 'Address',
-      cell: (person) => (person.confirmed ? 'confirmed' : 'not confirmed'),
+      header: 'Confirmed',
+      cell: (person) => (person.confirmed ? 'yes' : 'not yet'),
       share: 2,
     },
     {
@@ -100,12 +108,15 @@ function columnsFor(me: OwnPerson, onChange: (person: PersonRow) => void): Colum
       share: 3,
       cell: (person) =>
         mayChange(person) ? (
-          <Button
-            kind="plain"
-            label={`${person.role}, change`}
-            aria-label={`${person.role}, change the role of ${person.name}`}
-            onPress={() => onChange(person)}
-          />
+          <View style={styles.role}>
+            <Text>{person.role}</Text>
+            <Button
+              kind="quiet"
+              label="Change"
+              aria-label={`Change the role of ${person.name}`}
+              onPress={() => onChange(person)}
+            />
+          </View>
         ) : (
           <Text>{person.id === me.id ? `${person.role} (you)` : person.role}</Text>
         ),
@@ -122,5 +133,7 @@ const useStyles = makeStyles((t) => ({
     paddingVertical: t.space.sm,
   },
   search: { flexGrow: 1, flexBasis: t.measure.form / 2, maxWidth: t.measure.form },
-  results: { gap: t.space.lg, alignItems: 'stretch' },
+  results: { gap: t.space.lg },
+  more: { alignSelf: 'flex-start' },
+  role: { flexDirection: 'row', flexWrap: 'wrap', alignItems: 'center', gap: t.space.sm },
 }));

@@ -34,5 +34,5 @@ export function Shell({ children }: { children: ReactNode }) {
 const useStyles = makeStyles((t) => ({
   shell: { flexGrow: 1, backgroundColor: t.colours.paper },
   // While the code of the next page arrives the foot keeps its place.
-  main: { flexGrow: 1, flexShrink: 0, width: '100%', minHeight: '70vh' as '70%' },
+  main: { flexGrow: 1, flexShrink: 0, width: '100%', minHeight: '60vh' as '60%' },
 }));
