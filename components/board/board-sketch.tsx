@@ -8,7 +8,7 @@ import type { LayoutIndex } from '@/lib/layout/layout-index';
 import { greatestZoom, zoomFactor, type FitInput } from './geometry-fit';
 import { findAxes } from './geometry-grid';
 import { buildScene } from './geometry-scene';
-import { sideActions, zoomActions } from './sketch-actions';
+import { sideActions, zoomActions, type SketchAction } from './sketch-actions';
 import { SketchControls } from './sketch-controls';
 import { SketchDrawing } from './sketch-drawing';
 import { useInks } from './sketch-inks';
@@ -16,6 +16,7 @@ import { SketchLegend } from './sketch-legend';
 import { SketchTable } from './sketch-table';
 import type { PickTarget, SketchMarks, SketchView } from './sketch-types';
 import { firstSuspect } from './suspect';
+import { initialSketchView } from './use-sketch-view';
 import { sideWords } from './words';
 
 /** Props of BoardSketch. */
@@ -47,6 +48,7 @@ export function BoardSketch(props: BoardSketchProps) {
   const printing = useMediaQuery('print');
   const print = props.print === true || printing;
   const inks = useInks(print);
+  const [aims, setAims] = useState(0);
   const [width, setWidth] = useState<number>(sketchScale.firstWidth);
   const { turn, solderSide } = view;
   const scene = useMemo(() => buildScene(index, { turn, solderSide }), [index, turn, solderSide]);
@@ -60,6 +62,9 @@ export function BoardSketch(props: BoardSketchProps) {
   const context = { view, factor, greatest: greatestZoom(input), hasSuspect: suspect !== null };
   const side = sideWords(index, view);
   const controls = showControls && !print;
+  const table = view.table && !print;
+  const drawn = initialSketchView(index);
+  const asDrawn = turn === drawn.turn && solderSide === drawn.solderSide;
 
   const onFactor = useCallback(
     (wanted: number) => {
@@ -68,10 +73,14 @@ export function BoardSketch(props: BoardSketchProps) {
     },
     [view, onView, input],
   );
+  const act = (action: SketchAction) => {
+    if (action.id === 'suspect') setAims(aims + 1);
+    onView(action.run(context));
+  };
   const onActionKey = (key: string) => {
     const action = [...sideActions, ...zoomActions].find(({ keys }) => keys.includes(key));
     if (!controls || !action?.allowed(context)) return false;
-    onView(action.run(context));
+    act(action);
     return true;
   };
 
@@ -80,32 +89,32 @@ export function BoardSketch(props: BoardSketchProps) {
       style={styles.sketch}
       onLayout={({ nativeEvent }) => setWidth(Math.max(1, Math.floor(nativeEvent.layout.width)))}
     >
-      {controls || !compact ? (
+      {controls || !compact || !asDrawn ? (
         <View style={styles.head}>
           <View style={styles.side}>
-            {view.table ? null : (
+            {table ? null : (
               <Text variant="strong" aria-live="polite">
                 {side}
               </Text>
             )}
           </View>
           {controls ? (
-            <SketchControls label="View of the board" actions={sideActions} context={context} onView={onView} />
+            <SketchControls label="View of the board" actions={sideActions} context={context} onAction={act} />
           ) : null}
         </View>
       ) : null}
-      {view.table ? (
+      {table ? (
         <SketchTable index={index} marks={marks} picked={picked} onPick={onPick} />
       ) : (
         <SketchDrawing
-          {...{ index, marks, view, input, factor, suspect, picked, inks, print, onPick, onFactor, onActionKey }}
+          {...{ index, marks, view, input, factor, suspect, aims, picked, inks, print, onPick, onFactor, onActionKey }}
           label={props.label ?? `${index.document.board.name}. ${side}`}
         />
       )}
-      {controls && !view.table && context.greatest > 1.25 ? (
-        <SketchControls label="Zoom" actions={zoomActions} context={context} onView={onView} />
+      {controls && !table && context.greatest > 1.25 ? (
+        <SketchControls label="Zoom" actions={zoomActions} context={context} onAction={act} />
       ) : null}
-      {compact || view.table ? null : <SketchLegend index={index} marks={marks} chosen={picked !== null} inks={inks} />}
+      {compact || table ? null : <SketchLegend index={index} marks={marks} chosen={picked !== null} inks={inks} />}
     </View>
   );
 }

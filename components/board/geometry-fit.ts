@@ -2,6 +2,7 @@ import { scaleLinear } from 'd3-scale';
 import { sketchScale } from '@/components/theme/sketch-scale';
 import type { Box, Point } from './geometry';
 import type { Axes } from './geometry-grid';
+import { letterWidth } from './geometry-label';
 import type { Scene } from './geometry-scene';
 import type { SketchView } from './sketch-types';
 
@@ -16,8 +17,9 @@ export interface Fit {
   readonly toUnits: (point: Point) => Point;
   /** Where the array itself lies in the drawing. */
   readonly array: Box;
-  /** Where the names at the left begin. */
+  /** Where the names at the left begin, and how wide they may be. */
   readonly namesAt: number;
+  readonly namesWidth: number;
   /** From the array to the line of the connector. */
   readonly edgeAway: number;
 }
@@ -39,24 +41,29 @@ interface Margins {
   readonly bottom: number;
   readonly left: number;
   readonly namesAt: number;
+  readonly namesWidth: number;
   readonly edgeAway: number;
 }
 
 /** Room for names, connector and rings around the array, px. */
 function marginsOf({ scene, axes, edge }: FitInput): Margins {
-  const { margin, axis, axisStrong, advance, gap, words } = sketchScale;
-  const longest = Math.max(0, ...(axes.rows?.names ?? []).map(({ text }) => [...text].length));
-  const named = axes.rows || axes.columns;
-  const gutter = named ? Math.max(longest * axisStrong * advance.mono, 4.5 * words * advance.text) + gap.small : 0;
+  const { margin, axis, axisStrong, gap, words, greatestNames, namesGap } = sketchScale;
+  const strong = (axes.rows?.names ?? []).map(({ text }) => letterWidth(text, 'mono') * axisStrong);
+  const kinds = [axes.rows, axes.columns].map((side) => (side ? letterWidth(side.kind, 'text') * words : 0));
+  const namesWidth = Math.min(greatestNames, Math.max(...strong, ...kinds));
+  const beside = edge && scene.edge === 'left' ? gap.small : 0;
+  const gutter = namesWidth > 0 ? namesWidth + gap.small + beside : 0;
   const header = axes.columns ? axis : 0;
   const strip = (side: Scene['edge']) => (edge && scene.edge === side ? sketchScale.edge : 0);
   return {
     top: margin + header + strip('top'),
     right: margin + strip('right'),
     bottom: margin + strip('bottom'),
-    left: margin + gutter + strip('left'),
-    namesAt: strip('left'),
-    edgeAway: margin + { top: header, left: gutter, right: 0, bottom: 0 }[scene.edge],
+    left: (gutter > 0 ? gutter + namesGap : margin) + strip('left'),
+    namesAt: strip('left') + beside,
+    namesWidth,
+    edgeAway:
+      margin + { top: header, left: gutter > 0 ? gutter + namesGap - margin : 0, right: 0, bottom: 0 }[scene.edge],
   };
 }
 
@@ -74,10 +81,14 @@ export function greatestZoom(input: FitInput): number {
   return Math.max(1, sketchScale.closestSocket / (input.scene.side * wholeScale(input)));
 }
 
+/** Going to the suspect is seen to do something, even where it was large enough before. */
+const closer = 1.4;
+
 /** How many times larger than whole a view is. */
 export function zoomFactor(zoom: SketchView['zoom'], input: FitInput): number {
   if (zoom === 'whole') return 1;
-  const wanted = zoom === 'suspect' ? sketchScale.readableSocket / (input.scene.side * wholeScale(input)) : zoom;
+  const readable = sketchScale.readableSocket / (input.scene.side * wholeScale(input));
+  const wanted = zoom === 'suspect' ? Math.max(closer, readable) : zoom;
   return Math.min(greatestZoom(input), Math.max(1, Number.isFinite(wanted) ? wanted : 1));
 }
 
@@ -103,6 +114,7 @@ export function fitScene(input: FitInput, factor: number): Fit {
     toUnits: (point) => ({ x: x.invert(point.x), y: y.invert(point.y) }),
     array,
     namesAt: margins.namesAt,
+    namesWidth: margins.namesWidth,
     edgeAway: margins.edgeAway,
   };
 }

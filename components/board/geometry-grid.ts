@@ -23,7 +23,8 @@ export interface Axes {
 /** What a socket holds, in short. */
 export interface Held {
   readonly banks: string;
-  readonly bits: string;
+  /** Null where it holds every bit of the word. */
+  readonly bits: string | null;
 }
 
 /** Numbers drawn together where they follow one another: "0–3", "0 2 4". */
@@ -46,15 +47,21 @@ export function heldShort(index: LayoutIndex, at: number): Held {
   }
   return {
     banks: [...banks].map((bank) => index.document.memory.banks[bank]?.id ?? '').join(' '),
-    bits: shortNumbers(
-      index,
-      [...bits].sort((a, b) => a - b),
-    ),
+    bits:
+      bits.size === index.bitCount && bits.size > 1
+        ? null
+        : shortNumbers(
+            index,
+            [...bits].sort((a, b) => a - b),
+          ),
   };
 }
 
 interface Line {
+  /** Its middle and its ends across the line. */
   readonly at: number;
+  readonly from: number;
+  readonly to: number;
   readonly members: readonly SceneSocket[];
 }
 
@@ -71,6 +78,8 @@ function linesOf(sockets: readonly SceneSocket[], axis: 'x' | 'y'): readonly Lin
   }
   return lines.map((members) => ({
     at: members.reduce((sum, { box }) => sum + box[axis], 0) / members.length,
+    from: Math.min(...members.map(({ box }) => box[axis] - box[side] / 2)),
+    to: Math.max(...members.map(({ box }) => box[axis] + box[side] / 2)),
     members,
   }));
 }
@@ -80,7 +89,7 @@ interface Candidate {
   readonly told: ReadonlySet<number>;
 }
 
-/** The names that hold for whole lines. Names that are all the same bits tell nothing. */
+/** The names that hold for whole lines. */
 function candidate(lines: readonly Line[], kind: AxisKind, held: readonly Held[]): Candidate {
   const names: { at: number; text: string }[] = [];
   const told = new Set<number>();
@@ -91,9 +100,9 @@ function candidate(lines: readonly Line[], kind: AxisKind, held: readonly Held[]
     names.push({ at, text: first });
     for (const socket of members) told.add(socket.at);
   }
-  const says =
-    kind === 'bank' || new Set(names.map(({ text }) => text)).size > 1 || !/[– ]/.test(names[0]?.text ?? '–');
-  return { axis: { kind, names }, told: says ? told : new Set() };
+  // Blocks that lie between one another have no lines of their own for a name to stand at.
+  const apart = lines.every((line, n) => n === 0 || line.from >= (lines[n - 1] as Line).to - 1e-9);
+  return { axis: { kind, names }, told: apart ? told : new Set() };
 }
 
 /** Share of the sockets that a side must name to be worth its place. */
@@ -104,8 +113,9 @@ export function findAxes(index: LayoutIndex, sockets: readonly SceneSocket[]): A
   const held = index.document.sockets.map((_, at) => heldShort(index, at));
   const rows = linesOf(sockets, 'y');
   const columns = linesOf(sockets, 'x');
-  const usual = [candidate(rows, 'bank', held), candidate(columns, 'bit', held)] as const;
-  const turned = [candidate(rows, 'bit', held), candidate(columns, 'bank', held)] as const;
+  const name = (lines: readonly Line[], kind: AxisKind) => candidate(lines, kind, held);
+  const usual = [name(rows, 'bank'), name(columns, 'bit')] as const;
+  const turned = [name(rows, 'bit'), name(columns, 'bank')] as const;
   const score = (pair: readonly Candidate[]) => pair.reduce((sum, { told }) => sum + told.size, 0);
   const [down, across] = (score(turned) > score(usual) ? turned : usual).map((side) =>
     side.told.size >= worthwhile * sockets.length ? side : null,
@@ -115,6 +125,6 @@ export function findAxes(index: LayoutIndex, sockets: readonly SceneSocket[]): A
   return {
     rows: down?.axis ?? null,
     columns: across?.axis ?? null,
-    untold: held.map((_, at) => ({ bank: !tells('bank', at), bit: !tells('bit', at) })),
+    untold: held.map(({ bits }, at) => ({ bank: !tells('bank', at), bit: bits !== null && !tells('bit', at) })),
   };
 }

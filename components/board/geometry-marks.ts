@@ -1,10 +1,13 @@
 import { distanceToBox, type Box, type Point } from './geometry';
 
+/** Sizes on a chip as shares of its short side: radius of the notch, inset of the dot of pin 1, inset and size of the tick. */
+export const shares = { corner: 0.05, notch: 0.13, pin1: 0.16, tickInset: 0.2, tick: 0.3 } as const;
+
 const at = (n: number) => Number(n.toFixed(2));
 
 /** Outline of a chip of a size in px, its corners rounded, around the origin. */
 export function bodyPath({ width, height }: { width: number; height: number }): string {
-  const r = Math.min(width, height) * 0.05;
+  const r = Math.min(width, height) * shares.corner;
   const [x, y] = [width / 2, height / 2];
   const arc = (dx: number, dy: number) => `a${at(r)} ${at(r)} 0 0 1 ${at(dx)} ${at(dy)}`;
   return (
@@ -15,7 +18,7 @@ export function bodyPath({ width, height }: { width: number; height: number }): 
 
 /** The notch: a half circle at the middle of the side where pin 1 is. */
 export function notchPath({ width, height }: { width: number; height: number }, side: Point): string {
-  const r = Math.min(width, height) * 0.13;
+  const r = Math.min(width, height) * shares.notch;
   const middle = { x: (side.x * width) / 2, y: (side.y * height) / 2 };
   // Along the side, clockwise, so that the half circle bulges inwards.
   const along = { x: -side.y, y: side.x };
@@ -24,7 +27,7 @@ export function notchPath({ width, height }: { width: number; height: number }, 
 
 /** Centre of the dot of pin 1, just inside its corner. */
 export function pin1Place({ width, height }: { width: number; height: number }, corner: Point): Point {
-  const inset = Math.min(width, height) * 0.16;
+  const inset = Math.min(width, height) * shares.pin1;
   return { x: corner.x * (width / 2 - inset), y: corner.y * (height / 2 - inset) };
 }
 
@@ -46,29 +49,41 @@ export function tickPath(size: number): string {
   return `M${at(-size * 0.5)} ${at(0)}L${at(-size * 0.14)} ${at(size * 0.36)}L${at(size * 0.5)} ${at(-size * 0.4)}`;
 }
 
-/** Centre of the tick: the lower right corner, or the lower left where pin 1 or the notch is there. */
-export function tickPlace({ width, height }: { width: number; height: number }, corner: Point): Point {
-  const inset = Math.min(width, height) * 0.2;
-  const side = corner.x === 1 && corner.y === 1 ? -1 : 1;
-  return { x: side * (width / 2 - inset), y: height / 2 - inset };
+/**
+ * Centre of the tick: the lower right corner, or the lower left where pin 1 is there. Above a caption it moves to the
+ * upper corner that pin 1 leaves free.
+ */
+export function tickPlace(
+  { width, height }: { width: number; height: number },
+  { pin1, overCaption }: { pin1: Point; overCaption: boolean },
+): Point {
+  const inset = Math.min(width, height) * shares.tickInset;
+  const y = overCaption ? -1 : 1;
+  const x = pin1.y === y && pin1.x === 1 ? -1 : 1;
+  return { x: x * (width / 2 - inset), y: y * (height / 2 - inset) };
 }
 
-/** How a pencil ring is drawn: half axes in px; `from` and `to` in degrees clockwise from the right. */
-export interface Ring {
-  readonly rx: number;
-  readonly ry: number;
+/** How far a ring passes the sides of its chip, px: a share of the chip, but not onto what lies beside it. */
+export function ringOverhang({ width, height }: { width: number; height: number }): number {
+  return Math.min(10, Math.min(width, height) * 0.13 + 2);
+}
+
+/** The part of a ring that is drawn, in degrees clockwise from the right. */
+export interface Arc {
   readonly from: number;
   readonly to: number;
 }
 
-/** A ring drawn by hand around the origin: its end passes its beginning, and it is not quite round. */
-export function ringPath({ rx, ry, from, to }: Ring): string {
+/** A ring drawn by hand around a chip at the origin: its end passes its beginning, and it is not quite round. */
+export function ringPath(chip: { width: number; height: number }, { from, to }: Arc): string {
   const steps = Math.max(4, Math.ceil((to - from) / 20));
+  const overhang = ringOverhang(chip);
   const point = (n: number): Point => {
     const share = n / steps;
     const angle = ((from + (to - from) * share) * Math.PI) / 180;
-    const swing = 1.035 - 0.05 * share + 0.012 * Math.sin(angle * 3 + 0.6);
-    return { x: Math.cos(angle) * rx * swing, y: Math.sin(angle) * ry * swing };
+    // It starts wide and closes in; the wave is the unsteady hand.
+    const over = overhang * (1.2 - 0.55 * share + 0.12 * Math.sin(angle * 3 + 0.6));
+    return { x: Math.cos(angle) * (chip.width / 2 + over), y: Math.sin(angle) * (chip.height / 2 + over) };
   };
   let path = '';
   for (let n = 0; n < steps; n++) {
@@ -82,12 +97,6 @@ export function ringPath({ rx, ry, from, to }: Ring): string {
   return path;
 }
 
-/** Half axes of the ring around a chip: beyond its sides, but not onto the labels of its neighbours. */
-export function ringAxes({ width, height }: { width: number; height: number }): { rx: number; ry: number } {
-  const over = Math.min(width, height) * 0.17 + 2;
-  return { rx: width / 2 + over, ry: height / 2 + over };
-}
-
 const badgeCorners: readonly Point[] = [
   { x: 1, y: -1 },
   { x: -1, y: -1 },
@@ -95,9 +104,19 @@ const badgeCorners: readonly Point[] = [
   { x: -1, y: 1 },
 ];
 
-/** Centre of the rank badge of a chip: the first corner, from the upper right, where it covers none of `keepClear`. */
+/**
+ * Centre of the rank badge of a chip or part: the first corner, from the upper right, where it covers none of
+ * `keepClear`; where every corner does, the same a little further out; where that does too, the upper right.
+ */
 export function badgePlace(box: Box, radius: number, keepClear: readonly Box[]): Point {
-  const corner = ({ x, y }: Point) => ({ x: box.x + (x * box.width) / 2, y: box.y + (y * box.height) / 2 });
-  const places = badgeCorners.map(corner);
-  return places.find((place) => keepClear.every((box) => distanceToBox(place, box) >= radius)) ?? (places[0] as Point);
+  const places = [0, 0.4].flatMap((out) =>
+    badgeCorners.map(({ x, y }) => ({
+      x: box.x + x * (box.width / 2 + out * radius),
+      y: box.y + y * (box.height / 2 + out * radius),
+    })),
+  );
+  const near = keepClear.filter((letters) => distanceToBox(box, letters) <= box.width + box.height + 2 * radius);
+  return (
+    places.find((place) => near.every((letters) => distanceToBox(place, letters) >= radius)) ?? (places[0] as Point)
+  );
 }

@@ -3,10 +3,10 @@ import { sketchScale } from '@/components/theme/sketch-scale';
 import type { Edge } from './geometry';
 import type { Fit } from './geometry-fit';
 import type { Axes } from './geometry-grid';
-import { fitWords } from './geometry-label';
+import { fitLabel, fitWords } from './geometry-label';
 import type { Inks } from './sketch-inks';
 
-const { axis, axisStrong, font, words, gap, margin, advance, line } = sketchScale;
+const { axis, axisStrong, font, words, gap, leastWords, margin, line } = sketchScale;
 
 /** Names of banks and bits along the left and the top. For the eye: each socket says the same by itself. */
 export function SketchAxes({ axes, fit, inks }: { axes: Axes; fit: Fit; inks: Inks }) {
@@ -17,7 +17,7 @@ export function SketchAxes({ axes, fit, inks }: { axes: Axes; fit: Fit; inks: In
     (least, { at }, n, all) => (n === 0 ? least : Math.min(least, (at - (all[n - 1]?.at ?? 0)) * fit.scale)),
     Infinity,
   );
-  const header = top - margin + gap.small;
+  const header = top - margin;
   const hidden: object = { 'aria-hidden': true };
   return (
     <G {...hidden}>
@@ -27,12 +27,8 @@ export function SketchAxes({ axes, fit, inks }: { axes: Axes; fit: Fit; inks: In
         </SvgText>
       ) : null}
       {columns?.names.map(({ at, text }) => {
-        const fitted = fitWords([text], {
-          width: Math.min(pitch, 4 * fit.array.width),
-          least: sketchScale.leastWords,
-          most: axis,
-          advance: advance.text,
-        });
+        const fitting = { width: Math.min(pitch * 0.9, fit.array.width), least: leastWords, most: axis };
+        const fitted = fitWords([text], fitting) ?? fitLabel(text, fitting);
         if (!fitted) return null;
         const { x } = fit.toPx({ x: at, y: 0, width: 0, height: 0 });
         return (
@@ -45,12 +41,13 @@ export function SketchAxes({ axes, fit, inks }: { axes: Axes; fit: Fit; inks: In
             fontSize={fitted.size}
             fill={inks.soft}
           >
-            {text}
+            {fitted.text}
           </SvgText>
         );
       })}
       {rows?.names.map(({ at, text }, n) => {
         const { y } = fit.toPx({ x: 0, y: at, width: 0, height: 0 });
+        const fitted = fitLabel(text, { width: fit.namesWidth, least: leastWords, most: axisStrong });
         const before = rows.names[n - 1];
         const twoLines =
           rows.names.length < 2 || fit.scale * Math.abs(at - (before ?? rows.names[1] ?? { at: 0 }).at) > 2.6 * axis;
@@ -63,12 +60,12 @@ export function SketchAxes({ axes, fit, inks }: { axes: Axes; fit: Fit; inks: In
             ) : null}
             <SvgText
               x={left}
-              y={twoLines ? y + axisStrong * 0.75 : y + axisStrong * 0.34}
+              y={twoLines ? y + axisStrong * 0.9 : y + axisStrong * 0.34}
               fontFamily={font.monoBold}
-              fontSize={axisStrong}
+              fontSize={fitted?.size ?? leastWords}
               fill={inks.ink}
             >
-              {text}
+              {fitted?.text ?? ''}
             </SvgText>
           </G>
         );
@@ -101,7 +98,7 @@ export function SketchEdge({ edge, name, fit, inks }: { edge: Edge; name: string
     left: `translate(${-tooth - gap.small} 0) rotate(-90)`,
     right: `translate(${wordsAway} 0) rotate(-90)`,
   }[edge];
-  const fitted = fitWords([name], { width: length, least: sketchScale.leastWords, most: words, advance: advance.text });
+  const fitted = fitWords([name], { width: length, least: leastWords, most: words });
   const hidden: object = { 'aria-hidden': true };
   return (
     <G {...hidden} transform={`translate(${at.x} ${at.y})`}>

@@ -3,17 +3,16 @@ import { makeStyles } from '@/components/theme';
 import { Button } from '@/components/ui/button';
 import { Text } from '@/components/ui/text';
 import type { ActionContext, SketchAction } from './sketch-actions';
-import type { SketchView } from './sketch-types';
 
 type SketchControlsProps = {
   label: string;
   actions: readonly SketchAction[];
   context: ActionContext;
-  onView: (view: SketchView) => void;
+  onAction: (action: SketchAction) => void;
 };
 
 /** A row of buttons for what can be done to the view. */
-export function SketchControls({ label, actions, context, onView }: SketchControlsProps) {
+export function SketchControls({ label, actions, context, onAction }: SketchControlsProps) {
   const styles = useStyles();
   return (
     <View role="group" aria-label={label} style={styles.row} dataSet={{ print: 'hide' }}>
@@ -32,7 +31,7 @@ export function SketchControls({ label, actions, context, onView }: SketchContro
           iconOnly={action.sign !== undefined}
           pressed={action.pressed?.(context.view)}
           disabled={!action.allowed(context)}
-          onPress={() => onView(action.run(context))}
+          onPress={() => onAction(action)}
         />
       ))}
     </View>

@@ -1,5 +1,6 @@
 import { useMemo } from 'react';
 import { useTheme, type Colours } from '@/components/theme';
+import { sketchScale } from '@/components/theme/sketch-scale';
 
 /** The colours that the sketch is drawn in. */
 export type Inks = Pick<
@@ -23,20 +24,20 @@ export function useInks(print: boolean): Inks {
   const { colours } = useTheme();
   return useMemo(() => {
     if (!print) return colours;
-    const { ink, sheet, soft, rule, ruleStrong } = colours;
+    const { ink, soft, rule } = colours;
     return {
       ink,
       soft,
       rule,
       ruleStrong: soft,
-      sheet,
-      chip: 'transparent',
+      sheet: sketchScale.printGround,
+      chip: sketchScale.printGround,
       pencil: ink,
-      pencilWash: 'transparent',
-      onPencil: sheet,
+      pencilWash: sketchScale.printGround,
+      onPencil: sketchScale.printGround,
       tick: ink,
       pen: ink,
-      mark: ruleStrong && ink,
+      mark: ink,
     };
   }, [colours, print]);
 }

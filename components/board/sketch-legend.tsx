@@ -86,6 +86,13 @@ function Entry({ text, children }: { text: string; children: React.ReactNode }) 
 }
 
 const useStyles = makeStyles((t) => ({
-  legend: { flexDirection: 'row', flexWrap: 'wrap', columnGap: t.space.lg, rowGap: t.space.xs, margin: 0, padding: 0 },
+  legend: {
+    flexDirection: 'row',
+    flexWrap: 'wrap',
+    columnGap: t.space.lg,
+    rowGap: t.space.xs,
+    margin: t.space.none,
+    padding: t.space.none,
+  },
   entry: { flexDirection: 'row', alignItems: 'center', gap: t.space.xs },
 }));

@@ -1,30 +1,25 @@
-import { Circle, G, Path, Rect, Text as SvgText } from 'react-native-svg';
+import { useMemo } from 'react';
+import { G, Path, Rect, Text as SvgText } from 'react-native-svg';
 import { sketchScale } from '@/components/theme/sketch-scale';
-import type { Box } from './geometry';
-import type { PartDrawing, SocketDrawing } from './geometry-drawing';
+import type { Box, Point } from './geometry';
+import { lettersOf, type PartDrawing, type SocketDrawing } from './geometry-drawing';
+import { letterWidth } from './geometry-label';
 import { badgePlace, bodyPath } from './geometry-marks';
 import type { TargetKey } from './geometry-scene';
 import type { Inks } from './sketch-inks';
 import type { SketchMarks, SocketMark } from './sketch-types';
 import { PencilRing } from './socket-body';
 
-const { badge, badgeLetters, font, line, advance, gap } = sketchScale;
+const { badge, badgeLetters, font, line, gap } = sketchScale;
 
 type SketchOverlayProps = {
   sockets: readonly SocketDrawing[];
   parts: readonly PartDrawing[];
   marks: SketchMarks;
-  labelOf: (drawing: SocketDrawing | PartDrawing) => string;
   chosen: TargetKey | null;
   focused: TargetKey | null;
   inks: Inks;
 };
-
-/** Where the letters of a socket stand, px. */
-export function labelBox({ box, label }: SocketDrawing): Box | null {
-  if (!label) return null;
-  return { x: box.x, y: box.y, width: [...label.text].length * label.size * advance.mono, height: label.size };
-}
 
 /** Whether a socket gets the pencil ring: it did not answer, or it is the first to pull. */
 export function isRinged(mark: SocketMark): boolean {
@@ -32,19 +27,19 @@ export function isRinged(mark: SocketMark): boolean {
 }
 
 /** What lies above all sockets: rings, ranks, what is chosen, where the keyboard is. For the eye only. */
-export function SketchOverlay({ sockets, parts, marks, labelOf, chosen, focused, inks }: SketchOverlayProps) {
-  const labels = sockets.map(labelBox).filter((box) => box !== null);
+export function SketchOverlay({ sockets, parts, marks, chosen, focused, inks }: SketchOverlayProps) {
+  const letters = useMemo(() => lettersOf(sockets, parts), [sockets, parts]);
   const marked = sockets.flatMap((drawing) => {
-    const mark = marks.sockets.get(labelOf(drawing));
+    const mark = marks.sockets.get(drawing.name);
     return mark ? [{ drawing, mark }] : [];
   });
-  const all = [...sockets, ...parts];
-  const chosenBox = all.find(({ key }) => key === chosen)?.box;
-  const focusedBox = all.find(({ key }) => key === focused)?.box;
+  const find = (key: TargetKey | null) => [...sockets, ...parts].find((drawing) => drawing.key === key);
+  const chosenOne = find(chosen);
+  const focusedOne = find(focused);
   const hidden: object = { 'aria-hidden': true, pointerEvents: 'none' };
   return (
     <G {...hidden}>
-      {chosenBox ? <DoubleLine box={chosenBox} inks={inks} /> : null}
+      {chosenOne ? <DoubleLine box={chosenOne.box} inks={inks} /> : null}
       {marked.map(({ drawing, mark }) =>
         isRinged(mark) ? (
           <G key={drawing.key} transform={`translate(${drawing.box.x} ${drawing.box.y})`}>
@@ -58,22 +53,35 @@ export function SketchOverlay({ sockets, parts, marks, labelOf, chosen, focused,
             key={drawing.key}
             box={drawing.box}
             rank={mark.rank}
-            label={drawing.label ? null : labelOf(drawing)}
+            label={drawing.label ? null : drawing.name}
             tone={mark.rank === 1 ? inks.pencil : inks.mark}
-            keepClear={labels}
+            keepClear={letters}
             inks={inks}
           />
         ),
       )}
       {parts.map((drawing) => {
-        const rank = marks.sharedParts.get(labelOf(drawing))?.rank;
+        const rank = marks.sharedParts.get(drawing.name)?.rank;
         if (rank === undefined) return null;
         const tone = rank === 1 ? inks.pencil : inks.mark;
         return (
-          <Badge key={drawing.key} box={drawing.box} rank={rank} label={null} tone={tone} keepClear={[]} inks={inks} />
+          <Badge
+            key={drawing.key}
+            box={drawing.box}
+            rank={rank}
+            label={null}
+            tone={tone}
+            keepClear={letters}
+            inks={inks}
+          />
         );
       })}
-      {focusedBox ? <FocusLine box={focusedBox} inks={inks} /> : null}
+      {focusedOne ? <FocusLine box={focusedOne.box} inks={inks} /> : null}
+      {[...new Set([chosenOne, focusedOne])].map((drawing) =>
+        drawing && !drawing.label && marks.sockets.get(drawing.name)?.rank === undefined ? (
+          <Tag key={drawing.key} place={tagPlace(drawing.box)} text={drawing.name} tone={inks.pen} inks={inks} />
+        ) : null,
+      )}
     </G>
   );
 }
@@ -88,35 +96,40 @@ type BadgeProps = {
   inks: Inks;
 };
 
+/** Above the middle of what it names. */
+const tagPlace = ({ x, y, height }: Box) => ({ x, y: y - height / 2 - badge - gap.small });
+
 function Badge({ box, rank, label, tone, keepClear, inks }: BadgeProps) {
   const place = badgePlace(box, badge, keepClear);
-  const first = rank === 1;
   const text = label === null ? String(rank) : `${rank} ${label}`;
-  const width = Math.max(2 * badge, ([...text].length + 0.8) * badgeLetters * advance.mono);
-  const radius = badge;
+  return <Tag place={place} text={text} tone={tone} solid={rank === 1} hangs={label !== null} inks={inks} />;
+}
+
+type TagProps = { place: Point; text: string; tone: string; solid?: boolean; hangs?: boolean; inks: Inks };
+
+/** A few letters in a round frame: around `place`, or to the right of it where it hangs on a socket. */
+function Tag({ place, text, tone, solid = false, hangs = false, inks }: TagProps) {
+  const width = Math.max(2 * badge, (letterWidth(text, 'mono') + 0.5) * badgeLetters);
+  const left = hangs ? -badge : -width / 2;
   return (
     <G transform={`translate(${place.x} ${place.y})`}>
-      {label === null && text.length < 2 ? (
-        <Circle r={radius} fill={first ? tone : inks.sheet} stroke={tone} strokeWidth={line.mark} />
-      ) : (
-        <Rect
-          x={label === null ? -width / 2 : -radius}
-          y={-radius}
-          rx={radius}
-          width={width}
-          height={2 * radius}
-          fill={first ? tone : inks.sheet}
-          stroke={tone}
-          strokeWidth={line.mark}
-        />
-      )}
+      <Rect
+        x={left}
+        y={-badge}
+        rx={badge}
+        width={width}
+        height={2 * badge}
+        fill={solid ? tone : inks.sheet}
+        stroke={tone}
+        strokeWidth={line.mark}
+      />
       <SvgText
-        x={label === null ? 0 : width / 2 - radius}
+        x={left + width / 2}
         y={badgeLetters * 0.34}
         textAnchor="middle"
         fontFamily={font.monoBold}
         fontSize={badgeLetters}
-        fill={first ? inks.onPencil : tone}
+        fill={solid ? inks.onPencil : tone}
       >
         {text}
       </SvgText>

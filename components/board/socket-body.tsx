@@ -1,13 +1,21 @@
 import { Circle, G, Path } from 'react-native-svg';
 import { sketchScale } from '@/components/theme/sketch-scale';
 import type { Point } from './geometry';
-import { bodyPath, hatchPath, notchPath, pin1Place, ringAxes, ringPath, tickPath, tickPlace } from './geometry-marks';
+import { bodyPath, hatchPath, notchPath, pin1Place, ringPath, shares, tickPath, tickPlace } from './geometry-marks';
 import type { Inks } from './sketch-inks';
 import type { SocketState } from './sketch-types';
 
 type Size = { width: number; height: number };
 
-type SocketBodyProps = { size: Size; pin1: Point; notch: Point; state: SocketState; inks: Inks };
+type SocketBodyProps = {
+  size: Size;
+  pin1: Point;
+  notch: Point;
+  state: SocketState;
+  /** Words stand under the label, so the tick goes above. */
+  captioned?: boolean;
+  inks: Inks;
+};
 
 const dashes: Partial<Record<SocketState, string>> = { untested: '4 3', 'ruled-out': '1.5 3.5' };
 
@@ -20,20 +28,20 @@ function outline(state: SocketState, inks: Inks) {
 }
 
 /** A chip around the origin in one of its states, without letters and without the ring. */
-export function SocketBody({ size, pin1, notch, state, inks }: SocketBodyProps) {
+export function SocketBody({ size, pin1, notch, state, captioned = false, inks }: SocketBodyProps) {
   const { stroke, width } = outline(state, inks);
   const hollow = state === 'untested' || state === 'ruled-out';
   const hatched = state === 'failed' || state === 'mixed';
   const side = Math.min(size.width, size.height);
   const dot = pin1Place(size, pin1);
-  const tick = tickPlace(size, pin1);
+  const tick = tickPlace(size, { pin1, overCaption: captioned });
   const fill = hollow ? 'transparent' : hatched ? inks.pencilWash : inks.chip;
   return (
     <>
       <Path d={bodyPath(size)} fill={fill} stroke={stroke} strokeWidth={width} strokeDasharray={dashes[state]} />
       {hatched ? (
         <Path
-          d={hatchPath(size, state === 'mixed' ? sketchScale.hatch * 2 : sketchScale.hatch)}
+          d={hatchPath(size, Math.max(sketchScale.hatch, side * 0.13))}
           stroke={inks.pencil}
           strokeWidth={sketchScale.line.hair}
           strokeOpacity={0.55}
@@ -54,7 +62,7 @@ export function SocketBody({ size, pin1, notch, state, inks }: SocketBodyProps) 
       {state === 'passed' || state === 'mixed' ? (
         <G transform={`translate(${tick.x} ${tick.y})`}>
           <Path
-            d={tickPath(Math.min(side * 0.3, sketchScale.greatestLabel))}
+            d={tickPath(Math.min(side * shares.tick, sketchScale.greatestLabel))}
             fill="none"
             stroke={inks.tick}
             strokeWidth={Math.min(sketchScale.line.mark, side * 0.08)}
@@ -69,7 +77,7 @@ export function SocketBody({ size, pin1, notch, state, inks }: SocketBodyProps) 
 export function PencilRing({ size, half, inks }: { size: Size; half: boolean; inks: Inks }) {
   return (
     <Path
-      d={ringPath({ ...ringAxes(size), ...(half ? { from: 80, to: 280 } : { from: -115, to: 270 }) })}
+      d={ringPath(size, half ? { from: 80, to: 280 } : { from: -115, to: 270 })}
       fill="none"
       stroke={inks.pencil}
       strokeWidth={sketchScale.line.mark + (Math.min(size.width, size.height) > 40 ? 0.5 : 0)}

@@ -2,7 +2,8 @@ import { memo } from 'react';
 import { G, Rect, Text as SvgText } from 'react-native-svg';
 import { sketchScale } from '@/components/theme/sketch-scale';
 import type { LayoutIndex } from '@/lib/layout/layout-index';
-import { fitCaption, type SocketDrawing } from './geometry-drawing';
+import { fitCaption, textLines, type SocketDrawing } from './geometry-drawing';
+import { letterWidth, type Face, type FittedText } from './geometry-label';
 import type { Inks } from './sketch-inks';
 import type { SocketMark } from './sketch-types';
 import { SocketBody } from './socket-body';
@@ -18,7 +19,7 @@ type SocketGlyphProps = {
   inks: Inks;
 };
 
-const { advance, font } = sketchScale;
+const { font } = sketchScale;
 
 function labelTone(mark: SocketMark | undefined, inks: Inks): string {
   if (mark?.state === 'failed' || mark?.state === 'mixed') return inks.pencil;
@@ -27,50 +28,57 @@ function labelTone(mark: SocketMark | undefined, inks: Inks): string {
 
 /** One socket: body, state, pin 1 and label. Its ring, rank and choice lie on a layer above all sockets. */
 function Glyph({ index, drawing, mark, id, chosen, inks }: SocketGlyphProps) {
-  const { box, label, pin1, notch } = drawing;
+  const { box, label, pin1, notch, area } = drawing;
   const state = mark?.state ?? 'plain';
   const words = socketWords(index, drawing.at, mark);
-  const note = mark?.note === undefined ? null : fitCaption([mark.note], box);
+  const note = mark?.note === undefined ? null : fitCaption([mark.note], { area });
   const caption = label && (note ?? drawing.caption);
   const hatched = state === 'failed' || state === 'mixed';
   const tone = labelTone(mark, inks);
-  const middle = caption ? -box.height * 0.08 : 0;
+  const lines = label ? textLines(label, caption) : null;
   // What must be heard of it; the drawing's own types know no names for these.
   const aria: object = { id, role: 'option', 'aria-label': words, 'aria-selected': chosen };
   return (
     <G {...aria} transform={`translate(${box.x} ${box.y})`}>
       {svgTitle(words)}
-      <SocketBody size={box} pin1={pin1} notch={notch} state={state} inks={inks} />
-      {label && hatched ? <Plate text={label} middle={middle} fill={inks.pencilWash} /> : null}
-      {label ? (
-        <SvgText
-          y={middle + label.size * 0.34}
-          textAnchor="middle"
-          fontFamily={font.monoBold}
-          fontSize={label.size}
-          fill={tone}
-        >
-          {label.text}
-        </SvgText>
-      ) : null}
-      {caption ? (
-        <SvgText
-          y={middle + (label?.size ?? 0) * 0.5 + caption.size * 1.1}
-          textAnchor="middle"
-          fontFamily={font.text}
-          fontSize={caption.size}
-          fill={inks.soft}
-        >
-          {caption.text}
-        </SvgText>
+      <SocketBody size={box} pin1={pin1} notch={notch} state={state} captioned={caption !== null} inks={inks} />
+      {label && lines ? (
+        <G transform={`translate(${area.x} 0)`}>
+          {hatched ? <Plate text={label} middle={lines.label} face="mono" fill={inks.pencilWash} /> : null}
+          <SvgText
+            y={lines.label + label.size * 0.34}
+            textAnchor="middle"
+            fontFamily={font.monoBold}
+            fontSize={label.size}
+            fill={tone}
+          >
+            {label.text}
+          </SvgText>
+          {caption && hatched ? (
+            <Plate text={caption} middle={lines.caption} face="text" fill={inks.pencilWash} />
+          ) : null}
+          {caption ? (
+            <SvgText
+              y={lines.caption + caption.size * 0.34}
+              textAnchor="middle"
+              fontFamily={font.text}
+              fontSize={caption.size}
+              fill={inks.soft}
+            >
+              {caption.text}
+            </SvgText>
+          ) : null}
+        </G>
       ) : null}
     </G>
   );
 }
 
+type PlateProps = { text: FittedText; middle: number; face: Face; fill: string };
+
 /** Bare paper under the letters, so that no hatching runs through them. */
-function Plate({ text, middle, fill }: { text: { text: string; size: number }; middle: number; fill: string }) {
-  const width = ([...text.text].length + 0.6) * text.size * advance.mono;
+function Plate({ text, middle, face, fill }: PlateProps) {
+  const width = (letterWidth(text.text, face) + 0.3) * text.size;
   const height = text.size * 1.15;
   return <Rect x={-width / 2} y={middle - height / 2} width={width} height={height} fill={fill} />;
 }

@@ -9,6 +9,8 @@ type OpeningInput = {
   lie: string;
   /** What to look at when the view says so: the suspect, in sketch units. */
   aim: Box | null;
+  /** Counts how often one asked for it. */
+  aims: number;
   factor: number;
   onFactor: (factor: number) => void;
 };
@@ -27,17 +29,18 @@ function centre(element: HTMLElement, at: Point) {
  * The opening through which an enlarged sketch is seen: keeps its middle when the size changes, goes to what it is told
  * to look at, and enlarges under a pinch. It jumps rather than glides, so there is no motion to spare anyone.
  */
-export function useOpening({ fit, lie, aim, factor, onFactor }: OpeningInput) {
+export function useOpening({ fit, lie, aim, aims, factor, onFactor }: OpeningInput) {
   const ref = useRef<View>(null);
   const wanted = useRef<Box | null>(null);
-  const last = useRef<{ fit: Fit; lie: string; aim: Box | null } | null>(null);
+  const last = useRef<{ fit: Fit; lie: string; aim: Box | null; aims: number } | null>(null);
 
   useLayoutEffect(() => {
     const element = elementOf(ref.current);
     const before = last.current;
-    last.current = { fit, lie, aim };
+    last.current = { fit, lie, aim, aims };
     if (!element) return;
-    const target = wanted.current ?? (aim !== before?.aim || lie !== before?.lie || fit !== before?.fit ? aim : null);
+    const asked = aim !== before?.aim || aims !== before?.aims || fit !== before?.fit;
+    const target = wanted.current ?? (asked ? aim : null);
     wanted.current = null;
     if (target) centre(element, fit.toPx(target));
     else if (before && before.fit !== fit && before.lie === lie) {
@@ -47,7 +50,7 @@ export function useOpening({ fit, lie, aim, factor, onFactor }: OpeningInput) {
       });
       centre(element, fit.toPx({ ...middle, width: 0, height: 0 }));
     }
-  }, [fit, lie, aim]);
+  }, [fit, lie, aim, aims]);
 
   useEffect(() => {
     const element = elementOf(ref.current);
@@ -87,8 +90,8 @@ export function useOpening({ fit, lie, aim, factor, onFactor }: OpeningInput) {
     const element = elementOf(ref.current);
     const rect = element?.getBoundingClientRect();
     return {
-      x: clientX - (rect?.left ?? 0) + (element?.scrollLeft ?? 0),
-      y: clientY - (rect?.top ?? 0) + (element?.scrollTop ?? 0),
+      x: clientX - (rect?.left ?? 0) - (element?.clientLeft ?? 0) + (element?.scrollLeft ?? 0),
+      y: clientY - (rect?.top ?? 0) - (element?.clientTop ?? 0) + (element?.scrollTop ?? 0),
     };
   }, []);
 

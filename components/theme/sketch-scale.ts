@@ -21,12 +21,18 @@ export const sketchScale = {
   /** Room around the drawing for rings, badges and focus. */
   margin: 14,
   /** Letters: least that is still read, least and greatest of a socket's label, notes and names. */
-  leastLabel: 8,
+  leastLabel: 7.5,
   greatestLabel: 18,
   leastWords: 9,
   words: 13,
   axis: 14,
   axisStrong: 16,
+  /** Ground of chips and letters on paper. */
+  printGround: '#FFFFFF',
+  /** Between the names at the left and the array; a ring fits in. */
+  namesGap: space.md,
+  /** Widest that the names at the left may be. */
+  greatestNames: 76,
   badge: 10,
   badgeLetters: 14,
   pin1: 2,
@@ -36,6 +42,4 @@ export const sketchScale = {
   line: { hair: line.thin, body: line.thin * 1.5, mark: line.ink, heavy: line.heavy },
   gap: { hair: space.hair, small: space.xs, middle: space.sm },
   font: family,
-  /** Width of a letter as a share of its size: measured for the mono face, an upper usual value for the text face. */
-  advance: { mono: 0.632, text: 0.5 },
 } as const;
