@@ -67,7 +67,7 @@ export const layoutVersionRoutes: readonly Route[] = [
     answer: { status: 201, schema: importAnswer, words: 'The version waits for a moderator.' },
     problems: ['layout-invalid', 'conflict', 'too-many-attempts'],
     handler: async ({ context, body }) => {
-      const { warnings, ...row } = await importLayout(context, body);
+      const { warnings, ...row } = await importLayout(context, { document: body });
       const { layout, version } = row;
       const location = `/api/v1/layouts/${layout.slug}/versions/${version.number}`;
       return created(location, presentImport(row, warnings), versionTag(version.change));

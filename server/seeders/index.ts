@@ -1,4 +1,5 @@
 import { seedAccounts } from './accounts';
+import { seedLayouts } from './layouts';
 import type { Platform } from '@/server/context';
 
 /**
@@ -10,5 +11,6 @@ export const seedDemo = async (platform: Platform): Promise<void> => {
   if (!config.demo.data || config.demo.password === undefined) return;
   if (await db.Seeding.findByPk('demo')) return;
   await seedAccounts(platform, config.demo.password);
+  await seedLayouts(platform);
   await db.Seeding.create({ name: 'demo' });
 };

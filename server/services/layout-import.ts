@@ -34,13 +34,16 @@ const readSent = (sent: unknown): Sent => {
 /**
  * Takes a layout document in as a submitted version: of the board with that maker, name and revision, or of a new
  * board. Throws `layout-invalid` with all problems if it has an error, `conflict` if the very same document waits,
- * was rejected or is published already.
+ * was rejected or is published already. `slug` is the address of a new board; without it one is made of its name.
  */
-export const importLayout = async (context: Context, document: unknown): Promise<Imported> => {
+export const importLayout = async (
+  context: Context,
+  { document, slug }: { document: unknown; slug?: string },
+): Promise<Imported> => {
   const { userId } = maySendLayouts(context);
   await spendAttempts(context, [{ kind: 'layout-import', subject: userId }]);
   const sent = readSent(document);
-  const store = () => storeVersion(context, sent, userId);
+  const store = () => storeVersion(context, { sent, slug, authorId: userId });
   try {
     return await store();
   } catch (error) {
@@ -50,10 +53,13 @@ export const importLayout = async (context: Context, document: unknown): Promise
   }
 };
 
-const storeVersion = (context: Context, sent: Sent, authorId: string): Promise<Imported> =>
+const storeVersion = (
+  context: Context,
+  { sent, slug, authorId }: { sent: Sent; slug: string | undefined; authorId: string },
+): Promise<Imported> =>
   inTransaction(context.db, async (transaction) => {
     const { db, now } = context;
-    const layout = await findOrMakeLayout(context, sent.document, transaction);
+    const layout = await findOrMakeLayout(context, { document: sent.document, slug }, transaction);
     await refuseSame(context, { layout, checksum: sent.checksum }, transaction);
     const number = layout.lastNumber + 1;
     await layout.update({ lastNumber: number }, { transaction });
@@ -75,12 +81,15 @@ const stored = ({ text, checksum, warnings }: Sent) => ({
 
 const findOrMakeLayout = async (
   { db }: Context,
-  document: LayoutDocument,
+  { document, slug: wished }: { document: LayoutDocument; slug: string | undefined },
   transaction: Transaction,
 ): Promise<Layout> => {
   const boardKey = boardKeyOf(document.board);
   const known = await db.Layout.findOne({ where: { boardKey }, lock: true, transaction });
   if (known) return known;
+  if (wished !== undefined) {
+    return db.Layout.create({ slug: wished, boardKey, ...catalogueFields(document) }, { transaction });
+  }
   const start = slugOf(document.board, new Set());
   const alike = await db.Layout.findAll({
     where: { slug: { [Op.startsWith]: start } },
