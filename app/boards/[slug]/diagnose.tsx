@@ -1,6 +1,6 @@
 import { lazyScreen } from '@/components/ui/lazy-screen';
 
 export default lazyScreen(
-  () => import('@/components/features/engine-screens'),
+  () => import('@/components/features/later-screens'),
   (screens) => screens.DiagnoseScreen,
 );
