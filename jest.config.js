@@ -36,6 +36,7 @@ module.exports = {
     node('published'),
     {
       ...node('server'),
+      setupFilesAfterEnv: ['<rootDir>/tests/server/support/patience.ts'],
       globalSetup: '<rootDir>/server/scripts/test-database.mjs',
       globalTeardown: '<rootDir>/server/scripts/test-database-stop.mjs',
     },

@@ -5,25 +5,8 @@ import { join } from 'node:path';
 import { ensurePackages } from './setup/packages.mjs';
 import { giveUp, say } from './setup/say.mjs';
 import { stopList } from './setup/stopping.mjs';
+import { closingLine, projectsOf } from './setup/test-run.mjs';
 import { ensureWebExport } from './setup/web-export.mjs';
-
-const projects = ['lib', 'shared', 'published', 'server', 'browser', 'ui'];
-
-/** Projects that a run with these arguments may touch: those it selects, or those its paths lie in, or all. */
-export const projectsOf = (args) => {
-  const at = args.indexOf('--selectProjects');
-  if (at >= 0) {
-    const names = args.slice(at + 1);
-    const end = names.findIndex((name) => name.startsWith('-'));
-    return projects.filter((name) => (end < 0 ? names : names.slice(0, end)).includes(name));
-  }
-  const paths = args.filter((arg) => /(^|\/)tests\//.test(arg));
-  return paths.length ? projects.filter((name) => paths.some((path) => path.includes(`tests/${name}`))) : projects;
-};
-
-/** The closing line of a run. */
-export const closingLine = ({ passed, failed, skipped }) =>
-  `Rowcall: ${passed} passed, ${failed} failed${skipped ? `, ${skipped} skipped` : ''}`;
 
 const prepare = async (wanted) => {
   await ensurePackages();

@@ -1,5 +1,7 @@
 import { mkdirSync, readdirSync, renameSync, rmSync, writeFileSync } from 'node:fs';
 import { join } from 'node:path';
+import PostalMime from 'postal-mime';
+import { SMTPServer } from 'smtp-server';
 
 /** Most mails kept. */
 const kept = 500;
@@ -12,8 +14,6 @@ const kept = 500;
  * @returns {Promise<{ stop: () => Promise<void> }>}
  */
 export const startMailCatcher = async ({ port, folder }) => {
-  const { SMTPServer } = await import('smtp-server');
-  const { default: PostalMime } = await import('postal-mime');
   mkdirSync(folder, { recursive: true });
   let count = 0;
 

@@ -1,4 +1,5 @@
 import { mkdirSync } from 'node:fs';
+import S3rver from 's3rver';
 
 /** The bucket, and the keys that the fake takes; they open nothing but the fake. */
 export const localStore = { bucket: 'rowcall', accessKey: 'S3RVER', secretKey: 'S3RVER' };
@@ -10,7 +11,6 @@ export const localStore = { bucket: 'rowcall', accessKey: 'S3RVER', secretKey: '
  * @returns {Promise<{ stop: () => Promise<void> }>}
  */
 export const startObjectStore = async ({ port, folder }) => {
-  const { default: S3rver } = await import('s3rver');
   mkdirSync(folder, { recursive: true });
   const server = new S3rver({
     address: '127.0.0.1',
