@@ -1,5 +1,1 @@
-import { Page } from '@/components/ui/page';
-
-export default function Route() {
-  return <Page title="Boards">{null}</Page>;
-}
+export { LibraryScreen as default } from '@/components/features/boards/library-screen';
