@@ -21,14 +21,13 @@ interface Word {
   readonly at: number;
 }
 
-/** The bit at a place of a field's list of bits, from the end that the convention calls low. */
-function bitAt(bits: readonly number[], place: number, highFirst: boolean): number | undefined {
-  return bits[highFirst ? bits.length - 1 - place : place];
+/** A field's list of bits, the one at the end that the convention calls low first. */
+function fromLow(listed: readonly number[], part: FieldPart, convention: Convention): readonly number[] {
+  return convention.highFirst(part) ? [...listed].reverse() : listed;
 }
 
 function wordOfField(context: FormatContext, match: FieldMatch, { convention, place }: Setting): Word | Refusal {
-  const listed = bitsOfField(context, match.part, place);
-  const bits = convention.highFirst(match.part) ? [...listed].reverse() : listed;
+  const bits = fromLow(bitsOfField(context, match.part, place), match.part, convention);
   const places = placesOf(match);
   if (match.part.field.notation === 'one-hot' && places.length !== 1)
     return { reason: oneHotReason(match.text), at: match.start };
@@ -44,8 +43,7 @@ function wordOfField(context: FormatContext, match: FieldMatch, { convention, pl
 /** The word that all fields of one meaning show between them; null where there is none. */
 function wordOf(
   context: FormatContext,
-  match: Match,
-  name: FieldPart['field']['field'],
+  { match, name }: { match: Match; name: FieldPart['field']['field'] },
   setting: Setting,
 ): Word | Refusal | null {
   const fields = match.fields.filter(
@@ -97,7 +95,7 @@ function fromBitField(context: FormatContext, match: Match, { convention }: Sett
   const bits = part.field.bits ?? context.dataBits;
   const count = countOf(field, convention);
   if (typeof count === 'string') return { reason: count, at: start };
-  const bit = count < 0 ? undefined : bitAt(bits, count, convention.highFirst(part));
+  const bit = fromLow(bits, part, convention)[count];
   if (bit === undefined) return { reason: numberReason(context, field, bits.length), at: start };
   return { failing: [{ bit, reads: 'unknown' }], shown: null, at: start };
 }
@@ -107,11 +105,11 @@ function differing(written: Word, read: Word): number[] {
 }
 
 function fromWords(context: FormatContext, match: Match, setting: Setting): FailingBits | Refusal | null {
-  const mask = wordOf(context, match, 'mask', setting);
+  const mask = wordOf(context, { match, name: 'mask' }, setting);
   if (mask !== null && 'reason' in mask) return mask;
-  const read = wordOf(context, match, 'read', setting);
+  const read = wordOf(context, { match, name: 'read' }, setting);
   if (read !== null && 'reason' in read) return read;
-  const told = wordOf(context, match, 'written', setting);
+  const told = wordOf(context, { match, name: 'written' }, setting);
   if (told !== null && 'reason' in told) return told;
   const like = mask ?? read;
   const written = told ?? (like === null ? null : constantWord(context, like));

@@ -61,7 +61,7 @@ function fits(
   return false;
 }
 
-function setOf(context: FormatContext, lanes: Iterable<number>, speaks: boolean): LaneSet {
+function setOf(context: FormatContext, { lanes, speaks }: { lanes: Iterable<number>; speaks: boolean }): LaneSet {
   const has = new Uint8Array(context.index.laneCount);
   for (const at of lanes) has[at] = 1;
   return { has, speaks };
@@ -73,11 +73,10 @@ function listedLanes(
   fitting: (text: FieldText) => boolean,
 ): LaneSet {
   const found = texts.filter(fitting);
-  return setOf(
-    context,
-    found.flatMap(({ lanes }) => lanes),
-    found.some(({ speaks }) => speaks),
-  );
+  return setOf(context, {
+    lanes: found.flatMap(({ lanes }) => lanes),
+    speaks: found.some(({ speaks }) => speaks),
+  });
 }
 
 function lanesOfBits({ context }: Setting, bits: ReadonlySet<number>): number[] {
@@ -121,11 +120,7 @@ function addressLanes({ context, part }: Setting, typed: string, [from, to]: [nu
       for (let bit = 0; bit < index.bitCount; bit++) lanes.push(bank * index.bitCount + bit);
     speaks ||= index.document.addressMap.elsewhere.some(({ range }) => range.from <= end && range.to >= start);
   }
-  return setOf(
-    context,
-    lanes.filter((at) => index.laneExists[at] === 1),
-    speaks,
-  );
+  return setOf(context, { lanes: lanes.filter((at) => index.laneExists[at] === 1), speaks });
 }
 
 /** A mask that shows one byte of a wider word: which byte only the address tells. */
@@ -144,7 +139,9 @@ function digitLanes(setting: Setting, typed: string, range: [number, number]): L
   const { context, part } = setting;
   switch (part.field.field) {
     case 'mask':
-      return dependsOnAddress(setting) ? null : setOf(context, maskLanes(setting, typed, range), false);
+      return dependsOnAddress(setting)
+        ? null
+        : setOf(context, { lanes: maskLanes(setting, typed, range), speaks: false });
     case 'address':
       return context.map.windows.length === 0 ? null : addressLanes(setting, typed, range);
     case 'written':
@@ -153,7 +150,7 @@ function digitLanes(setting: Setting, typed: string, range: [number, number]): L
     case 'ignored':
       return null;
     default:
-      return setOf(context, [], false);
+      return setOf(context, { lanes: [], speaks: false });
   }
 }
 

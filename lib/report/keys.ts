@@ -32,11 +32,11 @@ export function hasWordKeys(field: TypedField): boolean {
 const isDigit = (character: string) => character >= '0' && character <= '9';
 
 /** Letters before digits as the code has them, but 0 to F in one row where digits go beyond 9. */
-function sorted(characters: readonly string[], digitsFirst: boolean): string[] {
+function sorted(characters: readonly string[], first: 'digits' | 'letters'): string[] {
   const unique = [...new Set(characters)].sort();
   const digits = unique.filter(isDigit);
   const others = unique.filter((character) => !isDigit(character));
-  return digitsFirst ? [...digits, ...others] : [...others, ...digits];
+  return first === 'digits' ? [...digits, ...others] : [...others, ...digits];
 }
 
 /** Fixed text after a field whose end only the next character shows: it needs a key of its own. */
@@ -59,7 +59,7 @@ export function keysOf(context: FormatContext, fields: ReadonlyMap<number, Typed
   const characters = [...all.flatMap((field) => [...wordsOf(field).characters, ...charactersOf(field)]), ...free];
   const hexadecimal = all.some(({ part }) => part.radix === 16 && charactersOf(fields.get(part.at)!).length > 10);
   const [first] = characters;
-  const plain = sorted(characters, hexadecimal || first === undefined || isDigit(first));
+  const plain = sorted(characters, hexadecimal || first === undefined || isDigit(first) ? 'digits' : 'letters');
   const keys = [...words, ...plain].map((text): Key => ({ text, label: text }));
   const known = new Set(keys.map(({ text }) => text));
   const fixed = new Map(fixedKeys(context, fields).map((key) => [key.text, key] as const));

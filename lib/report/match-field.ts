@@ -1,6 +1,6 @@
 import type { FieldPart } from './format-context';
-import type { Piece, Tolerance } from './match-types';
-import { type TypedText, alike, alikeCharacter, fold, isSpace } from './typed-text';
+import type { Piece, Spot } from './match-types';
+import { alike, alikeCharacter, fold, isSpace } from './typed-text';
 
 interface Lexicon {
   readonly lengths: readonly number[];
@@ -44,7 +44,7 @@ function notesFor(given: string, taken: string): string[] {
   return notes;
 }
 
-function wordPieces(part: FieldPart, typed: TypedText, at: number, tolerance: Tolerance): Piece[] {
+function wordPieces(part: FieldPart, { typed, at, tolerance }: Spot): Piece[] {
   const { lengths, exact, folded, alike: alikes } = lexiconOf(part);
   const pieces: Piece[] = [];
   for (const length of lengths) {
@@ -62,7 +62,7 @@ function wordPieces(part: FieldPart, typed: TypedText, at: number, tolerance: To
 }
 
 /** The digit that a typed character stands for; null for none. A digit of the base is always itself. */
-function digitAt(alphabet: string, typed: TypedText, at: number, tolerance: Tolerance): string | null {
+function digitAt(alphabet: string, { typed, tolerance }: Spot, at: number): string | null {
   const raw = typed.raw[at]!;
   if (alphabet.includes(raw)) return raw;
   if (!tolerance.fold) return null;
@@ -80,12 +80,13 @@ interface Run {
 }
 
 /** Every length of a run of digits or letters, the longest first. */
-function runPieces({ alphabet, min, max }: Run, typed: TypedText, at: number, tolerance: Tolerance): Piece[] {
+function runPieces({ alphabet, min, max }: Run, spot: Spot): Piece[] {
+  const { typed, at, tolerance } = spot;
   const pieces: Piece[] = [];
   let text = '';
   for (let to = at; to < typed.raw.length && text.length < max; to++) {
     if (tolerance.spaced && text !== '' && isSpace(typed.raw[to]!)) continue;
-    const digit = digitAt(alphabet, typed, to, tolerance);
+    const digit = digitAt(alphabet, spot, to);
     if (digit === null) break;
     text += digit;
     if (text.length < min) continue;
@@ -98,7 +99,7 @@ const nothing: readonly Piece[] = [];
 
 const capitals = 'ABCDEFGHIJKLMNOPQRSTUVWXYZ';
 
-function freePieces(typed: TypedText, at: number): Piece[] {
+function freePieces({ typed, at }: Spot): Piece[] {
   let to = at;
   while (to < typed.raw.length && !isSpace(typed.raw[to]!)) to++;
   return to === at ? [] : [{ end: to, text: typed.raw.slice(at, to), notes: [] }];
@@ -108,15 +109,15 @@ function freePieces(typed: TypedText, at: number): Piece[] {
  * The pieces of a typed text, at one place, that can be a field: the words of its table and its names first, which
  * stand in place of the digits that look the same.
  */
-export function matchField(part: FieldPart, typed: TypedText, at: number, tolerance: Tolerance): Piece[] {
-  const words = part.words.length === 0 ? nothing : wordPieces(part, typed, at, tolerance);
+export function matchField(part: FieldPart, spot: Spot): readonly Piece[] {
+  const words = part.words.length === 0 ? nothing : wordPieces(part, spot);
   const runs =
     part.digits !== null
-      ? runPieces(part.digits, typed, at, tolerance)
+      ? runPieces(part.digits, spot)
       : part.letters > 0
-        ? runPieces({ alphabet: capitals, min: 1, max: part.letters }, typed, at, tolerance)
+        ? runPieces({ alphabet: capitals, min: 1, max: part.letters }, spot)
         : part.free
-          ? freePieces(typed, at)
+          ? freePieces(spot)
           : [];
   if (words.length === 0) return runs;
   return [...words, ...runs.filter((run) => !words.some((word) => word.text === run.text && word.end === run.end))];

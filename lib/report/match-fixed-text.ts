@@ -1,5 +1,5 @@
-import type { Piece, Tolerance } from './match-types';
-import { type TypedText, alike, fold, isSeparator } from './typed-text';
+import type { Piece, Spot } from './match-types';
+import { alike, fold, isSeparator } from './typed-text';
 
 const separatorsOf = (text: string, from: number) => {
   let to = from;
@@ -8,7 +8,7 @@ const separatorsOf = (text: string, from: number) => {
 };
 
 /** Where a fixed text ends when its signs may be other ones and its letters may be written otherwise; -1 for no match. */
-function endOf(fixed: string, typed: TypedText, at: number, tolerance: Tolerance): number {
+function endOf(fixed: string, { typed, at, tolerance }: Spot): number {
   const wanted = tolerance.alike ? alike(fixed) : fold(fixed);
   const given = tolerance.alike ? typed.alike : typed.folded;
   let from = 0;
@@ -37,11 +37,12 @@ function noteFor(fixed: string, given: string): string[] {
 }
 
 /** The pieces of a typed text, at one place, that can be a fixed text. */
-export function matchFixedText(fixed: string, typed: TypedText, at: number, tolerance: Tolerance): Piece[] {
+export function matchFixedText(fixed: string, spot: Spot): Piece[] {
+  const { typed, at, tolerance } = spot;
   if (!tolerance.fold)
     return typed.raw.startsWith(fixed, at) ? [{ end: at + fixed.length, text: fixed, notes: [] }] : [];
   const pieces: Piece[] = [];
-  const end = endOf(fixed, typed, at, tolerance);
+  const end = endOf(fixed, spot);
   if (end >= 0) pieces.push({ end, text: fixed, notes: noteFor(fixed, typed.raw.slice(at, end)) });
   if (tolerance.dropped && end !== at) pieces.push({ end: at, text: fixed, notes: noteFor(fixed, '') });
   return pieces;

@@ -1,4 +1,5 @@
 import type { FieldPart, TableEntry } from './format-context';
+import type { TypedText } from './typed-text';
 
 /** How far a typed text may differ from the machine's own form. */
 export interface Tolerance {
@@ -12,6 +13,13 @@ export interface Tolerance {
   readonly spaced: boolean;
   /** Fixed words left out. */
   readonly dropped: boolean;
+}
+
+/** A place in a typed text, and how freely it is read there. */
+export interface Spot {
+  readonly typed: TypedText;
+  readonly at: number;
+  readonly tolerance: Tolerance;
 }
 
 /** A piece of text that one part of a format takes. */

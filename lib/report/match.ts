@@ -1,7 +1,7 @@
 import type { FormatContext, Part } from './format-context';
 import { matchField } from './match-field';
 import { matchFixedText } from './match-fixed-text';
-import type { FieldMatch, Match, Piece, Stop, Tolerance } from './match-types';
+import type { FieldMatch, Match, Piece, Spot, Stop, Tolerance } from './match-types';
 import { type TypedText, isSeparator, isSpace } from './typed-text';
 
 export interface MatchResult {
@@ -14,10 +14,8 @@ export interface MatchResult {
 /** Beyond this a text has so many meanings that it has none. */
 const mostMatches = 64;
 
-function piecesOf(part: Part, typed: TypedText, at: number, tolerance: Tolerance): readonly Piece[] {
-  return part.kind === 'text'
-    ? matchFixedText(part.text, typed, at, tolerance)
-    : matchField(part, typed, at, tolerance);
+function piecesOf(part: Part, spot: Spot): readonly Piece[] {
+  return part.kind === 'text' ? matchFixedText(part.text, spot) : matchField(part, spot);
 }
 
 function skipSpaces(raw: string, at: number): number {
@@ -58,7 +56,7 @@ class Matcher {
     const key = part * (raw.length + 1) + at;
     if (this.dead?.has(key)) return false;
     let any = false;
-    for (const piece of piecesOf(current, this.typed, at, this.tolerance)) {
+    for (const piece of piecesOf(current, { typed: this.typed, at, tolerance: this.tolerance })) {
       if (this.matches.length >= mostMatches) {
         this.more = true;
         return true;

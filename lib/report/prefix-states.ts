@@ -53,7 +53,13 @@ function ownForm(field: TypedField, text: string): string {
   return field.texts.find((entry) => !entry.padded && fold(entry.text) === text)?.text ?? text;
 }
 
-function follow(walk: Walk, part: number, at: number, filled: readonly FilledField[]): void {
+interface Step {
+  readonly part: number;
+  readonly at: number;
+  readonly filled: readonly FilledField[];
+}
+
+function follow(walk: Walk, { part, at, filled }: Step): void {
   const { context, fields, text, states } = walk;
   if (states.length >= mostStates) return;
   const current = context.parts[part];
@@ -64,20 +70,24 @@ function follow(walk: Walk, part: number, at: number, filled: readonly FilledFie
   if (current.kind === 'text') {
     const fixed = fold(current.text);
     const rest = text.slice(at, at + fixed.length);
-    if (rest === fixed) follow(walk, part + 1, at + fixed.length, filled);
+    if (rest === fixed) follow(walk, { part: part + 1, at: at + fixed.length, filled });
     else if (fixed.startsWith(rest) && at + rest.length === text.length)
       states.push({ filled, open: null, fixed: current.text.slice(rest.length), done: false });
     return;
   }
   const field = fields.get(part)!;
-  states.push(...opened(walk, field, at, filled));
+  states.push(...opened(walk, field, { part, at, filled }));
   for (const end of new Set([...wordsFrom(walk, field, at), ...digitsFrom(walk, field, at)])) {
-    follow(walk, part + 1, end, [...filled, { field, text: ownForm(field, text.slice(at, end)) }]);
+    follow(walk, {
+      part: part + 1,
+      at: end,
+      filled: [...filled, { field, text: ownForm(field, text.slice(at, end)) }],
+    });
   }
 }
 
 /** The state in which the rest of the text is the beginning of a field. */
-function opened({ text }: Walk, field: TypedField, at: number, filled: readonly FilledField[]): PrefixState[] {
+function opened({ text }: Walk, field: TypedField, { at, filled }: Step): PrefixState[] {
   const rest = text.slice(at);
   const alphabet = alphabetOf(field.part);
   const word = field.texts.find(
@@ -99,6 +109,6 @@ export function prefixStates(
   text: string,
 ): PrefixState[] {
   const walk: Walk = { context, fields, text: fold(text), states: [] };
-  follow(walk, 0, 0, []);
+  follow(walk, { part: 0, at: 0, filled: [] });
   return walk.states;
 }

@@ -105,6 +105,11 @@ function sitesOf(context: FormatContext, match: Match, convention: Convention): 
   });
 }
 
+interface Placing {
+  readonly site: Site;
+  readonly convention: Convention;
+}
+
 /** The code names a bank and no bit: one of its bits, and nothing says which. */
 function anyBitOf(context: FormatContext, site: Site, takes: readonly string[]): RawReading[] {
   const { index } = context;
@@ -128,7 +133,7 @@ function rightOnes({ index }: FormatContext, base: number, { failing, shown }: F
   return lanes.sort((a, b) => a - b);
 }
 
-function readingsAt(context: FormatContext, site: Site, bits: FailingBits, convention: Convention): RawReading[] {
+function readingsAt(context: FormatContext, { site, convention }: Placing, bits: FailingBits): RawReading[] {
   const base = site.bank * context.index.bitCount;
   const takes = site.take === null ? convention.takes : [...convention.takes, site.take];
   if (bits.failing === null) return anyBitOf(context, site, takes);
@@ -200,7 +205,7 @@ export function resolve(context: FormatContext, match: Match, convention: Conven
       ({ bit }) => context.index.laneExists[site.bank * context.index.bitCount + bit] !== 1,
     );
     if (absent !== undefined) refusal ??= { reason: missingBitReason(context, site.bank, absent.bit), at: bits.at };
-    else readings.push(...readingsAt(context, site, bits, convention));
+    else readings.push(...readingsAt(context, { site, convention }, bits));
   }
   return { readings, refusal };
 }

@@ -69,9 +69,14 @@ function writeBank({ context, convention }: Writer, part: FieldPart, { bank }: S
   return counted(part, bank, { convention, width: index.bankCount });
 }
 
-function placeOfBit(bits: readonly number[], bit: number, highFirst: boolean): number {
+/** The place of a bit in a field's list, counted from the end that the convention calls low; -1 where it is not there. */
+function placeOfBit(
+  bits: readonly number[],
+  bit: number,
+  { convention, part }: { convention: Convention; part: FieldPart },
+): number {
   const at = bits.indexOf(bit);
-  return at < 0 || !highFirst ? at : bits.length - 1 - at;
+  return at < 0 || !convention.highFirst(part) ? at : bits.length - 1 - at;
 }
 
 const sameBits = (entry: TableEntry, bits: readonly number[]) =>
@@ -82,7 +87,7 @@ function writeBit({ context, convention }: Writer, part: FieldPart, { bits }: Sa
   if (bit === undefined || bits.length > 1) return cannot('the code shows one bit at a time');
   if (part.field.notation === 'names') return wrote(bitName(context.index.document.memory, bit));
   const domain = part.field.bits ?? context.dataBits;
-  const place = placeOfBit(domain, bit, convention.highFirst(part));
+  const place = placeOfBit(domain, bit, { convention, part });
   return place < 0
     ? cannot('the code does not count that bit')
     : counted(part, place, { convention, width: domain.length });
@@ -92,9 +97,8 @@ function writeWord(writer: Writer, part: FieldPart, saying: Saying): Written {
   const { context, convention } = writer;
   if (part.field.notation === 'one-hot' && saying.bits.length > 1) return cannot('the code shows one bit at a time');
   const domain = bitsOfField(context, part, saying.place);
-  const highFirst = convention.highFirst(part);
   const places = new Set(
-    saying.bits.flatMap((bit) => (domain.includes(bit) ? [placeOfBit(domain, bit, highFirst)] : [])),
+    saying.bits.flatMap((bit) => (domain.includes(bit) ? [placeOfBit(domain, bit, { convention, part })] : [])),
   );
   const same = context.fields.filter(({ field }) => field.field === part.field.field);
   const shown = new Set(same.flatMap((other) => bitsOfField(context, other, saying.place)));
@@ -145,7 +149,7 @@ function writeLane({ context, convention }: Writer, part: FieldPart, { bits, ban
   const [bit] = bits;
   if (bit === undefined || bits.length > 1 || bank === null) return cannot('the code shows one bit at a time');
   const domain = part.field.bits ?? context.dataBits;
-  const place = placeOfBit(domain, bit, convention.highFirst(part));
+  const place = placeOfBit(domain, bit, { convention, part });
   if (place < 0) return cannot('the code does not count that bit');
   const { bankCount } = context.index;
   const count = part.field.order === 'bank-first' ? bank * domain.length + place : place * bankCount + bank;

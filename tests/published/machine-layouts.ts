@@ -1,7 +1,8 @@
 import { lane } from '@/lib/brand';
 import { buildLayoutIndex, compileFormat, validateLayout } from '@/lib';
 import { type LayoutDocument, type LayoutDocumentInput, layoutDocument } from '@/shared';
-import { bbcModelB, commodore64, ibmPc, spectrum48 } from './machine-charts';
+import type { ibmPc} from './machine-charts';
+import { bbcModelB, commodore64, spectrum48 } from './machine-charts';
 
 interface Chart {
   readonly machine: string;
