@@ -69,11 +69,11 @@ export function useDecideRoleRequest() {
   return useMutation({
     mutationFn: ({ id, decision }: { id: string } & RoleDecision) =>
       request<RoleRequestRow>(`/role-requests/${id}`, { method: 'PATCH', body: { decision } }),
-    onSettled: () =>
-      Promise.all([
-        queryClient.invalidateQueries({ queryKey: ['role-requests'] }),
-        queryClient.invalidateQueries({ queryKey: ['people'] }),
-      ]),
+    // Not awaited: the row that asked is gone once the queue is loaded again, and would never hear of its success.
+    onSettled: () => {
+      void queryClient.invalidateQueries({ queryKey: ['role-requests'] });
+      void queryClient.invalidateQueries({ queryKey: ['people'] });
+    },
   });
 }
 

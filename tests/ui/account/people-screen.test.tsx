@@ -71,7 +71,7 @@ test('a change that somebody else overtook is refused in the dialog', async () =
   expect(await screen.findByRole('alert')).toHaveTextContent('Somebody else changed this in the meantime.');
 });
 
-test('a request is granted, and the queue is asked again', async () => {
+test('a request is granted, which is said, and the queue is asked again', async () => {
   let open = [
     {
       id: 'r1',
@@ -94,6 +94,7 @@ test('a request is granted, and the queue is asked again', async () => {
   });
   const { user } = renderPage(<PeopleScreen />);
   await user.click(await screen.findByRole('button', { name: 'Grant, Cy' }));
+  expect(await screen.findByText('Cy is a contributor now.')).toBeVisible();
   expect(await screen.findByText('Nobody is waiting.')).toBeVisible();
   expect(calls.find(({ method }) => method === 'PATCH')?.body).toEqual({ decision: 'granted' });
 });

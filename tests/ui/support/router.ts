@@ -1,4 +1,4 @@
-import * as router from 'expo-router';
+import type * as router from 'expo-router';
 
 /** Where the page under test believes to be, and where it went. Use with `jest.mock('expo-router', …)`. */
 export const routes = {
