@@ -1,6 +1,7 @@
 import { once } from 'node:events';
 import { createServer } from 'node:http';
 import { connect, type AddressInfo } from 'node:net';
+import { gzipSync } from 'node:zlib';
 import request from 'supertest';
 import { act, buildDocument, sendLayout } from '../support/layouts';
 import { testServer } from '../support/platform';
@@ -151,7 +152,6 @@ describe('a body that is too much', () => {
   });
 
   it('is refused after unpacking as well', async () => {
-    const { gzipSync } = await import('node:zlib');
     const bomb = gzipSync(JSON.stringify({ format: ' '.repeat(limits.layoutBytes) }));
     const answer = await request(server.app)
       .post('/api/v1/layouts')
