@@ -8,14 +8,17 @@ const hashed = /^\/(_expo\/static|assets)\//;
 
 const year = 31_536_000;
 
+/** Endings of the compressed twins that lie beside a file of the export, the smallest first. */
+const twins = { br: '.br', gzip: '.gz' } as const;
+
 /**
- * The web export: files as they are, Brotli where a `.br` lies beside them, and index.html for every other path,
+ * The web export: files as they are, or the compressed twin beside them, and index.html for every other path,
  * because the application routes by itself. Hashed files are kept for good; all others are asked for anew.
  */
 export const webExport = (folder: string): Router => {
   const root = resolve(folder);
   const router = Router();
-  router.use(compression(), brotli(root));
+  router.use(compression(), compressed(root));
   router.use(express.static(root, { index: false, redirect: false, cacheControl: false, setHeaders: setCache }));
   router.get('/{*path}', pageOf(root));
   return router;
@@ -29,26 +32,34 @@ const setCache = (res: Response): void => {
   if (/\/(sw|service-worker)\.js/.test(res.req.originalUrl)) res.setHeader('Service-Worker-Allowed', '/');
 };
 
-/** Answers with the file's Brotli twin, made when the export was built, if the browser takes it. */
-const brotli =
+/** Answers with a compressed twin of the file, made when the export was built, if the browser takes it. */
+const compressed =
   (root: string): RequestHandler =>
   (req, res, next) => {
     const path = plainPath(req);
-    if (path === undefined || !takesBrotli(req) || !existsSync(join(root, `${path}.br`))) return next();
-    sendBrotli(res, { root, path });
+    if (path === undefined || !sendTwin(req, res, { root, path })) next();
   };
 
-const sendBrotli = (res: Response, { root, path }: { root: string; path: string }): void => {
+/** Sends the twin that the browser likes best; false where there is none. */
+const sendTwin = (req: Request, res: Response, { root, path }: { root: string; path: string }): boolean => {
+  const encoding = encodingFor(req);
+  if (encoding === undefined || !existsSync(join(root, `${path}${twins[encoding]}`))) return false;
   setCache(res);
   res
-    .set('Content-Encoding', 'br')
+    .set('Content-Encoding', encoding)
     .vary('Accept-Encoding')
     .type(path.slice(path.lastIndexOf('/') + 1));
-  res.sendFile(`${path}.br`, { root, cacheControl: false });
+  res.sendFile(`${path}${twins[encoding]}`, { root, cacheControl: false });
+  return true;
 };
 
-const takesBrotli = (req: Request): boolean =>
-  (req.method === 'GET' || req.method === 'HEAD') && req.acceptsEncodings('br') === 'br' && !req.headers.range;
+const encodingFor = (req: Request): keyof typeof twins | undefined => {
+  if ((req.method !== 'GET' && req.method !== 'HEAD') || req.headers.range) return undefined;
+  // Without the header anything may be sent; a script that says nothing wants the file as it is.
+  if (!req.headers['accept-encoding']) return undefined;
+  // One by one: asked for both, Express would take the one that the browser happens to name first.
+  return (['br', 'gzip'] as const).find((encoding) => req.acceptsEncodings(encoding) === encoding);
+};
 
 /** The path of a request, if it may name a file of the export. */
 const plainPath = (req: Request): string | undefined =>
@@ -59,9 +70,8 @@ const pageOf =
   (root: string): RequestHandler =>
   (req, res, next) => {
     if (hashed.test(req.path)) return next();
+    if (sendTwin(req, res, { root, path: '/index.html' })) return;
     res.set('Cache-Control', 'no-cache').vary('Accept-Encoding');
-    if (takesBrotli(req) && existsSync(join(root, 'index.html.br')))
-      return sendBrotli(res, { root, path: '/index.html' });
     res.sendFile('index.html', { root, cacheControl: false }, (error) => {
       if (error) next(res.headersSent ? error : undefined);
     });

@@ -71,7 +71,7 @@ export const ensureWebExport = async (folder = 'dist') => {
     EXPO_NO_TELEMETRY: '1',
     CI: '1',
   });
-  if (existsSync(finish)) await build([finish, making]);
+  await build([finish, making, folder]);
   writeFileSync(join(making, mark), hash);
   rmSync(folder, { recursive: true, force: true });
   renameSync(making, folder);

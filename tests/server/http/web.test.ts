@@ -1,7 +1,7 @@
 import { mkdirSync, mkdtempSync, rmSync, writeFileSync } from 'node:fs';
 import { tmpdir } from 'node:os';
 import { join } from 'node:path';
-import { brotliCompressSync } from 'node:zlib';
+import { brotliCompressSync, gzipSync } from 'node:zlib';
 import express from 'express';
 import request from 'supertest';
 import { buildConfig } from '../support/config';
@@ -20,6 +20,7 @@ const put = (path: string, content: string | Buffer) => {
 put('index.html', '<!doctype html><title>Rowcall</title>');
 put(script, code);
 put(`${script}.br`, brotliCompressSync(code));
+put(`${script}.gz`, gzipSync(code));
 put('sw.js', 'self.skipWaiting()');
 put('.sources', 'hidden');
 put('boards/[slug].html', 'x');
@@ -50,6 +51,12 @@ describe('the web export', () => {
     expect(answer.headers['content-type']).toMatch('javascript');
     expect(answer.headers['cache-control']).toMatch('immutable');
     expect(answer.headers.vary).toMatch('Accept-Encoding');
+  });
+
+  it('sends the gzip twin where the browser takes no Brotli, as on plain HTTP', async () => {
+    const answer = await request(app).get(script).set('Accept-Encoding', 'gzip, deflate').expect(200);
+    expect(answer.headers['content-encoding']).toBe('gzip');
+    expect(answer.headers['content-length']).toBe(String(gzipSync(code).length));
   });
 
   it('lets the service worker be asked for anew, for the whole site', async () => {
