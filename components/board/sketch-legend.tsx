@@ -59,8 +59,8 @@ export function SketchLegend({ index, marks, chosen, inks }: SketchLegendProps) 
           />
         </Entry>
       ) : null}
-      {chosen ? (
-        <Entry text="double line: chosen">
+      {chosen || marks.outlinedMeans ? (
+        <Entry text={`double line: ${[chosen && 'chosen', marks.outlinedMeans].filter(Boolean).join(', ')}`}>
           <Rect x={-7} y={-8} width={14} height={16} fill="none" stroke={inks.pen} strokeWidth={line.body} />
           <Rect x={-10} y={-11} width={20} height={22} fill="none" stroke={inks.pen} strokeWidth={line.mark} />
         </Entry>

@@ -39,6 +39,9 @@ export function SketchOverlay({ sockets, parts, marks, chosen, focused, inks }: 
   const hidden: object = { 'aria-hidden': true, pointerEvents: 'none' };
   return (
     <G {...hidden}>
+      {marked.map(({ drawing, mark }) =>
+        mark.outlined && drawing !== chosenOne ? <DoubleLine key={drawing.key} box={drawing.box} inks={inks} /> : null,
+      )}
       {chosenOne ? <DoubleLine box={chosenOne.box} inks={inks} /> : null}
       {marked.map(({ drawing, mark }) =>
         isRinged(mark) ? (

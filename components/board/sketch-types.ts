@@ -12,6 +12,8 @@ export interface SocketMark {
   readonly state: SocketState;
   readonly rank?: number;
   readonly note?: string;
+  /** Gets the double line of what is chosen or changed. */
+  readonly outlined?: boolean;
 }
 
 /** What the sketch says about one shared part. */
@@ -24,6 +26,8 @@ export interface SharedPartMark {
 export interface SketchMarks {
   readonly sockets: ReadonlyMap<string, SocketMark>;
   readonly sharedParts: ReadonlyMap<string, SharedPartMark>;
+  /** What the double line around outlined sockets means, in a few words. */
+  readonly outlinedMeans?: string;
 }
 
 /** What a person chose on the sketch or in its table. */

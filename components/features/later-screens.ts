@@ -8,4 +8,5 @@ export { ResetScreen } from './account/reset-screen';
 export { SignInScreen } from './account/sign-in-screen';
 export { SignUpScreen } from './account/sign-up-screen';
 export { PeopleScreen } from './admin/people-screen';
+export { BoardScreen } from './boards/board-screen';
 export { DiagnoseScreen } from './diagnose/diagnose-screen';

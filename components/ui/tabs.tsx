@@ -1,6 +1,6 @@
 import { useId, type ReactNode } from 'react';
 import { Pressable, ScrollView, View } from 'react-native';
-import { makeStyles } from '@/components/theme';
+import { makeStyles, useBreakpoint } from '@/components/theme';
 import type { Choice } from './segmented-control';
 import { Text } from './text';
 import { useRovingFocus } from './use-roving-focus';
@@ -12,12 +12,15 @@ export type TabsProps<Value extends string> = {
   tabs: readonly Choice<Value>[];
   value: Value;
   onChange: (value: Value) => void;
+  /** On a page without room around it: the rule runs from edge to edge, and the panel brings room of its own. */
+  bleed?: boolean;
   /** The panel of the chosen tab. */
   children: ReactNode;
 };
 
 /** Tabs with a red underline under the current one, and the panel of the current one below an ink rule. */
-export function Tabs<Value extends string>({ label, tabs, value, onChange, children }: TabsProps<Value>) {
+export function Tabs<Value extends string>({ label, tabs, value, onChange, bleed, children }: TabsProps<Value>) {
+  const phone = useBreakpoint() === 'phone';
   const styles = useStyles();
   const id = useId();
   const index = tabs.findIndex((tab) => tab.value === value);
@@ -27,9 +30,14 @@ export function Tabs<Value extends string>({ label, tabs, value, onChange, child
   };
   const roving = useRovingFocus({ count: tabs.length, index, move: choose });
   return (
-    <View>
+    <View style={bleed && styles.bleed}>
       <ScrollView horizontal showsHorizontalScrollIndicator={false} style={styles.strip}>
-        <View role="tablist" aria-label={label} style={styles.row} onKeyDown={roving.onKeyDown}>
+        <View
+          role="tablist"
+          aria-label={label}
+          style={[styles.row, bleed && (phone ? styles.roomPhone : styles.room)]}
+          onKeyDown={roving.onKeyDown}
+        >
           {tabs.map((tab, at) => {
             const selected = at === index;
             return (
@@ -53,7 +61,12 @@ export function Tabs<Value extends string>({ label, tabs, value, onChange, child
           })}
         </View>
       </ScrollView>
-      <View role="tabpanel" id={`${id}-panel`} aria-labelledby={`${id}-tab-${value}`} style={styles.panel}>
+      <View
+        role="tabpanel"
+        id={`${id}-panel`}
+        aria-labelledby={`${id}-tab-${value}`}
+        style={bleed ? styles.bleed : styles.panel}
+      >
         {children}
       </View>
     </View>
@@ -61,7 +74,7 @@ export function Tabs<Value extends string>({ label, tabs, value, onChange, child
 }
 
 const useStyles = makeStyles((t) => ({
-  strip: { borderBottomWidth: t.line.thin, borderBottomColor: t.colours.ink },
+  strip: { flexGrow: 0, flexShrink: 0, borderBottomWidth: t.line.thin, borderBottomColor: t.colours.ink },
   row: { flexDirection: 'row', gap: t.space.xl },
   tab: {
     minHeight: t.target,
@@ -73,5 +86,8 @@ const useStyles = makeStyles((t) => ({
     paddingTop: t.line.underline,
   },
   current: { borderBottomColor: t.colours.pencil },
+  room: { paddingHorizontal: t.space.xl },
+  roomPhone: { paddingHorizontal: t.space.lg },
   panel: { paddingTop: t.space.lg },
+  bleed: { flexGrow: 1 },
 }));
