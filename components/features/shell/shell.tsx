@@ -1,11 +1,12 @@
 import { useRef, type ReactNode } from 'react';
 import { View } from 'react-native';
+import { NewVersionNotice } from '@/components/features/offline/new-version-notice';
+import { OfflineNotice } from '@/components/features/offline/offline-notice';
 import { makeStyles, useBreakpoint } from '@/components/theme';
 import { BottomBar } from './bottom-bar';
 import { CurrentBoardProvider } from './current-board';
 import { Footer } from './footer';
 import { Header } from './header';
-import { OfflineBanner } from './offline-banner';
 import { SkipLink } from './skip-link';
 import { usePageChange } from './use-page-change';
 
@@ -20,7 +21,8 @@ export function Shell({ children }: { children: ReactNode }) {
       <View style={styles.shell}>
         <SkipLink onSkip={() => main.current?.focus()} />
         <Header />
-        <OfflineBanner />
+        <OfflineNotice />
+        <NewVersionNotice />
         <View ref={main} role="main" tabIndex={-1} style={styles.main}>
           {children}
         </View>
