@@ -1,6 +1,6 @@
 import type { SharedPartMark, SketchMarks, SocketMark, SocketState } from '@/components/board/sketch-types';
 import type { Lane, LayoutIndex } from '@/lib';
-import type { Diagnosis, LaneState } from '@/shared';
+import type { Diagnosis, LaneName, LaneState } from '@/shared';
 
 /** Suspects whose number stands on the sketch; more would hide the board. */
 const mostRanks = 5;
@@ -9,17 +9,18 @@ const leastRanked = 0.005;
 
 /** The sketch of an answer: what each socket did in the last run, and the first suspects by number. */
 export function answerMarks(index: LayoutIndex, diagnosis: Diagnosis): SketchMarks {
-  const stateOf = new Map(diagnosis.lanes.map((lane) => [`${lane.bank}/${lane.bit}`, lane.state]));
+  const stateOf = new Map(diagnosis.lanes.map((lane) => [nameOf(lane), lane.state]));
   const sockets = new Map<string, SocketMark>();
   const sharedParts = new Map<string, SharedPartMark>();
   const ranks = new Map<string, number>();
-  for (const { rank, socket, sharedPart, probability } of diagnosis.suspects) {
-    if (rank > mostRanks || probability < leastRanked) continue;
+  for (const { rank, socket, sharedPart, probability, explains } of diagnosis.suspects) {
+    // What explains nothing is merely not cleared; its number would draw the eye for no reason.
+    if (rank > mostRanks || probability < leastRanked || explains.length === 0) continue;
     if (sharedPart !== null && !sharedParts.has(sharedPart)) sharedParts.set(sharedPart, { rank, state: 'suspect' });
     else if (socket !== null && !ranks.has(socket)) ranks.set(socket, rank);
   }
   index.document.sockets.forEach(({ label }, at) => {
-    const states = lanesOf(index, at).map((lane) => stateOf.get(nameOf(index, lane)) ?? 'untested');
+    const states = lanesOf(index, at).map((lane) => stateOf.get(nameOf(laneName(index, lane))) ?? 'untested');
     const state = diagnosis.lanes.length === 0 ? 'plain' : socketState(states);
     sockets.set(label, { state, rank: ranks.get(label) });
   });
@@ -63,5 +64,9 @@ export function lanesOf(index: LayoutIndex, socket: number): Lane[] {
   ) as Lane[];
 }
 
-const nameOf = (index: LayoutIndex, lane: Lane) =>
-  `${index.document.memory.banks[index.bankOf(lane)]?.id}/${index.bitOf(lane)}`;
+/** A lane as evidence and answers name it. */
+export function laneName(index: LayoutIndex, lane: Lane): LaneName {
+  return { bank: index.document.memory.banks[index.bankOf(lane)]?.id ?? '', bit: index.bitOf(lane) };
+}
+
+const nameOf = ({ bank, bit }: LaneName) => `${bank}/${bit}`;

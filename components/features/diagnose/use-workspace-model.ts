@@ -4,7 +4,8 @@ import { useAnnouncer } from '@/components/ui/announcer';
 import { diagnose } from '@/lib';
 import type { Change, Diagnosis, Run } from '@/shared';
 import type { Bench } from './bench';
-import { useEntry, type Entry } from './entry/use-entry';
+import { toggleSocket } from './entry/failing-bits';
+import { bitsTab, useEntry, type Entry } from './entry/use-entry';
 import { answerMarks, chosenMarks, possibleMarks } from './marks';
 import { changesOf, chosenSockets, noChange, pickSocket, type ChangeDraft } from './runs/change-draft';
 import { readView, writeView } from './sketch-view-link';
@@ -80,6 +81,7 @@ export function useWorkspaceModel(bench: Bench, workspace: Workspace): Workspace
     onPick: ({ kind, label }) => {
       if (kind !== 'socket') return;
       if (changing) setChange(pickSocket(change, label));
+      else if (typing && entry.tab === bitsTab) entry.setBits(toggleSocket(bench, entry.bits, label));
       else open(label);
     },
     opened,
@@ -97,7 +99,7 @@ export function useWorkspaceModel(bench: Bench, workspace: Workspace): Workspace
     },
     begin,
     takeBack: (run) => takeOver(dropRun(runs, run), `Run ${run + 1} was taken back.`),
-    markWhole: (run, complete) => void commit(setComplete(runs, run, complete), step),
+    markWhole: (run, complete) => void commit(setComplete(runs, { run, complete }), step),
   };
 }
 

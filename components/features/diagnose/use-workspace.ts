@@ -63,6 +63,8 @@ export function useWorkspace(): Workspace {
         pathname: '/boards/[slug]/diagnose',
         params: withoutEmpty({ slug, r: link, e: writeStep(next.step, next.runs), f, v }),
       });
+      // The same page with another step begins at its top.
+      requestAnimationFrame(() => window.scrollTo(0, 0));
       return true;
     },
     [router, slug, f, v],

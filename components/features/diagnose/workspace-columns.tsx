@@ -1,3 +1,4 @@
+import { useState } from 'react';
 import { View } from 'react-native';
 import { BoardSketch } from '@/components/board/board-sketch';
 import { makeStyles, useBreakpoint } from '@/components/theme';
@@ -11,6 +12,7 @@ import { EntryPanel } from './entry/entry-panel';
 import { ReportStrip } from './runs/report-strip';
 import { ChangePanel } from './runs/change-panel';
 import { RunList } from './runs/run-list';
+import { RevisionNote } from './revision-note';
 import type { WorkspaceModel } from './use-workspace-model';
 import { WorkspaceTools } from './workspace-tools';
 
@@ -26,11 +28,21 @@ export function WorkspaceColumns({ model, onPrint }: ColumnsProps) {
 /** The phone: one thing at a time, the answer first. */
 function OneColumn({ model, onPrint }: ColumnsProps) {
   const styles = useStyles();
-  const { step } = model.workspace;
+  const { step, view } = model.workspace;
+  const [tools, setTools] = useState(view !== null);
   if (step.at === 'entry') {
     return (
       <View style={styles.column}>
-        <EntryPanel model={model} between={<Sketch model={model} compact />} keysAtFoot />
+        <EntryPanel
+          model={model}
+          between={
+            <>
+              <Sketch model={model} compact />
+              <RevisionNote document={model.bench.document} slug={model.workspace.slug} />
+            </>
+          }
+          keysAtFoot
+        />
       </View>
     );
   }
@@ -47,7 +59,14 @@ function OneColumn({ model, onPrint }: ColumnsProps) {
       <ReportStrip model={model} />
       <AnswerCard diagnosis={model.diagnosis} />
       <View style={styles.column}>
-        <Sketch model={model} />
+        <Sketch model={model} compact={!tools} />
+        <Button
+          kind="quiet"
+          label={tools ? 'Put the view tools away' : 'Turn, mirror, zoom, table'}
+          aria-expanded={tools}
+          onPress={() => setTools(!tools)}
+          style={styles.start}
+        />
         <Checks model={model} />
         <SuspectList diagnosis={model.diagnosis} onShow={model.open} />
         <Runs model={model} />
@@ -71,14 +90,17 @@ function SideBySide({ model, onPrint }: ColumnsProps) {
       <WorkspaceTools model={model} onPrint={onPrint} />
     </View>
   );
-  const answer = (
-    <>
-      <AnswerCard diagnosis={model.diagnosis} />
-      <Checks model={model} />
-      <SuspectList diagnosis={model.diagnosis} onShow={model.open} />
-      <Cautions cautions={model.diagnosis.cautions} />
-    </>
-  );
+  const answer =
+    model.diagnosis.outcome === 'no-evidence' ? (
+      <NoReportYet model={model} />
+    ) : (
+      <>
+        <AnswerCard diagnosis={model.diagnosis} />
+        <Checks model={model} />
+        <SuspectList diagnosis={model.diagnosis} onShow={model.open} />
+        <Cautions cautions={model.diagnosis.cautions} />
+      </>
+    );
   if (!wide) {
     return (
       <View style={styles.columns}>
@@ -99,6 +121,22 @@ function SideBySide({ model, onPrint }: ColumnsProps) {
       <View role="region" aria-label="Answer" style={styles.right}>
         {answer}
       </View>
+    </View>
+  );
+}
+
+/** What stands in the place of the answer before there is one. */
+function NoReportYet({ model: { bench, workspace } }: { model: WorkspaceModel }) {
+  const styles = useStyles();
+  return (
+    <View style={styles.waiting}>
+      <View style={styles.step}>
+        <Text variant="heading" level={2}>
+          The answer will stand here
+        </Text>
+        <Text tone="soft">Type what the board reports. The sockets that it can still mean stand out as you type.</Text>
+      </View>
+      <RevisionNote document={bench.document} slug={workspace.slug} />
     </View>
   );
 }
@@ -168,8 +206,8 @@ const useStyles = makeStyles((t) => ({
   left: {
     flexBasis: 0,
     flexGrow: 22,
-    minWidth: 280,
-    maxWidth: 400,
+    minWidth: t.measure.sideLeast,
+    maxWidth: t.measure.sideMost,
     padding: t.space.xl,
     gap: t.space.xl,
     borderRightWidth: t.line.thin,
@@ -186,11 +224,13 @@ const useStyles = makeStyles((t) => ({
   right: {
     flexBasis: 0,
     flexGrow: 26,
-    minWidth: 320,
+    minWidth: t.measure.sideLeast,
     padding: t.space.xl,
     gap: t.space.xl,
     borderLeftWidth: t.line.thin,
     borderLeftColor: t.colours.ruleStrong,
   },
   step: { gap: t.space.md },
+  waiting: { gap: t.space.xl },
+  start: { alignSelf: 'flex-start' },
 }));

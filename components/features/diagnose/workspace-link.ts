@@ -57,7 +57,7 @@ export function readLink(text: string): ReadLink {
     }
     const item = readStatement(letter, fields);
     if (item === null) {
-      problems.push(`A piece of the link could not be read and was left out: “${shorten(statement)}”.`);
+      problems.push(`Left out: “${shorten(statement)}”.`);
       continue;
     }
     if (read.length === 0) read.push({ changes: [], evidence: [], complete: true });
@@ -83,7 +83,7 @@ function keepWithinLimits(read: { changes: unknown[]; evidence: unknown[] }[], p
       ({ changes, evidence: seen }) => changes.length > limits.changesPerRun || seen.length > limits.evidencePerRun,
     )
   ) {
-    problems.push('The link holds more than a look-up can carry; the end was left out.');
+    problems.push('The link holds more than a look-up can carry; its end was left out.');
   }
   return runsSchema.parse(cut);
 }

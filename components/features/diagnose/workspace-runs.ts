@@ -52,7 +52,7 @@ export function dropRun(runs: readonly Run[], at: number): Run[] {
 }
 
 /** Says whether the list of a run was the whole list. */
-export function setComplete(runs: readonly Run[], at: number, complete: boolean): Run[] {
+export function setComplete(runs: readonly Run[], { run: at, complete }: { run: number; complete: boolean }): Run[] {
   return editRun(runs, at, (run) => ({ ...run, complete }));
 }
 

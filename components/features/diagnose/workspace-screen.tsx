@@ -5,7 +5,8 @@ import { Notice } from '@/components/ui/notice';
 import { Page } from '@/components/ui/page';
 import { ApiProblem } from '@/components/api/problem';
 import { boardName } from '@/components/api/layouts';
-import { useEffect } from 'react';
+import { useEffect, useRef, type RefObject } from 'react';
+import { makeStyles } from '@/components/theme';
 import { SocketPanel } from './answer/socket-panel';
 import type { Bench } from './bench';
 import { PullSheet } from './paper/pull-sheet';
@@ -19,6 +20,7 @@ type WorkspaceScreenProps = { bench: Bench; fromDevice: boolean; error: Error | 
 
 /** The workspace of a board that is there. */
 export function WorkspaceScreen({ bench, fromDevice, error }: WorkspaceScreenProps) {
+  const styles = useStyles();
   const { board } = bench.document;
   const workspace = useWorkspace();
   const model = useWorkspaceModel(bench, workspace);
@@ -27,6 +29,8 @@ export function WorkspaceScreen({ bench, fromDevice, error }: WorkspaceScreenPro
   const { slug } = workspace;
   useKeepAwake();
   useShowBoardInHeader(short, slug);
+  const body = useRef<View>(null);
+  useFocusOnStep(workspace.revision, body);
   useEffect(() => rememberBoard({ slug, name: boardName(board) }), [slug, board]);
 
   const { runs, diagnosis, marks, view } = { runs: workspace.runs, ...model };
@@ -45,7 +49,7 @@ export function WorkspaceScreen({ bench, fromDevice, error }: WorkspaceScreenPro
           </Notice>
         ) : null}
       </View>
-      <View dataSet={{ print: 'hide' }} style={{ flexGrow: 1 }}>
+      <View ref={body} tabIndex={-1} dataSet={{ print: 'hide' }} style={styles.body}>
         <WorkspaceColumns model={model} onPrint={print} />
       </View>
       <SocketPanel
@@ -60,3 +64,16 @@ export function WorkspaceScreen({ bench, fromDevice, error }: WorkspaceScreenPro
     </Page>
   );
 }
+
+/** After a step the button that was pressed is often gone; the focus then goes to the workspace, not to nowhere. */
+function useFocusOnStep(revision: string, body: RefObject<View | null>): void {
+  const shown = useRef(revision);
+  useEffect(() => {
+    if (shown.current === revision) return;
+    shown.current = revision;
+    if (document.activeElement !== null && document.activeElement !== document.body) return;
+    (body.current as unknown as HTMLElement | null)?.focus({ preventScroll: true });
+  }, [revision, body]);
+}
+
+const useStyles = makeStyles(() => ({ body: { flexGrow: 1 } }));

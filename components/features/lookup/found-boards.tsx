@@ -118,5 +118,5 @@ const useStyles = makeStyles((t) => ({
   },
   held: { backgroundColor: t.colours.sheet },
   words: { flexShrink: 1, minWidth: 0 },
-  kept: { maxWidth: 110 },
+  kept: { maxWidth: t.measure.beside },
 }));

@@ -16,7 +16,7 @@ export function LookupScreen() {
   const { board } = useLocalSearchParams<{ board?: string }>();
   const [text, setText] = useState('');
   const search = useBoardSearch(text);
-  const family = search.families.find(({ key }) => key === board);
+  const family = search.families.find(({ revisions }) => revisions.some(({ slug }) => slug === board));
   const phone = useBreakpoint() === 'phone';
   const field = useRef<TextInput>(null);
   const choosing = board === undefined;
@@ -47,7 +47,7 @@ export function LookupScreen() {
       <FoundBoards
         search={search}
         text={text}
-        onBoard={({ key }) => router.push({ pathname: '/', params: { board: key } })}
+        onBoard={({ revisions }) => router.push({ pathname: '/', params: { board: revisions[0]?.slug } })}
       />
     </Page>
   );

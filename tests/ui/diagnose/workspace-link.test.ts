@@ -108,7 +108,7 @@ describe('the link of a workspace', () => {
   it('cuts off what is beyond the limits and says so', () => {
     const { runs, problems } = readLink(`1${'~n~c.lamp.C5'.repeat(100)}`);
     expect(runs).toHaveLength(64);
-    expect(problems).toEqual(['The link holds more than a look-up can carry; the end was left out.']);
+    expect(problems).toEqual(['The link holds more than a look-up can carry; its end was left out.']);
     expect(longestLink).toBeLessThan(8192);
   });
 });

@@ -22,6 +22,9 @@ const kinds: Partial<Record<Diagnosis['outcome'], string>> = {
   unexplained: 'No cause fits',
 };
 
+/** Keeps a number and its per cent on one line. */
+const unbroken = (text: string) => text.replace(/ %/g, '\u00a0%');
+
 /** Sentences of an answer that stand at once; the rest follows under it. */
 const atOnce = 4;
 
@@ -29,7 +32,7 @@ const atOnce = 4;
 export function AnswerCard({ diagnosis }: { diagnosis: Diagnosis }) {
   const styles = useStyles();
   const kind = kinds[diagnosis.outcome];
-  const first = diagnosis.sentences.slice(0, atOnce).join(' ');
+  const first = unbroken(diagnosis.sentences.slice(0, atOnce).join(' '));
   const more = diagnosis.sentences.slice(atOnce);
   return (
     <Sheet bar={bars[diagnosis.outcome]} gap="sm" label="Answer">

@@ -16,29 +16,29 @@ const sureWords: Record<Diagnosis['sure'], string> = {
 /** What to do, larger than anything else, with how sure that is. */
 export function Headline({ diagnosis }: { diagnosis: Diagnosis }) {
   const styles = useStyles();
-  const { headline, probability, sure, outcome } = diagnosis;
-  const pull = pulledFirst(diagnosis);
-  const calm = outcome === 'not-shown' || outcome === 'no-evidence';
+  const { headline, probability, sure } = diagnosis;
+  const place = onePlace(diagnosis);
+  const short = place !== null && headline === `Pull ${place} first.`;
   return (
     <View style={styles.head}>
-      <View role="heading" aria-level={1} aria-label={headline} style={styles.words}>
-        {pull === null ? (
-          <Labelled text={headline} labels={labelsIn(diagnosis)} tone={calm ? 'ink' : 'answer'} />
+      <View role="heading" aria-level={1} aria-label={headline} style={short ? styles.beside : styles.whole}>
+        {place === null ? (
+          <Labelled text={headline} labels={labelsIn(diagnosis)} />
         ) : (
           <>
-            <Text variant="heading" level={null}>
-              Pull first
+            <Text variant={short ? 'heading' : 'title'} level={null}>
+              {short ? 'Pull first' : headline}
             </Text>
-            <Text variant={pull.length > 7 ? 'codeLarge' : 'answer'} tone="answer">
-              {pull}
+            <Text variant={place.length > 7 ? 'codeLarge' : 'answer'} tone="answer">
+              {place}
             </Text>
           </>
         )}
       </View>
       {probability === null ? null : (
-        <View style={styles.odds}>
-          <TallyStrokes probability={probability} />
-          <Text variant="small" tone="soft" align="right">
+        <View style={short ? styles.odds : styles.oddsBelow}>
+          <TallyStrokes probability={probability} layout={short ? 'above' : 'beside'} />
+          <Text variant="small" tone="soft">
             {sureWords[sure]}
           </Text>
         </View>
@@ -47,10 +47,15 @@ export function Headline({ diagnosis }: { diagnosis: Diagnosis }) {
   );
 }
 
-/** The one socket that the headline tells to pull first; null where it says something else. */
-function pulledFirst({ headline, places }: Diagnosis): string | null {
-  const [first] = places;
-  return first !== undefined && headline === `Pull ${first.socket} first.` ? first.socket : null;
+/** The one socket that the headline is about; null where it names several, or none. */
+function onePlace(diagnosis: Diagnosis): string | null {
+  const [first] = diagnosis.places;
+  if (diagnosis.outcome !== 'place' || first === undefined) return null;
+  const cameFrom = diagnosis.suspects[0]?.cameFrom;
+  const named = splitAt(diagnosis.headline, labelsIn(diagnosis)).flatMap(({ piece, label }) => (label ? [piece] : []));
+  return named.includes(first.socket) && named.every((label) => label === first.socket || label === cameFrom)
+    ? first.socket
+    : null;
 }
 
 function labelsIn({ suspects, places, headline }: Diagnosis): string[] {
@@ -60,13 +65,13 @@ function labelsIn({ suspects, places, headline }: Diagnosis): string[] {
 }
 
 /** A sentence in which every label stands in the letters of codes. */
-function Labelled({ text, labels, tone }: { text: string; labels: readonly string[]; tone: 'ink' | 'answer' }) {
+function Labelled({ text, labels }: { text: string; labels: readonly string[] }) {
   const pieces = splitAt(text, labels);
   return (
-    <Text variant="display" level={null} tone="ink">
+    <Text variant={text.length > 48 ? 'title' : 'display'} level={null}>
       {pieces.map(({ piece, label }, at) =>
         label ? (
-          <Text key={at} variant="codeLarge" tone={tone}>
+          <Text key={at} variant={text.length > 48 ? 'codeMedium' : 'codeLarge'} tone="answer">
             {piece}
           </Text>
         ) : (
@@ -93,6 +98,8 @@ const useStyles = makeStyles((t) => ({
     alignItems: 'flex-start',
     gap: t.space.md,
   },
-  words: { flexGrow: 1, flexShrink: 1, flexBasis: 180 },
+  beside: { flexGrow: 1, flexShrink: 1, flexBasis: t.measure.beside },
+  whole: { flexBasis: '100%' },
   odds: { gap: t.space.hair, alignItems: 'flex-end', paddingTop: t.space.sm },
+  oddsBelow: { flexDirection: 'row', flexWrap: 'wrap', alignItems: 'center', columnGap: t.space.md },
 }));

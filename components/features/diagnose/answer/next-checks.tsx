@@ -49,7 +49,7 @@ function Check({ check, onDone }: { check: NextCheck; onDone: (changes: readonly
         <Text variant="subheading" level={2} style={styles.label}>
           {`Next: ${check.label.charAt(0).toLowerCase()}${check.label.slice(1)}`}
         </Text>
-        <Text variant="small" tone="soft">
+        <Text variant="small" tone="soft" style={styles.fixed}>
           {minutesWords(check.minutes)}
         </Text>
       </View>
@@ -58,12 +58,12 @@ function Check({ check, onDone }: { check: NextCheck; onDone: (changes: readonly
           {check.outcomes.map(({ sees, means, probability }) => (
             <View key={`${sees}${means}`} role="listitem" style={styles.outcome}>
               <View style={styles.sees}>
-                <Text variant="codeSmall">{sees}</Text>
+                <Text variant={isWords(sees) ? 'smallStrong' : 'codeSmall'}>{sees}</Text>
               </View>
               <View style={styles.means}>
                 <Text variant="small">{means}</Text>
               </View>
-              <Text variant="small" tone="soft">
+              <Text variant="small" tone="soft" style={styles.fixed}>
                 {percentWords(probability)}
               </Text>
             </View>
@@ -99,8 +99,11 @@ export function doneOf({ action, sockets }: NextCheck): { label: string; changes
   }
 }
 
+/** What is seen may be a code, or words such as "no failure". */
+const isWords = (sees: string) => /^[a-z]+ [a-z ]+$|^nothing$/.test(sees);
+
 function minutesWords(minutes: number): string {
-  return minutes < 120 ? `${Math.round(minutes)} min` : `${Math.round(minutes / 60)} h`;
+  return minutes < 120 ? `${Math.round(minutes)}\u00a0min` : `${Math.round(minutes / 60)}\u00a0h`;
 }
 
 const useStyles = makeStyles((t) => ({
@@ -110,6 +113,7 @@ const useStyles = makeStyles((t) => ({
   label: { flexShrink: 1 },
   outcomes: { gap: t.space.xs },
   outcome: { flexDirection: 'row', gap: t.space.md, alignItems: 'baseline' },
+  fixed: { flexShrink: 0 },
   sees: { flexBasis: 0, flexGrow: 2, minWidth: 0 },
   means: { flexBasis: 0, flexGrow: 5, minWidth: 0 },
 }));

@@ -8,7 +8,7 @@ import { Text } from '@/components/ui/text';
 import { sentenceCase } from '@/lib/layout/words';
 import type { Diagnosis } from '@/shared';
 import type { Bench } from '../bench';
-import { lanesOf } from '../marks';
+import { laneName, lanesOf } from '../marks';
 import type { ChangeDraft } from '../runs/change-draft';
 import { ShareBar } from './share-bar';
 
@@ -82,10 +82,10 @@ function codesOf({ index, formats }: Bench, socket: number): { format: string; t
 }
 
 function stateOf({ index }: Bench, { lanes }: Diagnosis, socket: number): string {
-  const own = new Set(
-    lanesOf(index, socket).map((lane) => `${index.document.memory.banks[index.bankOf(lane)]?.id}/${index.bitOf(lane)}`),
-  );
-  const states = lanes.filter(({ bank, bit }) => own.has(`${bank}/${bit}`)).map(({ state }) => state);
+  const own = lanesOf(index, socket).map((lane) => laneName(index, lane));
+  const states = lanes
+    .filter(({ bank, bit }) => own.some((lane) => lane.bank === bank && lane.bit === bit))
+    .map(({ state }) => state);
   if (states.length === 0) return '';
   if (states.includes('failed')) return 'It did not answer.';
   if (states.includes('mixed')) return 'It failed and answered in the same run.';

@@ -30,7 +30,7 @@ export function SuspectEntry({ suspect, onShow }: { suspect: Suspect; onShow: (s
             </Text>
             <Text tone="soft">{` ${suspectKind(suspect)}`}</Text>
           </Text>
-          <Text variant="heading" level={null}>
+          <Text variant="heading" level={null} style={styles.fixed}>
             {percentWords(suspect.probability)}
           </Text>
         </View>
@@ -106,6 +106,7 @@ const useStyles = makeStyles((t) => ({
   rankFirst: { backgroundColor: t.colours.pencil, borderColor: t.colours.pencil },
   words: { flex: 1, minWidth: 0, gap: t.space.xs },
   head: { flexDirection: 'row', justifyContent: 'space-between', alignItems: 'baseline', gap: t.space.sm },
+  fixed: { flexShrink: 0 },
   name: { flexShrink: 1 },
   details: { gap: t.space.xs },
   actions: { flexDirection: 'row', flexWrap: 'wrap', marginLeft: -t.space.sm },

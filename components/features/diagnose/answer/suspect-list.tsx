@@ -2,7 +2,6 @@ import { useState } from 'react';
 import { View } from 'react-native';
 import { Button } from '@/components/ui/button';
 import { Panel } from '@/components/ui/panel';
-import { Text } from '@/components/ui/text';
 import type { Diagnosis } from '@/shared';
 import { SuspectEntry } from './suspect-entry';
 
@@ -14,7 +13,9 @@ export function SuspectList({ diagnosis, onShow }: { diagnosis: Diagnosis; onSho
   const [all, setAll] = useState(false);
   const { suspects } = diagnosis;
   if (suspects.length === 0) return null;
-  const shown = all ? suspects : suspects.slice(0, atOnce);
+  // What explains nothing is merely not cleared yet: it is there on request.
+  const leading = suspects.filter(({ explains }) => explains.length > 0).slice(0, atOnce);
+  const shown = all ? suspects : leading;
   return (
     <Panel title="Suspects">
       <View role="list" aria-label="Suspects">
@@ -22,18 +23,14 @@ export function SuspectList({ diagnosis, onShow }: { diagnosis: Diagnosis; onSho
           <SuspectEntry key={suspect.id} suspect={suspect} onShow={onShow} />
         ))}
       </View>
-      {suspects.length > atOnce ? (
+      {suspects.length > leading.length ? (
         <Button
           kind="quiet"
-          label={all ? 'Show the first only' : `Show ${suspects.length - atOnce} more`}
+          label={all ? 'Show the first only' : `Show ${suspects.length - leading.length} more, all less likely`}
           aria-expanded={all}
           onPress={() => setAll(!all)}
         />
-      ) : (
-        <Text variant="fine" tone="soft">
-          All others hold less than these together.
-        </Text>
-      )}
+      ) : null}
     </Panel>
   );
 }

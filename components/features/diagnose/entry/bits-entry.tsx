@@ -3,7 +3,7 @@ import { makeStyles } from '@/components/theme';
 import { SegmentedControl } from '@/components/ui/segmented-control';
 import { Text } from '@/components/ui/text';
 import { bitName } from '@/lib/layout/words';
-import type { LayoutDocument } from '@/shared';
+import type { LaneName, LayoutDocument } from '@/shared';
 import { isMarked, toggleBit, type LanesEvidence } from './failing-bits';
 
 type BitsEntryProps = {
@@ -24,7 +24,7 @@ export function BitsEntry({ document, bits, onChange }: BitsEntryProps) {
   return (
     <View style={styles.all}>
       <Text variant="small" tone="soft">
-        Mark every bit that fails.
+        Mark every bit that fails, here or by a tap on its chip.
       </Text>
       {memory.banks.map((bank) => (
         <View key={bank.id} role="group" aria-label={`Bank ${bank.id}`} style={styles.bank}>
@@ -35,24 +35,16 @@ export function BitsEntry({ document, bits, onChange }: BitsEntryProps) {
             <Text variant="codeSmall">{bank.id}</Text>
           </View>
           <View style={styles.bits}>
-            {(bank.bits ?? Array.from({ length: memory.dataBits }, (_, bit) => bit)).map((bit) => {
-              const lane = { bank: bank.id, bit };
-              const marked = isMarked(bits, lane);
-              return (
-                <Pressable
-                  key={bit}
-                  role="checkbox"
-                  aria-checked={marked}
-                  aria-label={`Bit ${bitName(memory, bit)} of bank ${bank.id} fails`}
-                  onPress={() => onChange(toggleBit(bits, lane))}
-                  style={[styles.bit, marked && styles.marked]}
-                >
-                  <Text variant="codeSmall" tone={marked ? 'onPencil' : 'ink'}>
-                    {bitName(memory, bit)}
-                  </Text>
-                </Pressable>
-              );
-            })}
+            {inFours(bank.bits ?? Array.from({ length: memory.dataBits }, (_, bit) => bit)).map((four) => (
+              <View key={four[0]} style={styles.four}>
+                {four.map((bit) => (
+                  <Bit key={bit} {...{ memory, bits, onChange }} lane={{ bank: bank.id, bit }} />
+                ))}
+                {Array.from({ length: 4 - four.length }, (_, at) => (
+                  <View key={at} style={styles.blank} />
+                ))}
+              </View>
+            ))}
           </View>
         </View>
       ))}
@@ -68,12 +60,41 @@ export function BitsEntry({ document, bits, onChange }: BitsEntryProps) {
   );
 }
 
+/** Bits in fours, as they are counted on paper. */
+function inFours(bits: readonly number[]): number[][] {
+  return Array.from({ length: Math.ceil(bits.length / 4) }, (_, at) => bits.slice(at * 4, at * 4 + 4));
+}
+
+type BitProps = Omit<BitsEntryProps, 'document'> & { memory: LayoutDocument['memory']; lane: LaneName };
+
+function Bit({ memory, bits, onChange, lane }: BitProps) {
+  const styles = useStyles();
+  const marked = isMarked(bits, lane);
+  const name = bitName(memory, lane.bit);
+  return (
+    <Pressable
+      role="checkbox"
+      aria-checked={marked}
+      aria-label={`Bit ${name} of bank ${lane.bank} fails`}
+      onPress={() => onChange(toggleBit(bits, lane))}
+      style={[styles.bit, marked && styles.marked]}
+    >
+      <Text variant="codeSmall" tone={marked ? 'onPencil' : 'ink'}>
+        {marked ? `× ${name}` : name}
+      </Text>
+    </Pressable>
+  );
+}
+
 const useStyles = makeStyles((t) => ({
   all: { gap: t.space.md },
   bank: { flexDirection: 'row', gap: t.space.md, alignItems: 'flex-start' },
   name: { width: t.target, paddingTop: t.space.xs },
-  bits: { flex: 1, flexDirection: 'row', flexWrap: 'wrap', gap: t.space.xs },
+  bits: { flex: 1, gap: t.space.xs },
+  four: { flexDirection: 'row', gap: t.space.xs },
+  blank: { flex: 1 },
   bit: {
+    flex: 1,
     minWidth: t.target,
     minHeight: t.target,
     paddingHorizontal: t.space.xs,

@@ -31,7 +31,7 @@ export function CodeKeys({ entry, atFoot }: { entry: Entry; atFoot: boolean }) {
         </View>
         {listing ? (
           <View style={styles.cell}>
-            <Button wide label="Add, next line" disabled={ready === null} onPress={() => entry.submit('more')} />
+            <Button wide label="Next line" disabled={ready === null} onPress={() => entry.submit('more')} />
           </View>
         ) : null}
         <View style={styles.cell}>
@@ -63,5 +63,5 @@ const useStyles = makeStyles((t) => ({
     borderTopColor: t.colours.ink,
   },
   row: { flexDirection: 'row', gap: t.space.sm },
-  cell: { flex: 1, minWidth: 0 },
+  cell: { flexGrow: 1, flexShrink: 1, flexBasis: 'auto' },
 }));

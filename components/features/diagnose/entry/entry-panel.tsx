@@ -6,14 +6,15 @@ import { SegmentedControl } from '@/components/ui/segmented-control';
 import { Text } from '@/components/ui/text';
 import type { WorkspaceModel } from '../use-workspace-model';
 import { runTitle } from '../evidence-words';
-import { runInHand } from '../workspace-runs';
+import type { Workspace } from '../use-workspace';
+import { awaitsReport, runInHand } from '../workspace-runs';
 import { BitsEntry } from './bits-entry';
 import { CodeDisplay } from './code-display';
 import { CodeKeys } from './code-keys';
 import { EnteredList } from './entered-list';
 import { NotSure } from './not-sure';
 import { PassEntry } from './pass-entry';
-import { ReadingNote } from './reading-note';
+import { ReadingNote, saysMore } from './reading-note';
 import { bitsTab, passTab } from './use-entry';
 
 type EntryPanelProps = {
@@ -29,7 +30,6 @@ export function EntryPanel({ model, between, keysAtFoot = false }: EntryPanelPro
   const styles = useStyles();
   const { bench, workspace, entry } = model;
   const noteId = useId();
-  const expectsId = useId();
   const [unsure, setUnsure] = useState(false);
   const { format, code } = entry;
   const tabs = [
@@ -51,7 +51,6 @@ export function EntryPanel({ model, between, keysAtFoot = false }: EntryPanelPro
         ) : (
           choice
         )}
-        <EnteredList model={model} />
         {format !== null && code !== null ? (
           <View>
             <CodeDisplay
@@ -59,15 +58,19 @@ export function EntryPanel({ model, between, keysAtFoot = false }: EntryPanelPro
               code={code}
               onChange={entry.setCode}
               onSubmit={() => entry.submit(entry.lists && !entry.editing ? 'more' : 'answer')}
-              describedBy={`${expectsId} ${noteId}`}
+              describedBy={noteId}
             />
             <View style={styles.expects}>
-              <Text id={expectsId} variant="small" tone="soft" style={styles.words}>
-                {code.prefix.expects}
-              </Text>
+              <View style={styles.words}>
+                <ReadingNote id={noteId} bench={bench} entry={entry} />
+                {saysMore(entry) ? null : (
+                  <Text variant="small" tone="soft">
+                    {code.prefix.expects}
+                  </Text>
+                )}
+              </View>
               <Button kind="quiet" label="Not sure?" aria-haspopup="dialog" onPress={() => setUnsure(true)} />
             </View>
-            <ReadingNote id={noteId} bench={bench} entry={entry} />
             <NotSure open={unsure} onClose={() => setUnsure(false)} format={format} entry={entry} />
           </View>
         ) : null}
@@ -75,6 +78,7 @@ export function EntryPanel({ model, between, keysAtFoot = false }: EntryPanelPro
           <BitsEntry document={bench.document} bits={entry.bits} onChange={entry.setBits} />
         ) : null}
         {entry.tab === passTab ? <PassEntry document={bench.document} onPass={entry.pass} /> : null}
+        <EnteredList model={model} />
         {workspace.runs.length > 0 ? <EditActions model={model} /> : null}
       </View>
       {between}
@@ -89,6 +93,7 @@ function EntryTitle({ model: { workspace } }: { model: WorkspaceModel }) {
   const at = place?.run ?? runInHand(runs);
   const run = runs[at];
   const later = at > 0 || (run?.evidence.length ?? 0) > 0;
+  const title = titleOf(workspace);
   return (
     <View>
       {run !== undefined && later ? (
@@ -96,11 +101,15 @@ function EntryTitle({ model: { workspace } }: { model: WorkspaceModel }) {
           {`Run ${runTitle(run, at)}`}
         </Text>
       ) : null}
-      <Text variant="title">
-        {place !== null ? 'What did it report?' : later ? 'What does it report now?' : 'What did the board report?'}
-      </Text>
+      <Text variant="title">{title}</Text>
     </View>
   );
+}
+
+function titleOf({ runs, step }: Workspace): string {
+  if (step.at === 'entry' && step.place !== null) return 'What did it report?';
+  if (!awaitsReport(runs)) return 'What else did it report?';
+  return runs.length > 1 ? 'What does it report now?' : 'What did the board report?';
 }
 
 /** The ways out of typing where there is an answer to go back to. */
@@ -120,6 +129,6 @@ const useStyles = makeStyles((t) => ({
   top: { gap: t.space.md },
   tabs: { paddingVertical: t.space.hair },
   expects: { flexDirection: 'row', alignItems: 'center', justifyContent: 'space-between', gap: t.space.sm },
-  words: { flexShrink: 1 },
+  words: { flexShrink: 1, paddingVertical: t.space.xs },
   row: { flexDirection: 'row', flexWrap: 'wrap', gap: t.space.sm },
 }));

@@ -1,4 +1,6 @@
 import type { Evidence, LaneName } from '@/shared';
+import type { Bench } from '../bench';
+import { laneName, lanesOf } from '../marks';
 import { readLink, writeLink } from '../workspace-link';
 
 /** Evidence that names failing bits outright. */
@@ -18,6 +20,15 @@ export function toggleBit(bits: LanesEvidence, lane: LaneName): LanesEvidence {
 /** Whether a bit is marked. */
 export const isMarked = ({ failing }: LanesEvidence, lane: LaneName): boolean =>
   failing.some((other) => same(other, lane));
+
+/** Marks all bits that a chip holds, or takes their marks away where all of them have one. */
+export function toggleSocket({ index }: Bench, bits: LanesEvidence, label: string): LanesEvidence {
+  const at = index.socketByLabel.get(label);
+  const held = at === undefined ? [] : lanesOf(index, at).map((lane) => laneName(index, lane));
+  const all = held.every((lane) => isMarked(bits, lane));
+  const wanted = held.filter((lane) => all || !isMarked(bits, lane));
+  return wanted.reduce(toggleBit, bits);
+}
 
 /** Failing bits as the text of a draft. */
 export const writeBits = (bits: LanesEvidence): string =>

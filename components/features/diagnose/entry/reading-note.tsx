@@ -16,6 +16,12 @@ export function ReadingNote({ id, bench, entry }: { id: string; bench: Bench; en
   );
 }
 
+/** Whether the note has something to say of what is typed, so that what is expected may stand back. */
+export function saysMore({ code, refused }: Entry): boolean {
+  if (refused !== null) return true;
+  return code !== null && code.text !== '' && (code.prefix.reason !== null || code.prefix.complete);
+}
+
 function Words({ bench, entry }: { bench: Bench; entry: Entry }) {
   const { code, format, refused } = entry;
   if (refused !== null) return <Problem text={refused} />;
@@ -57,4 +63,4 @@ function Problem({ text }: { text: string }) {
   );
 }
 
-const useStyles = makeStyles((t) => ({ note: { minHeight: t.text.small.lineHeight, gap: t.space.hair } }));
+const useStyles = makeStyles((t) => ({ note: { gap: t.space.hair } }));

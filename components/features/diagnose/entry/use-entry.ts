@@ -87,7 +87,7 @@ export function useEntry(bench: Bench, workspace: Workspace): Entry {
     editing: place !== null,
     lists: format !== null && format.definition.after !== 'stops',
     complete: run?.complete ?? true,
-    setWhole: (complete) => void workspace.commit(setComplete(runs, at, complete), step),
+    setWhole: (complete) => void workspace.commit(setComplete(runs, { run: at, complete }), step),
     refused: held.refused,
     submit: (then) => {
       if (ready !== null) add(ready, then);
