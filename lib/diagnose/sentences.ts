@@ -14,9 +14,9 @@ export interface Told {
 }
 
 function percent(p: number): string {
-  if (p > 0.995) return 'more than 99 %';
-  if (p < 0.005) return 'less than 1 %';
-  return `${Math.round(p * 100)} %`;
+  if (p > 0.995) return 'more than 99\u00a0%';
+  if (p < 0.005) return 'less than 1\u00a0%';
+  return `${Math.round(p * 100)}\u00a0%`;
 }
 
 /** Why the headline says what it says, and what is not known, the most important first. */

@@ -21,30 +21,52 @@ export interface Findings {
 /** Suspects below this are not listed, unless fewer than `leastListed` would be. */
 const worthListing = 0.005;
 const leastListed = 3;
+/** Below this a mode explains nothing worth a word. */
+const least = 1e-5;
 /** From here the overlap of chip and contact is worth a second sum. */
 const countedTwiceFrom = 0.3;
 const mostListed = 24;
 
-/** The parts by probability, with reasons. Those that the evidence does not touch at all are left out. */
+/**
+ * The parts by probability, with reasons. A part that explains nothing of what failed is no suspect, however
+ * little it was tested.
+ */
 export function listSuspects(findings: Findings): Suspect[] {
   const { parts, posterior } = findings;
+  const failing = new Set(findings.runs.flatMap((run) => [...run.failing]));
   return parts
-    .map((part, at) => ({ part, at, probability: probabilityOf(posterior, at) }))
-    .filter(({ part }) => touchesAnything(findings, part))
+    .map((part, at) => ({
+      part,
+      at,
+      probability: probabilityOf(posterior, at),
+      explains: explaining(findings, at, failing),
+    }))
+    .filter(({ explains }) => explains > 0)
+    .sort((a, b) => likelier(b.explains, a.explains) || a.at - b.at)
+    .filter(({ explains }, i) => i < mostListed && (explains >= worthListing || i < leastListed))
     .sort((a, b) => likelier(b.probability, a.probability) || a.at - b.at)
-    .filter(({ probability }, i) => i < mostListed && (probability >= worthListing || i < leastListed))
     .map(({ part, at, probability }, i) => describe(findings, { part, at, probability, rank: i + 1 }));
+}
+
+/** Probability of the modes of a part that spoil any of these lanes. */
+function explaining({ parts, posterior, runs }: Findings, at: number, failing: ReadonlySet<Lane>): number {
+  let sum = 0;
+  parts[at]?.causes.forEach((cause, c) =>
+    cause.kinds.forEach((kind, k) => {
+      const own = posterior.kinds[at]?.[c]?.[k] ?? 0;
+      if (own < least) return;
+      const reaches = kind.scopes.some((scope, r) =>
+        scope?.lanes.some((lane) => failing.has(lane) && runs[r]?.failing.has(lane)),
+      );
+      if (reaches) sum += own;
+    }),
+  );
+  return sum;
 }
 
 /** Difference of two probabilities, 0 where only the last digits of a double differ. */
 function likelier(a: number, b: number): number {
   return Math.abs(a - b) < 1e-9 ? 0 : a - b;
-}
-
-function touchesAnything({ runs }: Findings, part: Part): boolean {
-  return part.causes.some((cause) =>
-    cause.kinds.some((kind) => kind.scopes.some((scope, r) => scope?.lanes.some((lane) => runs[r]?.failing.has(lane)))),
-  );
 }
 
 function leadingCause(findings: Findings, { part, at }: { part: Part; at: number }): { cause: Cause; at: number } {
