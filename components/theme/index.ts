@@ -1,9 +1,7 @@
 export type { Colours, ThemeName } from './colours';
 export { loadFonts } from './fonts';
 export { fixed, makeStyles, ruledPaper, sticky } from './make-styles';
-export type { Theme } from './theme';
-export { themeChoices, type ThemeChoice } from './theme-choice';
+export type { ThemeChoice } from './theme-choice';
 export { FixedTheme, ThemeProvider, useTheme, useThemeChoice } from './theme-provider';
 export type { TextVariant } from './type';
-export { useBreakpoint, type Breakpoint } from './use-breakpoint';
-export { useReducedMotion } from './use-media-query';
+export { useBreakpoint } from './use-breakpoint';

@@ -10,8 +10,11 @@ export const radius = { none: 0, sm: 4, md: 6, round: 999 } as const;
 /** Least side of anything that is tapped, px. */
 export const target = 48;
 
-/** Greatest widths in px: a form, a column of prose, a whole page. */
-export const measure = { form: 440, prose: 680, page: 1440 } as const;
+/**
+ * Widths in px: at most a form, a column of prose, a whole page; a side column at least and at most;
+ * a word or figure beside something, below which it goes under it.
+ */
+export const measure = { form: 440, prose: 680, page: 1440, sideLeast: 280, sideMost: 400, beside: 160 } as const;
 
 /** Width in px from which a layout may use two columns, and from which three. */
 export const breakpoints = { medium: 720, wide: 1080 } as const;

@@ -1,8 +1,7 @@
 /** What a person asked for: one theme, or whatever the system says. */
 export type ThemeChoice = 'system' | 'day' | 'night';
 
-/** The choices in the order in which they are offered. */
-export const themeChoices: readonly ThemeChoice[] = ['system', 'day', 'night'];
+const themeChoices: readonly ThemeChoice[] = ['system', 'day', 'night'];
 
 const storageKey = 'rowcall.theme';
 

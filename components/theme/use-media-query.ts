@@ -19,8 +19,3 @@ export function useMediaQuery(query: string): boolean {
     () => false,
   );
 }
-
-/** Whether the person asked the system for less motion. */
-export function useReducedMotion(): boolean {
-  return useMediaQuery('(prefers-reduced-motion: reduce)');
-}
