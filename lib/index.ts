@@ -28,3 +28,14 @@ export {
 } from './diagnose/noisy-or';
 export type { BankIndex, BitIndex, Lane, SocketIndex } from './brand';
 export { validateLayout } from './layout/validate';
+export { testSequence } from './report/silence';
+export { blamedSockets } from './report/blamed-sockets';
+export { builtInFamilies, findFamily } from './chips/families';
+export {
+  buildAddressMap,
+  decodeAddress,
+  encodeAddress,
+  type AddressMap,
+  type AddressOf,
+  type WordPlace,
+} from './place/address';

@@ -49,12 +49,6 @@ export function rangeWords(ids: readonly string[]): string {
   return listWords(ids);
 }
 
-/** The banks of a board: "bank A", "banks A to D". */
-export function banksWords(memory: Memory): string {
-  const ids = memory.banks.map((bank) => bank.id);
-  return ids.length === 1 ? bankWords(ids[0]!) : `banks ${rangeWords(ids)}`;
-}
-
 /** Numbers in ascending order with runs drawn together: "0 to 7 and 9". */
 export function numbersWords(numbers: readonly number[]): string {
   const runs: [number, number][] = [];

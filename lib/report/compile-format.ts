@@ -5,7 +5,7 @@ import { type Question, conventionsOf } from './conventions';
 import { buildFormatContext } from './format-context';
 import { buildKeypad, nextKeys } from './keypad';
 import type { CompiledFormat } from './meaning';
-import { readText } from './read';
+import { readEither } from './read-either';
 import { buildSilence } from './silence';
 import { writeText } from './write';
 
@@ -33,7 +33,7 @@ export function compileFormat(format: ReportFormat, index: LayoutIndex): Compile
     format: {
       id: format.id,
       name: format.name,
-      read: (text) => readText(reader, text),
+      read: (text) => readEither(reader, text),
       write: (lanes) => writeText(writer, lanes),
       next: (text) => nextKeys(keypad, text),
     },

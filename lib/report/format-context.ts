@@ -1,7 +1,7 @@
 import type { FormatField, ReportFormat } from '@/shared';
 import type { LayoutIndex } from '../layout/layout-index';
 import { type AddressMap, type SpanPlace, buildAddressMap } from '../place/address';
-import { bitName, lineLabel } from '../layout/words';
+import { bitName } from '../layout/words';
 import { digitsOf, lettersOf, radixOf } from './numerals';
 import { type Question, questionsOf } from './conventions';
 
@@ -120,9 +120,4 @@ export function bitsOfField(
   if (shows && site !== null && site.bits.length < dataBits.length && (width === null || width < dataBits.length))
     return width === null ? site.bits : site.bits.slice(0, width);
   return shows && width !== null && width >= allBits.length ? allBits : dataBits;
-}
-
-/** What the trade calls a bit of this board, such as "D3". */
-export function lineOfBit(context: FormatContext, bit: number): string {
-  return lineLabel(context.index.document.memory, bit);
 }

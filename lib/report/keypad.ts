@@ -145,12 +145,13 @@ export function nextKeys(keypad: Keypad, text: string): Prefix {
   const live = liveStates(keypad, text);
   const result = readText(keypad.reader, text);
   const keys = keypad.keys.map((key) => ({ ...key, enabled: liveStates(keypad, text + key.text).length > 0 }));
-  const dead = live.length === 0 && !result.ok && text !== '';
+  // A whole code that names something beyond the board is no dead end, but it has its words all the same.
+  const dead = live.every(({ state }) => state.done) && !result.ok && text !== '';
   const states = dead ? prefixStates(keypad.reader.context, keypad.fields, text) : [];
   return {
     keys,
     complete: result.ok,
-    reason: dead ? (deadReason(keypad, states) ?? result.reason) : null,
+    reason: dead ? ((live.length === 0 ? deadReason(keypad, states) : null) ?? result.reason) : null,
     possible: possibleOf(keypad, live, result),
     expects: keypad.expects,
     fills: fillsOf(live),

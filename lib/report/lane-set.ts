@@ -8,7 +8,8 @@ export interface LaneSet {
 /** Lanes that both name; null names all. */
 export function intersection(a: LaneSet | null, b: LaneSet | null): LaneSet | null {
   if (a === null || b === null) return a ?? b;
-  return { has: a.has.map((value, at) => value & b.has[at]!), speaks: a.speaks || b.speaks };
+  const speaks = (a.speaks && isAlive(b)) || (b.speaks && isAlive(a));
+  return { has: a.has.map((value, at) => value & b.has[at]!), speaks };
 }
 
 /** True where something is left that a code can mean. */

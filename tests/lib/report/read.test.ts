@@ -318,3 +318,18 @@ describe('a convention that the layout does not know', () => {
     ]);
   });
 });
+
+describe('a doubt', () => {
+  it('about a count leaves both readings', () => {
+    expect(meaning(beeps, '3 LONG 5 OR 6 SHORT')).toEqual(['C4', 'C5']);
+    const read = beeps.format.read('3 long 5 or 6 short');
+    expect(read.ok && [read.text, read.readings.map(({ takes }) => takes)]).toEqual([
+      '3 LONG 5 SHORT or 3 LONG 6 SHORT',
+      [['"5" is right'], ['"6" is right']],
+    ]);
+  });
+
+  it('that holds something impossible says which', () => {
+    expect(meaning(beeps, '3 LONG 8 OR 10 SHORT')).toBe('With "10": Bit 10: this board has bits 1 to 8, and 9.');
+  });
+});
