@@ -1,5 +1,6 @@
 import type { FieldProblem, ProblemDocument } from '@/shared/api/problem';
 import type { ErrorCode } from '@/shared/error-codes';
+import type { LayoutProblem } from '@/shared/layout/problem';
 
 /** The server answered, and said what is wrong. Decide by `code`, never by the words. */
 export class ApiProblem extends Error {
@@ -8,6 +9,8 @@ export class ApiProblem extends Error {
   /** Words for the person: what is particular to this case, else the title of the code. */
   override readonly message: string;
   readonly fields: readonly FieldProblem[];
+  /** With layout-invalid: everything that is wrong or doubtful in the layout document. */
+  readonly layoutProblems: readonly LayoutProblem[];
   readonly requestId: string;
   /** Seconds to wait before the next attempt, where the server said so. */
   readonly retryAfter: number | null;
@@ -19,6 +22,7 @@ export class ApiProblem extends Error {
     this.status = document.status;
     this.message = document.detail ?? document.title;
     this.fields = document.fields ?? [];
+    this.layoutProblems = document.problems ?? [];
     this.requestId = document.requestId;
     this.retryAfter = retryAfter;
   }

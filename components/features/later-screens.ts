@@ -9,4 +9,5 @@ export { SignInScreen } from './account/sign-in-screen';
 export { SignUpScreen } from './account/sign-up-screen';
 export { PeopleScreen } from './admin/people-screen';
 export { BoardScreen } from './boards/board-screen';
+export { ContributeScreen } from './contribute/contribute-screen';
 export { DiagnoseScreen } from './diagnose/diagnose-screen';
