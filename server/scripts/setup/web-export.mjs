@@ -20,6 +20,9 @@ const sources = [
   'server/scripts/finish-export.mjs',
 ];
 
+/** Environment of every build. */
+export const exportSettings = { NODE_ENV: 'production', EXPO_OFFLINE: '1', EXPO_NO_TELEMETRY: '1', CI: '1' };
+
 const finish = 'server/scripts/finish-export.mjs';
 
 /** Kept inside the export, under a name that is never served. */
@@ -65,12 +68,7 @@ export const ensureWebExport = async (folder = 'dist') => {
   say('Building the web application (half a minute)...');
   const making = `${folder}.new`;
   rmSync(making, { recursive: true, force: true });
-  await build(['node_modules/expo/bin/cli', 'export', '-p', 'web', '--output-dir', making], {
-    NODE_ENV: 'production',
-    EXPO_OFFLINE: '1',
-    EXPO_NO_TELEMETRY: '1',
-    CI: '1',
-  });
+  await build(['node_modules/expo/bin/cli', 'export', '-p', 'web', '--output-dir', making], exportSettings);
   await build([finish, making, folder]);
   writeFileSync(join(making, mark), hash);
   rmSync(folder, { recursive: true, force: true });
