@@ -1,6 +1,6 @@
 import type { TypedField } from './field-lanes';
 import type { FormatContext } from './format-context';
-import { fold } from './typed-text';
+import { fold, isSpace } from './typed-text';
 
 /** A field with the text that was typed into it. */
 export interface FilledField {
@@ -26,6 +26,8 @@ interface Walk {
   readonly fields: ReadonlyMap<number, TypedField>;
   readonly text: string;
   readonly states: PrefixState[];
+  /** Places that lead nowhere for a part, so that each is tried once. */
+  readonly dead: Set<number>;
 }
 
 function wordsFrom({ text }: Walk, field: TypedField, at: number): number[] {
@@ -48,6 +50,13 @@ function digitsFrom({ text }: Walk, { part, width }: TypedField, at: number): nu
   return ends;
 }
 
+function freeFrom({ text }: Walk, { part }: TypedField, at: number): number[] {
+  if (!part.free) return [];
+  let to = at;
+  while (to < text.length && !isSpace(text[to]!)) to++;
+  return to === at ? [] : [to];
+}
+
 /** The text of a field in the machine's own form, where capitals and small letters differ in its words. */
 function ownForm(field: TypedField, text: string): string {
   return field.texts.find((entry) => !entry.padded && fold(entry.text) === text)?.text ?? text;
@@ -60,8 +69,10 @@ interface Step {
 }
 
 function follow(walk: Walk, { part, at, filled }: Step): void {
-  const { context, fields, text, states } = walk;
-  if (states.length >= mostStates) return;
+  const { context, fields, text, states, dead } = walk;
+  const place = part * (text.length + 1) + at;
+  if (states.length >= mostStates || dead.has(place)) return;
+  const before = states.length;
   const current = context.parts[part];
   if (current === undefined) {
     if (at === text.length) states.push({ filled, open: null, fixed: '', done: true });
@@ -77,13 +88,18 @@ function follow(walk: Walk, { part, at, filled }: Step): void {
   }
   const field = fields.get(part)!;
   states.push(...opened(walk, field, { part, at, filled }));
-  for (const end of new Set([...wordsFrom(walk, field, at), ...digitsFrom(walk, field, at)])) {
+  for (const end of new Set([
+    ...wordsFrom(walk, field, at),
+    ...digitsFrom(walk, field, at),
+    ...freeFrom(walk, field, at),
+  ])) {
     follow(walk, {
       part: part + 1,
       at: end,
       filled: [...filled, { field, text: ownForm(field, text.slice(at, end)) }],
     });
   }
+  if (states.length === before) dead.add(place);
 }
 
 /** The state in which the rest of the text is the beginning of a field. */
@@ -108,7 +124,7 @@ export function prefixStates(
   fields: ReadonlyMap<number, TypedField>,
   text: string,
 ): PrefixState[] {
-  const walk: Walk = { context, fields, text: fold(text), states: [] };
+  const walk: Walk = { context, fields, text: fold(text), states: [], dead: new Set() };
   follow(walk, { part: 0, at: 0, filled: [] });
   return walk.states;
 }

@@ -3,6 +3,7 @@ import { lane } from '@/lib/brand';
 import { buildLayoutIndex } from '@/lib/layout/build-layout-index';
 import { compileFormat } from '@/lib/report/compile-format';
 import type { LayoutDocument } from '@/shared';
+import { buildFormat } from '@/tests/factories/format';
 import { type FormatKind, type LayoutOptions, buildLayout, formatKinds } from '@/tests/factories/layout';
 
 function ready(document: LayoutDocument, id: string) {
@@ -119,4 +120,20 @@ describe('any text at all', () => {
       { seed: 5, numRuns: 500 },
     );
   });
+});
+
+describe('a code of many numbers without a sign between them', () => {
+  const counts = Array.from({ length: 30 }, () => ({ field: 'count' as const }));
+  const glued = buildFormat({
+    parts: [{ field: 'bank', notation: 'letter' }, ...counts, { field: 'bit', notation: 'octal' }],
+  });
+
+  it.each(['A' + '1'.repeat(40) + 'X', 'A' + '1'.repeat(511), 'A' + '1 '.repeat(250)])(
+    'is refused or read without trying every split: %s',
+    (text) => {
+      // Every way to split 40 digits into 31 numbers would outlast the test by far.
+      expect(glued.format.read(text).ok).toBe(false);
+      expect(glued.format.next(text).possible).toBeDefined();
+    },
+  );
 });
