@@ -16,6 +16,7 @@ export const notFound: RequestHandler = () => {
  */
 export const errorHandler =
   (logger: Logger): ErrorRequestHandler =>
+  // eslint-disable-next-line max-params -- Express knows an error handler by its four parameters.
   (cause: unknown, req, res, next) => {
     const error = asAppError(cause);
     if (error.status >= 500) logger.error({ err: cause, requestId: req.id }, 'request failed');
@@ -25,7 +26,7 @@ export const errorHandler =
       .set(error.headers)
       .set('Cache-Control', 'no-store')
       .type('application/problem+json')
-      .send(JSON.stringify(presentProblem(error, String(req.id))));
+      .send(JSON.stringify(presentProblem(error, req.id)));
   };
 
 const presentProblem = (error: AppError, requestId: string): ProblemDocument => {

@@ -1,8 +1,14 @@
 import { randomUUID } from 'node:crypto';
 import type { RequestHandler } from 'express';
 import { pino, type DestinationStream, type Logger } from 'pino';
-import { pinoHttp } from 'pino-http';
 import type { Config } from '@/server/config';
+
+declare module 'express-serve-static-core' {
+  interface Request {
+    /** Named in the log, in problem documents and in X-Request-Id. */
+    id: string;
+  }
+}
 
 const secretKeys = ['password', 'currentPassword', 'newPassword', 'token', 'accessToken', 'refreshToken', 'secret'];
 
@@ -25,25 +31,28 @@ export const loggableUrl = (url: string): string => url.replace(/((?:^|[?&;])tok
 
 const requestIdPattern = /^[A-Za-z0-9._-]{8,64}$/;
 
-/** Gives each request an id (kept from a proxy's X-Request-Id when it is a sane one) and logs its end. */
-export const requestLog = (logger: Logger): RequestHandler =>
-  pinoHttp({
-    logger,
-    genReqId: (req, res) => {
-      const given = req.headers['x-request-id'];
-      const id = typeof given === 'string' && requestIdPattern.test(given) ? given : randomUUID();
-      res.setHeader('X-Request-Id', id);
-      return id;
-    },
-    serializers: {
-      req: (req: { id: string; method: string; url: string }) => ({
-        id: req.id,
-        method: req.method,
-        url: loggableUrl(req.url),
-      }),
-      res: (res: { statusCode: number }) => ({ status: res.statusCode }),
-    },
-    customLogLevel: (_req, res, error) => (error || res.statusCode >= 500 ? 'error' : 'info'),
-    // The error handler has logged the cause; here only the outcome is noted.
-    customErrorObject: (_req, _res, _error, value: object) => ({ ...value, err: undefined }),
-  });
+/** Gives each request an id (kept from a proxy's X-Request-Id when it is a sane one) and logs its end in one line. */
+export const requestLog =
+  (logger: Logger): RequestHandler =>
+  (req, res, next) => {
+    const id = requestIdOf(req.headers['x-request-id']);
+    const began = performance.now();
+    req.id = id;
+    res.setHeader('X-Request-Id', id);
+    res.once('close', () => {
+      const status = res.statusCode;
+      const entry = {
+        req: { id, method: req.method, url: loggableUrl(req.originalUrl) },
+        res: { status },
+        responseTime: Math.round(performance.now() - began),
+      };
+      // The error handler has logged the cause; here only the outcome is noted.
+      const words = res.writableFinished ? 'request completed' : 'request aborted';
+      if (status >= 500) logger.error(entry, words);
+      else logger.info(entry, words);
+    });
+    next();
+  };
+
+const requestIdOf = (given: unknown): string =>
+  typeof given === 'string' && requestIdPattern.test(given) ? given : randomUUID();

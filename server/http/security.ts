@@ -1,5 +1,5 @@
 import type { RequestHandler } from 'express';
-import { rateLimit } from 'express-rate-limit';
+import { ipKeyGenerator, rateLimit } from 'express-rate-limit';
 import helmet from 'helmet';
 import type { Config } from '@/server/config';
 import { AppError } from '@/server/errors';
@@ -39,12 +39,19 @@ export const generalLimit = (config: Config): RequestHandler =>
   rateLimit({
     windowMs: 60_000,
     limit: config.rateLimitPerMinute,
+    keyGenerator: ({ ip }) => callerOf(ip ?? ''),
     standardHeaders: 'draft-7',
     legacyHeaders: false,
     handler: () => {
       throw new AppError('too-many-requests');
     },
   });
+
+/** Who counts as one caller: an IPv4 address, or the network of an IPv6 one. An IPv4 one needs no reading. */
+const callerOf = (ip: string): string => {
+  if (ip.startsWith('::ffff:')) return ip.slice('::ffff:'.length);
+  return ip.includes(':') ? ipKeyGenerator(ip) : ip;
+};
 
 const writes = new Set(['POST', 'PUT', 'PATCH', 'DELETE']);
 

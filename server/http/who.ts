@@ -37,6 +37,6 @@ const read = (req: Request, res: Response, config: Platform['config']): Who => {
 export const contextOf = (platform: Platform, req: Request, res: Response): Context => ({
   ...platform,
   who: (res.locals.who as Who | undefined) ?? { standing: 'guest' },
-  requestId: String(req.id),
+  requestId: req.id,
   ip: req.ip ?? '',
 });

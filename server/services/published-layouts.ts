@@ -2,8 +2,10 @@ import { promisify } from 'node:util';
 import { brotliCompress, constants, gzip } from 'node:zlib';
 import { LRUCache } from 'lru-cache';
 import { QueryTypes } from 'sequelize';
+import { batchLookups } from './batched-lookup';
 import type { Context, Platform } from '@/server/context';
 import { AppError } from '@/server/errors';
+import type { Database } from '@/server/models';
 
 /** How the bytes of an answer are packed. */
 export type Encoding = 'identity' | 'gzip' | 'br';
@@ -12,10 +14,6 @@ export type Encoding = 'identity' | 'gzip' | 'br';
 interface Rendered {
   readonly tag: string;
   readonly bodies: Partial<Record<Encoding, Buffer>>;
-}
-
-interface Pointer {
-  readonly versionId: string | null;
 }
 
 const shrink = {
@@ -43,16 +41,33 @@ export const sendablePublished = async (
   return { tag: known.tag, body };
 };
 
+/** What the table of boards says of an address; null while no version is published. */
+type Pointer = string | null;
+
+const lookups = new WeakMap<Database, (slug: string) => Promise<Pointer | undefined>>();
+
+/** One lookup a database: the route that everybody asks must not wait for a query of its own each time. */
+const lookupOf = (db: Database): ((slug: string) => Promise<Pointer | undefined>) => {
+  const known = lookups.get(db);
+  if (known) return known;
+  const lookup = batchLookups(async (slugs) => {
+    const rows = await db.sequelize.query<{ slug: string; versionId: Pointer }>(
+      'SELECT slug, published_version_id AS versionId FROM layouts WHERE slug IN (:slugs)',
+      { type: QueryTypes.SELECT, replacements: { slugs: [...slugs] } },
+    );
+    return new Map(rows.map(({ slug, versionId }) => [slug, versionId]));
+  });
+  lookups.set(db, lookup);
+  return lookup;
+};
+
 /** The id of the version of a board that is published now; throws `not-found`, or `layout-retired`. */
 export const publishedVersionId = async ({ db }: Platform, slug: string): Promise<string> => {
-  const [row] = await db.sequelize.query<Pointer>(
-    `SELECT published_version_id AS versionId FROM layouts WHERE slug = ${db.sequelize.escape(slug)}`,
-    { type: QueryTypes.SELECT },
-  );
-  if (row?.versionId) return row.versionId;
-  const retired = row && (await retiredRemarks(db, slug));
-  if (retired === undefined) throw new AppError('not-found', { message: 'There is no such board.' });
-  throw new AppError('layout-retired', { message: retired ?? undefined });
+  const pointer = await lookupOf(db)(slug);
+  if (pointer) return pointer;
+  const remarks = pointer === null ? await retiredRemarks(db, slug) : undefined;
+  if (remarks === undefined) throw new AppError('not-found', { message: 'There is no such board.' });
+  throw new AppError('layout-retired', { message: remarks ?? undefined });
 };
 
 const retiredRemarks = async (db: Platform['db'], slug: string): Promise<string | null | undefined> => {
