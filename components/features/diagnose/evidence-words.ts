@@ -1,39 +1,50 @@
+import { lanesWords, type BitIndex, type LayoutIndex } from '@/lib';
+import { sentenceCase } from '@/lib/layout/words';
 import type { Change, Evidence, LaneName, Run } from '@/shared';
+import type { Bench } from './bench';
 
 /** A piece of evidence as it is shown in a list: what stands large, and what explains it. */
 export interface EvidenceWords {
   readonly text: string;
   readonly note: string;
+  /** The text is a code as the machine showed it, not words. */
+  readonly code: boolean;
 }
 
-/** Evidence in words. `formatName` gives the name of a report format by its id, null where the board has none such. */
-export function evidenceWords(seen: Evidence, formatName: (id: string) => string | null): EvidenceWords {
+/** Evidence in words. */
+export function evidenceWords(seen: Evidence, { index, formatName }: Bench): EvidenceWords {
   switch (seen.kind) {
-    case 'code':
-      return {
-        text: seen.text,
-        note: (formatName(seen.format) ?? 'a format that this board does not have').toLowerCase(),
-      };
+    case 'code': {
+      const name = formatName(seen.format) ?? 'a format that this board does not have';
+      return { text: seen.text, note: name.charAt(0).toLowerCase() + name.slice(1), code: true };
+    }
     case 'lanes':
-      return { text: lanesWords(seen.failing), note: passedWords(seen.passed) };
+      return { text: lanesOrNone(index, seen.failing), note: passedWords(seen.passed), code: false };
     case 'mask':
       return {
         text: `${seen.bank} ${seen.mask.toString(16).toUpperCase()}`,
         note: 'mask of failing bits, hexadecimal',
+        code: true,
       };
     case 'pass':
       return {
         text: seen.banks === undefined ? 'All passed' : `${bankList(seen.banks)} passed`,
         note: 'no failure reported',
+        code: false,
       };
   }
 }
 
-/** "A 3, 5 and C 1": failing lanes, bank by bank. */
-function lanesWords(lanes: readonly LaneName[]): string {
-  const byBank = new Map<string, number[]>();
-  for (const { bank, bit } of lanes) byBank.set(bank, [...(byBank.get(bank) ?? []), bit]);
-  return [...byBank].map(([bank, bits]) => `${bank}: ${bits.sort((a, b) => a - b).join(', ')}`).join('; ') || 'none';
+/** "Bits 4 to 7 of every bank": failing lanes. A lane that the board does not have is left to the answer to refuse. */
+function lanesOrNone(index: LayoutIndex, lanes: readonly LaneName[]): string {
+  const known = lanes.flatMap(({ bank, bit }) => {
+    const at = index.bankByName.get(bank);
+    return at === undefined || bit >= index.bitCount ? [] : [index.laneOf(at, bit as BitIndex)];
+  });
+  const words = sentenceCase(lanesWords(index, known));
+  const unknown = lanes.length - known.length;
+  if (unknown === 0) return words === '' ? 'No bit' : words;
+  return `${words === '' ? '' : `${words}, and `}${unknown} that this board does not have`;
 }
 
 function passedWords(passed: 'rest' | 'none' | readonly LaneName[]): string {

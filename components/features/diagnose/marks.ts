@@ -5,7 +5,7 @@ import type { Diagnosis, LaneName, LaneState } from '@/shared';
 /** Suspects whose number stands on the sketch; more would hide the board. */
 const mostRanks = 5;
 /** Suspects below this probability are told in the list only. */
-const leastRanked = 0.005;
+const leastRanked = 0.03;
 
 /** The sketch of an answer: what each socket did in the last run, and the first suspects by number. */
 export function answerMarks(index: LayoutIndex, diagnosis: Diagnosis): SketchMarks {
@@ -21,7 +21,7 @@ export function answerMarks(index: LayoutIndex, diagnosis: Diagnosis): SketchMar
   }
   index.document.sockets.forEach(({ label }, at) => {
     const states = lanesOf(index, at).map((lane) => stateOf.get(nameOf(laneName(index, lane))) ?? 'untested');
-    const state = diagnosis.lanes.length === 0 ? 'plain' : socketState(states);
+    const state = diagnosis.outcome === 'no-evidence' ? 'plain' : socketState(states);
     sockets.set(label, { state, rank: ranks.get(label) });
   });
   return { sockets, sharedParts };

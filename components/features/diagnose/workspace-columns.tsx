@@ -91,7 +91,7 @@ function SideBySide({ model, onPrint }: ColumnsProps) {
     </View>
   );
   const answer =
-    model.diagnosis.outcome === 'no-evidence' ? (
+    model.diagnosis.evidence.length === 0 ? (
       <NoReportYet model={model} />
     ) : (
       <>

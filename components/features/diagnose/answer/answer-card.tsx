@@ -52,8 +52,9 @@ export function AnswerCard({ diagnosis }: { diagnosis: Diagnosis }) {
           ))}
         </View>
       )}
+      <Unread diagnosis={diagnosis} />
       {diagnosis.groups.map((group) => (
-        <GroupMembers key={group.why} group={group} />
+        <GroupMembers key={group.why} group={group} nextCheck={diagnosis.nextChecks[0]?.label ?? null} />
       ))}
       {diagnosis.pairs.map(({ parts, labels, probability }) => (
         <Text key={parts.join()} variant="small">
@@ -67,6 +68,20 @@ export function AnswerCard({ diagnosis }: { diagnosis: Diagnosis }) {
       )}
     </Sheet>
   );
+}
+
+/** Evidence that was not used, and why: an answer that rests on less than was typed says so. */
+function Unread({ diagnosis }: { diagnosis: Diagnosis }) {
+  const unread = diagnosis.evidence.filter(({ ok }) => !ok);
+  return unread.map(({ run, index, text, reason }) => (
+    <Text key={`${run}.${index}`} variant="small">
+      <Text variant="smallStrong" tone="pencil">
+        Not used:{' '}
+      </Text>
+      <Text variant="codeSmall">{text.length > 40 ? `${text.slice(0, 40)}…` : text}</Text>
+      {` ${reason ?? ''}`}
+    </Text>
+  ));
 }
 
 const useStyles = makeStyles((t) => ({ more: { gap: t.space.xs } }));

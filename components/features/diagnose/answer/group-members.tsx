@@ -4,8 +4,8 @@ import { Text } from '@/components/ui/text';
 import type { SuspectGroup } from '@/shared';
 import { ShareBar } from './share-bar';
 
-/** Parts that the evidence cannot tell apart, with their shares, why, and what would tell them apart. */
-export function GroupMembers({ group }: { group: SuspectGroup }) {
+/** Parts that the evidence cannot tell apart, with their shares, why, and what would tell them apart where the next check does not say it anyway. */
+export function GroupMembers({ group, nextCheck }: { group: SuspectGroup; nextCheck: string | null }) {
   const styles = useStyles();
   return (
     <View style={styles.group}>
@@ -17,7 +17,7 @@ export function GroupMembers({ group }: { group: SuspectGroup }) {
         ))}
       </View>
       <Text variant="small">{group.why}</Text>
-      {group.check === null ? null : (
+      {group.check === null || group.check === nextCheck ? null : (
         <Text variant="small">
           <Text variant="smallStrong">To tell them apart: </Text>
           {group.check}

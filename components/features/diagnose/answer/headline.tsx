@@ -3,6 +3,7 @@ import { makeStyles } from '@/components/theme';
 import { TallyStrokes } from '@/components/ui/tally-strokes';
 import { Text } from '@/components/ui/text';
 import type { Diagnosis } from '@/shared';
+import { stated } from '../stated';
 
 /** Words for how sure an answer is, beside its percentage. */
 const sureWords: Record<Diagnosis['sure'], string> = {
@@ -16,7 +17,7 @@ const sureWords: Record<Diagnosis['sure'], string> = {
 /** What to do, larger than anything else, with how sure that is. */
 export function Headline({ diagnosis }: { diagnosis: Diagnosis }) {
   const styles = useStyles();
-  const { headline, probability, sure } = diagnosis;
+  const { headline, probability, sure, outcome } = diagnosis;
   const place = onePlace(diagnosis);
   const short = place !== null && headline === `Pull ${place} first.`;
   return (
@@ -37,9 +38,9 @@ export function Headline({ diagnosis }: { diagnosis: Diagnosis }) {
       </View>
       {probability === null ? null : (
         <View style={short ? styles.odds : styles.oddsBelow}>
-          <TallyStrokes probability={probability} layout={short ? 'above' : 'beside'} />
+          <TallyStrokes probability={stated(probability)} layout={short ? 'above' : 'beside'} />
           <Text variant="small" tone="soft">
-            {sureWords[sure]}
+            {outcome === 'group' ? 'together' : sureWords[sure]}
           </Text>
         </View>
       )}

@@ -43,16 +43,19 @@ export function NextChecks({ diagnosis, onDone, onOther }: NextChecksProps) {
 function Check({ check, onDone }: { check: NextCheck; onDone: (changes: readonly Change[]) => void }) {
   const styles = useStyles();
   const done = doneOf(check);
+  // The first sentence says what to do; what follows explains it.
+  const [first = '', rest = ''] = check.label.split(/(?<=\.) (.*)/s);
   return (
     <Sheet kind="boxed" gap="sm" label="Next check">
       <View style={styles.head}>
         <Text variant="subheading" level={2} style={styles.label}>
-          {`Next: ${check.label.charAt(0).toLowerCase()}${check.label.slice(1)}`}
+          {`Next: ${first.charAt(0).toLowerCase()}${first.slice(1)}`}
         </Text>
         <Text variant="small" tone="soft" style={styles.fixed}>
           {minutesWords(check.minutes)}
         </Text>
       </View>
+      {rest === '' ? null : <Text variant="small">{rest}</Text>}
       {check.outcomes.length === 0 ? null : (
         <View role="list" aria-label="What the board may report" style={styles.outcomes}>
           {check.outcomes.map(({ sees, means, probability }) => (

@@ -2,6 +2,7 @@ import { View } from 'react-native';
 import { makeStyles } from '@/components/theme';
 import { percentWords } from '@/components/ui/percent';
 import { Text } from '@/components/ui/text';
+import { stated } from '../stated';
 
 /** A share (0 to 1) as a line of ink beside its words. The words alone say all of it. */
 export function ShareBar({ label, share, mono = false }: { label: string; share: number; mono?: boolean }) {
@@ -16,7 +17,7 @@ export function ShareBar({ label, share, mono = false }: { label: string; share:
       </View>
       <View style={styles.number}>
         <Text variant="smallStrong" align="right">
-          {percentWords(share)}
+          {percentWords(stated(share))}
         </Text>
       </View>
     </View>

@@ -5,6 +5,7 @@ import { Button } from '@/components/ui/button';
 import { percentWords } from '@/components/ui/percent';
 import { Text } from '@/components/ui/text';
 import type { Suspect } from '@/shared';
+import { stated } from '../stated';
 import { suspectKind, suspectName } from './suspect-words';
 
 /** One suspect: its rank, what it is, how likely, why; opened, everything that speaks for and against it. */
@@ -31,7 +32,7 @@ export function SuspectEntry({ suspect, onShow }: { suspect: Suspect; onShow: (s
             <Text tone="soft">{` ${suspectKind(suspect)}`}</Text>
           </Text>
           <Text variant="heading" level={null} style={styles.fixed}>
-            {percentWords(suspect.probability)}
+            {percentWords(stated(suspect.probability))}
           </Text>
         </View>
         {reason === undefined ? null : <Text variant="small">{reason}</Text>}

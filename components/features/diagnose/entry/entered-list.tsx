@@ -26,7 +26,7 @@ export function EnteredList({ model: { bench, workspace, entry } }: { model: Wor
       </Text>
       <View role="list" aria-label="Reports of this run" style={styles.row}>
         {seen.map((one, index) => {
-          const { text } = evidenceWords(one, bench.formatName);
+          const { text } = evidenceWords(one, bench);
           return (
             <View key={index} role="listitem">
               <Chip

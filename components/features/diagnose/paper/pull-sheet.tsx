@@ -7,6 +7,7 @@ import { percentWords } from '@/components/ui/percent';
 import { Text } from '@/components/ui/text';
 import { Wordmark } from '@/components/features/shell/wordmark';
 import type { Diagnosis, Run } from '@/shared';
+import { stated } from '../stated';
 import { suspectKind, suspectName } from '../answer/suspect-words';
 import type { Bench } from '../bench';
 import { evidenceWords, runTitle } from '../evidence-words';
@@ -48,7 +49,7 @@ export function PullSheet({ bench, runs, diagnosis, marks, view }: PullSheetProp
           {diagnosis.headline}
         </Text>
         <Text variant="small">
-          {diagnosis.probability === null ? '' : `${percentWords(diagnosis.probability)}. `}
+          {diagnosis.probability === null ? '' : `${percentWords(stated(diagnosis.probability))}. `}
           {diagnosis.sentences.slice(0, 4).join(' ')}
         </Text>
       </View>
@@ -122,7 +123,7 @@ function Reported({ bench, runs }: { bench: Bench; runs: readonly Run[] }) {
         <View key={at}>
           <Text variant="small">{runTitle(run, at)}</Text>
           {run.evidence.slice(0, mostEvidence).map((seen, index) => {
-            const { text, note } = evidenceWords(seen, bench.formatName);
+            const { text, note } = evidenceWords(seen, bench);
             return (
               <Text key={index} variant="codeSmall">
                 {text}
@@ -153,7 +154,7 @@ function Suspects({ diagnosis }: { diagnosis: Diagnosis }) {
           <Text variant="small" style={styles.words}>
             {suspectKind(suspect)}
           </Text>
-          <Text variant="smallStrong">{percentWords(suspect.probability)}</Text>
+          <Text variant="smallStrong">{percentWords(stated(suspect.probability))}</Text>
         </View>
       ))}
     </View>

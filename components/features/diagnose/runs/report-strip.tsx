@@ -13,7 +13,7 @@ export function ReportStrip({ model: { bench, workspace } }: { model: WorkspaceM
   const index = (run?.evidence.length ?? 0) - 1;
   const seen = run?.evidence[index];
   if (run === undefined || seen === undefined) return null;
-  const { text, note } = evidenceWords(seen, bench.formatName);
+  const { text, note, code } = evidenceWords(seen, bench);
   const lead = at === 0 ? `The board reports, ${note}` : `Run ${runTitle(run, at)}: ${note}`;
   return (
     <View style={styles.strip}>
@@ -21,7 +21,9 @@ export function ReportStrip({ model: { bench, workspace } }: { model: WorkspaceM
         <Text variant="small" tone="soft">
           {index > 0 ? `${lead}, the last of ${index + 1}` : lead}
         </Text>
-        <Text variant={text.length > 14 ? 'code' : 'codeLarge'}>{text}</Text>
+        <Text variant={code ? (text.length > 14 ? 'code' : 'codeLarge') : 'subheading'} level={null}>
+          {text}
+        </Text>
       </View>
       <Button
         label="Change"

@@ -55,13 +55,13 @@ function OneRun({ run, at, bench, runs, diagnosis, ...act }: RunListProps & { ru
       </View>
       {waits ? <Text tone="soft">{last ? 'What does it report now?' : 'Nobody reported anything.'}</Text> : null}
       {run.evidence.map((seen, index) => {
-        const { text, note } = evidenceWords(seen, bench.formatName);
+        const { text, note, code } = evidenceWords(seen, bench);
         const read = diagnosis.evidence.find((one) => one.run === at && one.index === index);
         const refused = read !== undefined && !read.ok ? read.reason : null;
         return (
           <View key={index} style={styles.seen}>
             <View style={styles.words}>
-              <Text variant={text.length > 12 ? 'codeSmall' : 'codeMedium'}>{text}</Text>
+              <Text variant={code ? (text.length > 12 ? 'codeSmall' : 'codeMedium') : 'strong'}>{text}</Text>
               <Text variant="small" tone="soft">
                 {[note, ...(read?.notes ?? [])].join('; ')}
               </Text>
