@@ -1,5 +1,6 @@
-import { Page } from '@/components/ui/page';
+import { lazyScreen } from '@/components/ui/lazy-screen';
 
-export default function Route() {
-  return <Page title="Review">{null}</Page>;
-}
+export default lazyScreen(
+  () => import('@/components/features/later-screens'),
+  (screens) => screens.ReviewListScreen,
+);

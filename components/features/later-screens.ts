@@ -11,3 +11,5 @@ export { PeopleScreen } from './admin/people-screen';
 export { BoardScreen } from './boards/board-screen';
 export { ContributeScreen } from './contribute/contribute-screen';
 export { DiagnoseScreen } from './diagnose/diagnose-screen';
+export { ReviewListScreen } from './review/review-list-screen';
+export { ReviewScreen } from './review/review-screen';

@@ -28,6 +28,8 @@ export type TableProps<Row> = {
   rowKey: (row: Row) => string;
   /** A row to point out, with pencil wash. */
   isMarked?: (row: Row) => boolean;
+  /** Rows close together, for a table in which nothing is tapped. */
+  dense?: boolean;
   /** What to show where there is no row. */
   empty?: ReactNode;
 };
@@ -55,7 +57,7 @@ export function Table<Row>(props: TableProps<Row>) {
 
 type BodyProps<Row> = TableProps<Row> & { captionId: string };
 
-function WideRows<Row>({ columns, rows, rowKey, isMarked, captionId }: BodyProps<Row>) {
+function WideRows<Row>({ columns, rows, rowKey, isMarked, dense, captionId }: BodyProps<Row>) {
   const styles = useStyles();
   return (
     <View role="table" aria-labelledby={captionId} aria-rowcount={rows.length + 1}>
@@ -72,7 +74,11 @@ function WideRows<Row>({ columns, rows, rowKey, isMarked, captionId }: BodyProps
       </View>
       <View role="rowgroup">
         {rows.map((row) => (
-          <View key={rowKey(row)} role="row" style={[styles.row, styles.entry, isMarked?.(row) && styles.marked]}>
+          <View
+            key={rowKey(row)}
+            role="row"
+            style={[styles.row, styles.entry, !dense && styles.tappable, isMarked?.(row) && styles.marked]}
+          >
             {columns.map((column, at) => (
               <View
                 key={column.key}
@@ -134,8 +140,8 @@ const useStyles = makeStyles((t) => ({
   table: { gap: t.space.sm },
   row: { flexDirection: 'row', gap: t.space.lg, alignItems: 'center', paddingHorizontal: t.space.xs },
   head: { paddingVertical: t.space.sm, borderBottomWidth: t.line.thin, borderBottomColor: t.colours.ink },
+  tappable: { minHeight: t.target },
   entry: {
-    minHeight: t.target,
     paddingVertical: t.space.xs,
     borderBottomWidth: t.line.thin,
     borderBottomColor: t.colours.rule,

@@ -45,6 +45,7 @@ export function CodeTable({ bench, format }: CodeTableProps) {
             cell: ({ sockets }) => <Text variant="code">{listWords(sockets, 8) || 'none'}</Text>,
           },
         ]}
+        dense
         rows={shown}
         rowKey={({ lane }) => String(lane)}
         empty={<Text tone="soft">This format names no single bit of the board.</Text>}

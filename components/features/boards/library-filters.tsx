@@ -1,7 +1,8 @@
 import { useQuery } from '@tanstack/react-query';
+import { useState } from 'react';
 import { View } from 'react-native';
 import { layoutFiltersQuery } from '@/components/api/layouts';
-import { makeStyles } from '@/components/theme';
+import { makeStyles, useBreakpoint } from '@/components/theme';
 import { Button } from '@/components/ui/button';
 import { SelectField } from '@/components/ui/select-field';
 import type { LayoutFilters } from '@/shared/api/layouts';
@@ -36,7 +37,24 @@ const filters: readonly Filter[] = [
 export function LibraryFilters({ link, onChange, onClear }: LibraryFiltersProps) {
   const styles = useStyles();
   const { data } = useQuery(layoutFiltersQuery);
-  const narrowed = filters.some(({ name }) => link[name] !== undefined);
+  const phone = useBreakpoint() === 'phone';
+  const [open, setOpen] = useState(false);
+  const chosenCount = filters.filter(({ name }) => link[name] !== undefined).length;
+  const narrowed = chosenCount > 0;
+  // On a phone four lists would push the boards out of sight.
+  if (phone && !open) {
+    return (
+      <View style={styles.row}>
+        <Button
+          kind="plain"
+          label={narrowed ? `Filters, ${chosenCount} set` : 'Filters'}
+          aria-expanded={false}
+          onPress={() => setOpen(true)}
+        />
+        {narrowed ? <Button kind="quiet" label="Clear filters" onPress={onClear} /> : null}
+      </View>
+    );
+  }
   return (
     <View role="group" aria-label="Narrow the list" style={styles.row}>
       {filters.map(({ name, label, any, values, words = (value) => value }) => {

@@ -58,9 +58,9 @@ export function searchWords({ q, maker, kind, family, bits }: LibraryLink): stri
     .join(', ');
 }
 
-/** "64K x 1 dynamic": a chip family by its id, where the id tells it; else the id as it is. */
+/** "64K × 1 dynamic": a chip family by its id, where the id tells it; else the id as it is. */
 export function familyLabel(id: string): string {
   const [, kind, words, width, rest] = /^(dynamic|static)-(\d+[km]?)-(\d+)(?:-(.+))?$/.exec(id) ?? [];
   if (kind === undefined || words === undefined || width === undefined) return id;
-  return `${words.toUpperCase()} x ${width} ${kind}${rest === undefined ? '' : `, ${rest.replaceAll('-', ' ')}`}`;
+  return `${words.toUpperCase()} × ${width} ${kind}${rest === undefined ? '' : `, ${rest.replaceAll('-', ' ')}`}`;
 }

@@ -1,8 +1,8 @@
 import { useLocalSearchParams, useRouter } from 'expo-router';
-import { useCallback, useEffect, useMemo, useState } from 'react';
+import { useCallback, useEffect, useMemo, useRef, useState } from 'react';
 import { View } from 'react-native';
 import { useSession } from '@/components/api/session';
-import { makeStyles } from '@/components/theme';
+import { makeStyles, useBreakpoint } from '@/components/theme';
 import { Button, ButtonLink } from '@/components/ui/button';
 import { Field } from '@/components/ui/field';
 import { Page } from '@/components/ui/page';
@@ -22,6 +22,8 @@ export function LibraryScreen() {
   const { link, change } = useLibraryLink();
   const { text, setText } = useSearchText(link.q ?? '', change);
   const { mayContribute } = useSession();
+  const phone = useBreakpoint() === 'phone';
+  const add = <ButtonLink href="/contribute" label={mayContribute ? 'Add a board' : 'Your board is not here?'} />;
   const clear = () => {
     setText('');
     change(cleared);
@@ -29,8 +31,8 @@ export function LibraryScreen() {
   return (
     <Page
       title="Boards"
-      lead="Every board whose memory somebody has documented."
-      actions={<ButtonLink href="/contribute" label={mayContribute ? 'Add a board' : 'Your board is not here?'} />}
+      lead={phone ? undefined : 'Every board whose memory somebody has documented.'}
+      actions={phone ? undefined : add}
     >
       <View style={styles.search}>
         <Field
@@ -47,6 +49,7 @@ export function LibraryScreen() {
         <LibraryFilters link={link} onChange={change} onClear={() => change({ ...cleared, q: link.q })} />
       </View>
       <LibraryList link={link} onClear={clear} />
+      {phone ? add : null}
     </Page>
   );
 }
@@ -62,19 +65,23 @@ function useLibraryLink() {
   return { link, change };
 }
 
-/** The field follows every key, the link once the hand rests; the link leads where somebody went back. */
+/** The field follows every key, the link once the hand rests; whoever goes back gets the search of then. */
 function useSearchText(inLink: string, change: (next: LibraryLink) => void) {
   const [text, setText] = useState(inLink);
   const settled = useDebounced(text, pause);
-  const [followed, setFollowed] = useState(inLink);
-  if (followed !== inLink) {
-    setFollowed(inLink);
-    if (inLink !== settled.trim()) setText(inLink);
-  }
+  // What this field wrote into the link last: anything else came from outside.
+  const written = useRef(inLink);
   useEffect(() => {
-    if (settled === text && settled.trim() !== inLink)
-      change({ q: settled.trim() === '' ? undefined : settled.trim() });
-  }, [settled, text, inLink, change]);
+    const search = settled.trim();
+    if (search === written.current) return;
+    written.current = search;
+    change({ q: search === '' ? undefined : search });
+  }, [settled, change]);
+  useEffect(() => {
+    if (inLink === written.current) return;
+    written.current = inLink;
+    setText(inLink);
+  }, [inLink]);
   return { text, setText };
 }
 

@@ -23,7 +23,7 @@ type SubmitBarProps = {
 /** Sends the document, or says why it cannot be sent yet. */
 export function SubmitBar({ checked, settled, instead, busy, failure, onSend, onNew }: SubmitBarProps) {
   const styles = useStyles();
-  const reason = whyNot(checked, settled);
+  const reason = settled ? whyNot(checked) : 'Checking…';
   return (
     <View style={styles.all}>
       {instead === null ? null : (
@@ -52,8 +52,7 @@ export function SubmitBar({ checked, settled, instead, busy, failure, onSend, on
   );
 }
 
-function whyNot({ sent, errors }: CheckedText, settled: boolean): string | null {
-  if (!settled) return 'Checking…';
+function whyNot({ sent, errors }: CheckedText): string | null {
   if (errors > 0) return 'First put the errors right.';
   return sent === null ? 'There is no document yet.' : null;
 }

@@ -67,7 +67,7 @@ test('a moderator sees the reviews', async () => {
   fakeServer({ 'GET /me': { status: 200, body: { person: buildPerson({ role: 'moderator' }) } } });
   renderPage(page);
   expect(await screen.findByRole('link', { name: 'Review' })).toBeVisible();
-  expect(placeNames()).toEqual(['Look up', 'Boards', 'Review', 'Account']);
+  expect(placeNames()).toEqual(['Look up', 'Boards', 'Contribute', 'Review', 'Account']);
 });
 
 test('losing the network is said, and taken back when it returns', () => {
