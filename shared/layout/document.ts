@@ -2,7 +2,7 @@ import { z } from 'zod';
 import { limits } from '../limits';
 import { addressMap, memory, multiplexing } from './memory';
 import { chipFamily, rail, sharedPart, socket } from './parts';
-import { label, words } from './primitives';
+import { words, type label } from './primitives';
 import { reportFormat, workedExample } from './report-format';
 import { screenMap } from './screen-map';
 

@@ -7,7 +7,6 @@ export const words = (max: number) =>
     .trim()
     .min(1, 'Write at least one character.')
     .max(max, `At most ${max} characters.`)
-    // eslint-disable-next-line no-control-regex
     .regex(/^[^\u0000-\u0008\u000b-\u001f\u007f]*$/, 'Control characters are not allowed.');
 
 /** A label as printed on the board, such as U14, IC3 or 7C. */

@@ -1,6 +1,5 @@
 import { z } from 'zod';
-import { label, words } from './primitives';
-import { address } from './primitives';
+import { label, words, address } from './primitives';
 
 /** One plane of the picture. Planes that share an address differ by their bits, others by base or register. */
 export const plane = z.strictObject({
