@@ -36,20 +36,20 @@ export type BoardSketchProps = {
   label?: string;
   /** For paper: whole, in one ink, without buttons. The sketch turns to it by itself when the page is printed. */
   print?: boolean;
-  /** Greatest height of the drawing, px. */
+  /** Greatest height of the drawing, px; a container's width, or a phone's worth, where nothing is said. */
   greatestHeight?: number;
 };
 
 /** The board from above or below: every socket with what is known of it, and a table that says the same. */
 export function BoardSketch(props: BoardSketchProps) {
   const { index, marks, view, onView, onPick, picked = null, showControls = true, compact = false } = props;
-  const { greatestHeight = sketchScale.greatestHeight } = props;
   const styles = useStyles();
   const printing = useMediaQuery('print');
   const print = props.print === true || printing;
   const inks = useInks(print);
   const [aims, setAims] = useState(0);
   const [width, setWidth] = useState<number>(sketchScale.firstWidth);
+  const greatestHeight = props.greatestHeight ?? Math.max(sketchScale.greatestHeight, width);
   const { turn, solderSide } = view;
   const scene = useMemo(() => buildScene(index, { turn, solderSide }), [index, turn, solderSide]);
   const axes = useMemo(() => findAxes(index, scene.sockets), [index, scene]);

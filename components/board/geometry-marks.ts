@@ -104,19 +104,27 @@ const badgeCorners: readonly Point[] = [
   { x: -1, y: 1 },
 ];
 
+/** A round badge of a rank. */
+export interface BadgePlace extends Point {
+  readonly radius: number;
+}
+
 /**
- * Centre of the rank badge of a chip or part: the first corner, from the upper right, where it covers none of
- * `keepClear`; where every corner does, the same a little further out; where that does too, the upper right.
+ * Where the rank badge of a chip or part goes, px: at the first corner, from the upper right, where it covers none of
+ * `keepClear`; where every corner does, a little further out, then smaller. The upper right where nothing helps.
  */
-export function badgePlace(box: Box, radius: number, keepClear: readonly Box[]): Point {
-  const places = [0, 0.4].flatMap((out) =>
-    badgeCorners.map(({ x, y }) => ({
-      x: box.x + x * (box.width / 2 + out * radius),
-      y: box.y + y * (box.height / 2 + out * radius),
-    })),
+export function badgePlace(box: Box, radii: readonly number[], keepClear: readonly Box[]): BadgePlace {
+  const places = radii.flatMap((radius) =>
+    [0, 0.2, 0.4].flatMap((out) =>
+      badgeCorners.map(({ x, y }) => ({
+        x: box.x + x * (box.width / 2 + out * radius),
+        y: box.y + y * (box.height / 2 + out * radius),
+        radius,
+      })),
+    ),
   );
-  const near = keepClear.filter((letters) => distanceToBox(box, letters) <= box.width + box.height + 2 * radius);
-  return (
-    places.find((place) => near.every((letters) => distanceToBox(place, letters) >= radius)) ?? (places[0] as Point)
-  );
+  const far = box.width + box.height + 4 * Math.max(...radii);
+  const near = keepClear.filter((letters) => distanceToBox(box, letters) <= far);
+  const clear = places.find((place) => near.every((letters) => distanceToBox(place, letters) >= place.radius));
+  return clear ?? (places[0] as BadgePlace);
 }

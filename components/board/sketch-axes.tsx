@@ -13,10 +13,8 @@ export function SketchAxes({ axes, fit, inks }: { axes: Axes; fit: Fit; inks: In
   const { rows, columns } = axes;
   const left = fit.namesAt;
   const top = fit.array.y - fit.array.height / 2;
-  const pitch = (columns?.names ?? []).reduce(
-    (least, { at }, n, all) => (n === 0 ? least : Math.min(least, (at - (all[n - 1]?.at ?? 0)) * fit.scale)),
-    Infinity,
-  );
+  const across = (columns?.names ?? []).map(({ at }) => at * fit.scale);
+  const pitch = Math.min(...across.slice(1).map((x, n) => x - (across[n] as number)));
   const header = top - margin;
   const hidden: object = { 'aria-hidden': true };
   return (

@@ -59,7 +59,14 @@ export function SketchDrawing(props: SketchDrawingProps) {
   const enlarged = factor > 1;
   const chosen = picked ? keyOf(picked) : null;
   const aim = view.zoom === 'suspect' ? (suspect?.box ?? null) : null;
-  const opening = useOpening({ fit, lie: `${view.turn}${view.solderSide}`, aim, aims, factor, onFactor });
+  const { ref, lookAtNext, reveal, toDrawing } = useOpening({
+    fit,
+    lie: `${view.turn}${view.solderSide}`,
+    aim,
+    aims,
+    factor,
+    onFactor,
+  });
 
   const idOf = useCallback(
     (target: Pick<Target, 'key' | 'at'>) => `${base}${target.key.startsWith('socket:') ? 's' : 'p'}${target.at}`,
@@ -72,19 +79,19 @@ export function SketchDrawing(props: SketchDrawingProps) {
     first: suspect,
     reach: sketchScale.reach / fit.scale,
     idOf,
-    placeOf: (event) => fit.toUnits(opening.toDrawing(event)),
+    placeOf: (event) => fit.toUnits(toDrawing(event)),
     onTap: (target) => {
       pick(target);
       // Too small to tell one socket from the next: come closer at the same time.
       if (scene.side * fit.scale >= sketchScale.tappableSocket) return;
-      opening.lookAtNext(target.box);
+      lookAtNext(target.box);
       onFactor(sketchScale.readableSocket / (scene.side * wholeScale(input)));
     },
     onPick: pick,
-    onReach: (target) => opening.reveal(target.box),
+    onReach: (target) => reveal(target.box),
     onKey: (key, at) => {
       if (!props.onActionKey(key)) return false;
-      opening.lookAtNext(at.box);
+      lookAtNext(at.box);
       return true;
     },
   });
@@ -104,11 +111,7 @@ export function SketchDrawing(props: SketchDrawingProps) {
     style: [styles.drawing, { maxWidth: fit.width }],
   };
   return (
-    <View
-      ref={opening.ref}
-      {...listbox}
-      style={[styles.opening, enlarged && styles.enlarged, print ? null : { height }]}
-    >
+    <View ref={ref} {...listbox} style={[styles.opening, enlarged && styles.enlarged, print ? null : { height }]}>
       <Svg {...svg} viewBox={`0 0 ${fit.width} ${fit.height}`}>
         {input.edge ? (
           <SketchEdge edge={scene.edge} name={index.document.board.view.edgeName} fit={fit} inks={inks} />

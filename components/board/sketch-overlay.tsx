@@ -1,16 +1,16 @@
 import { useMemo } from 'react';
 import { G, Path, Rect, Text as SvgText } from 'react-native-svg';
 import { sketchScale } from '@/components/theme/sketch-scale';
-import type { Box, Point } from './geometry';
+import type { Box } from './geometry';
 import { lettersOf, type PartDrawing, type SocketDrawing } from './geometry-drawing';
 import { letterWidth } from './geometry-label';
-import { badgePlace, bodyPath } from './geometry-marks';
+import { badgePlace, bodyPath, type BadgePlace } from './geometry-marks';
 import type { TargetKey } from './geometry-scene';
 import type { Inks } from './sketch-inks';
 import type { SketchMarks, SocketMark } from './sketch-types';
 import { PencilRing } from './socket-body';
 
-const { badge, badgeLetters, font, line, gap } = sketchScale;
+const { badges, font, line, gap } = sketchScale;
 
 type SketchOverlayProps = {
   sockets: readonly SocketDrawing[];
@@ -100,38 +100,40 @@ type BadgeProps = {
 };
 
 /** Above the middle of what it names. */
-const tagPlace = ({ x, y, height }: Box) => ({ x, y: y - height / 2 - badge - gap.small });
+const tagPlace = ({ x, y, height }: Box) => ({ x, y: y - height / 2 - badges[0] - gap.small, radius: badges[0] });
 
 function Badge({ box, rank, label, tone, keepClear, inks }: BadgeProps) {
-  const place = badgePlace(box, badge, keepClear);
+  const place = badgePlace(box, badges, keepClear);
   const text = label === null ? String(rank) : `${rank} ${label}`;
   return <Tag place={place} text={text} tone={tone} solid={rank === 1} hangs={label !== null} inks={inks} />;
 }
 
-type TagProps = { place: Point; text: string; tone: string; solid?: boolean; hangs?: boolean; inks: Inks };
+type TagProps = { place: BadgePlace; text: string; tone: string; solid?: boolean; hangs?: boolean; inks: Inks };
 
 /** A few letters in a round frame: around `place`, or to the right of it where it hangs on a socket. */
 function Tag({ place, text, tone, solid = false, hangs = false, inks }: TagProps) {
-  const width = Math.max(2 * badge, (letterWidth(text, 'mono') + 0.5) * badgeLetters);
-  const left = hangs ? -badge : -width / 2;
+  const { x, y, radius } = place;
+  const letters = radius * 1.4;
+  const width = Math.max(2 * radius, (letterWidth(text, 'mono') + 0.5) * letters);
+  const left = hangs ? -radius : -width / 2;
   return (
-    <G transform={`translate(${place.x} ${place.y})`}>
+    <G transform={`translate(${x} ${y})`}>
       <Rect
         x={left}
-        y={-badge}
-        rx={badge}
+        y={-radius}
+        rx={radius}
         width={width}
-        height={2 * badge}
+        height={2 * radius}
         fill={solid ? tone : inks.sheet}
         stroke={tone}
         strokeWidth={line.mark}
       />
       <SvgText
         x={left + width / 2}
-        y={badgeLetters * 0.34}
+        y={letters * 0.34}
         textAnchor="middle"
         fontFamily={font.monoBold}
-        fontSize={badgeLetters}
+        fontSize={letters}
         fill={solid ? inks.onPencil : tone}
       >
         {text}

@@ -1,5 +1,6 @@
 import { useCallback, useEffect, useLayoutEffect, useRef } from 'react';
 import type { View } from 'react-native';
+import { sketchScale } from '@/components/theme/sketch-scale';
 import type { Box, Point } from './geometry';
 import type { Fit } from './geometry-fit';
 
@@ -76,11 +77,11 @@ export function useOpening({ fit, lie, aim, aims, factor, onFactor }: OpeningInp
       const element = elementOf(ref.current);
       if (!element) return;
       const { x, y, width, height } = fit.toPx(box);
-      const room = 16;
-      const into = (start: number, size: number, from: number, to: number) =>
-        Math.max(to + room - size, Math.min(start, from - room));
-      element.scrollLeft = into(element.scrollLeft, element.clientWidth, x - width / 2, x + width / 2);
-      element.scrollTop = into(element.scrollTop, element.clientHeight, y - height / 2, y + height / 2);
+      const room = sketchScale.margin;
+      const into = (start: number, { size, middle, half }: { size: number; middle: number; half: number }) =>
+        Math.max(middle + half + room - size, Math.min(start, middle - half - room));
+      element.scrollLeft = into(element.scrollLeft, { size: element.clientWidth, middle: x, half: width / 2 });
+      element.scrollTop = into(element.scrollTop, { size: element.clientHeight, middle: y, half: height / 2 });
     },
     [fit],
   );

@@ -33,8 +33,8 @@ export const sketchScale = {
   namesGap: space.md,
   /** Widest that the names at the left may be. */
   greatestNames: 76,
-  badge: 10,
-  badgeLetters: 14,
+  /** Radius of a rank badge, and where chips lie close. */
+  badges: [10, 8],
   pin1: 2,
   hatch: 6,
   edge: 26,
