@@ -153,7 +153,6 @@ export type ReviewDetail = z.output<typeof reviewDetail>;
 export const remarksInput = z.strictObject({
   remarks: words(2000).describe('What the author should know, in words; he gets them by mail.'),
 });
-export type RemarksInput = z.output<typeof remarksInput>;
 
 /** Answer of POST /layout-checks. */
 export const layoutCheck = z.strictObject({
