@@ -16,13 +16,14 @@ const rateOf = async (url) => {
   // What a browser takes.
   const headers = { 'accept-encoding': 'gzip, deflate, br' };
   const result = await autocannon({ url, connections, duration: seconds, headers });
-  if (result.non2xx + result.errors > 0)
-    throw new Error(`${url}: ${result.non2xx + result.errors} answers are not 200.`);
+  if (result.non2xx + result.errors > 0) {
+    throw new Error(`${url}: ${result.non2xx} answers are not 2xx, ${result.errors} requests got none.`);
+  }
   return result.requests.total / result.duration;
 };
 
 const start = async (args, env) => {
-  const server = startNode(['--import', 'tsx', ...args], { env, quiet: true });
+  const server = startNode(['--import', 'tsx', ...args], { env });
   let id;
   server.child.on('message', (message) => {
     id = message.id;
