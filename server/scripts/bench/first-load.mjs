@@ -25,8 +25,9 @@ const buildBaseline = async (folder) => {
     "import { Text } from 'react-native';\nexport default function Page() {\n  return <Text>One line of text.</Text>;\n}\n",
   );
   const cli = resolve('node_modules/expo/bin/cli');
-  const { status, output } = await run(process.execPath, [cli, 'export', folder, '-p', 'web', '--output-dir', 'out'], {
+  const { status, output } = await run(process.execPath, [cli, 'export', '-p', 'web', '--output-dir', 'out'], {
     env: exportSettings,
+    cwd: folder,
   });
   if (status !== 0) throw new Error(`The page to compare with was not built: ${output.slice(-2000)}`);
   return join(folder, 'out');

@@ -13,14 +13,15 @@ const keptOutput = 200_000;
  *
  * @param {string} command
  * @param {string[]} args
- * @param {{ env?: Record<string, string | undefined> }} [options]
+ * @param {{ env?: Record<string, string | undefined>, cwd?: string }} [options]
  * @returns {Promise<{ status: number | null, output: string }>}
  */
-export const run = (command, args, { env = {} } = {}) =>
+export const run = (command, args, { env = {}, cwd } = {}) =>
   new Promise((resolve) => {
     if (stopped) return resolve({ status: null, output: 'stopped' });
     const child = spawn(command, args, {
       detached: true,
+      cwd,
       env: { ...process.env, ...env },
       stdio: ['ignore', 'pipe', 'pipe'],
     });
