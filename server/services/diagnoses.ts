@@ -1,6 +1,6 @@
 import { LRUCache } from 'lru-cache';
 import { spendComputing } from './computing-limit';
-import { requireSoundLayout } from './layout-check';
+import { requireSoundLayout, spendForDocument } from './layout-check';
 import { publishedVersionId } from './published-layouts';
 import { buildLayoutIndex, diagnose, type LayoutIndex } from '@/lib';
 import type { Context } from '@/server/context';
@@ -17,18 +17,23 @@ const indexes = new LRUCache<string, LayoutIndex>({ max: 64 });
  * cannot be read is no error: the diagnosis tells why.
  */
 export const diagnoseRuns = async (context: Context, { layout, runs }: DiagnosisRequest): Promise<Diagnosis> => {
-  spendComputing(context, typeof layout === 'string' ? 'published' : 'document');
-  const index =
-    typeof layout === 'string'
-      ? await publishedIndex(context, layout)
-      : buildLayoutIndex(requireSoundLayout(layout).document);
+  const index = typeof layout === 'string' ? await publishedIndex(context, layout) : sentIndex(context, layout);
   return diagnose(index, runs);
+};
+
+const sentIndex = (context: Context, sent: unknown): LayoutIndex => {
+  spendForDocument(context, sent);
+  return buildLayoutIndex(requireSoundLayout(sent).document);
 };
 
 const publishedIndex = async (context: Context, slug: string): Promise<LayoutIndex> => {
   const versionId = await publishedVersionId(context, slug);
-  const known = indexes.get(versionId);
-  if (known) return known;
+  const index = indexes.get(versionId) ?? (await loadIndex(context, versionId));
+  spendComputing(context, { of: 'published', sockets: index.document.sockets.length });
+  return index;
+};
+
+const loadIndex = async (context: Context, versionId: string): Promise<LayoutIndex> => {
   const version = await context.db.LayoutVersion.findByPk(versionId);
   if (!version) throw new RangeError(`the published version ${versionId} is missing`);
   const index = buildLayoutIndex(readStoredDocument(version));

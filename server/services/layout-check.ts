@@ -22,9 +22,15 @@ export const checkLayout = (sent: unknown): LayoutCheck => {
   };
 };
 
+/** Counts the work that a document makes before it is looked at; throws `too-many-requests`. */
+export const spendForDocument = (context: Context, sent: unknown): void => {
+  const { sockets } = (sent ?? {}) as { sockets?: unknown };
+  spendComputing(context, { of: 'document', sockets: Array.isArray(sockets) ? sockets.length : 0 });
+};
+
 /** The check for whoever asks: the same, within what one caller may have computed. */
 export const checkSentLayout = (context: Context, sent: unknown): LayoutCheck => {
-  spendComputing(context, 'document');
+  spendForDocument(context, sent);
   return checkLayout(sent);
 };
 
