@@ -1,55 +1,10 @@
-import type { FaultMode, PartKind } from '@/shared';
-import { bankIndex, type Lane, type SocketIndex } from '../brand';
+import type { Lane, SocketIndex } from '../brand';
 import type { LayoutIndex } from '../layout/layout-index';
-import { channelsOf, servedLanes } from '../layout/served-lanes';
-import { bankWords } from '../layout/words';
 import type { Priors } from './priors';
+import { twoKinds, type Builder, type Cause, type Kind, type Part } from './cause-types';
 import { Scopes, type Scope } from './scopes';
+import { sharedParts, shortParts, unlistedParts } from './shared-causes';
 import { labelOf, type Chip, type Timeline } from './timeline';
-
-/** One way for a cause to be there; the kinds of one cause exclude each other. */
-export interface Kind {
-  readonly intermittent: boolean;
-  /** Prior probability. */
-  readonly prior: number;
-  /** Probability that it does not show on a lane that it spoils and that is tested. */
-  readonly miss: number;
-  /** What it spoils in each run; null for nothing. */
-  readonly scopes: readonly (Scope | null)[];
-  /** The run before which handling cured or caused it; null where it lasts. */
-  readonly cured: number | null;
-}
-
-/** A part in a mode. */
-export interface Cause {
-  readonly mode: FaultMode;
-  /** Which channel, data pin or line it is, in words; null where the part has but one. */
-  readonly where: string | null;
-  readonly kinds: readonly Kind[];
-}
-
-/** What can be at fault. */
-export interface Part {
-  readonly kind: PartKind;
-  readonly id: string;
-  /** In words, by where it is now. */
-  readonly label: string;
-  /** The socket of a position, or where a chip is in the last run. */
-  readonly socket: SocketIndex | null;
-  readonly cameFrom: SocketIndex | null;
-  /** Label of the shared part in the layout. */
-  readonly sharedPart: string | null;
-  readonly causes: readonly Cause[];
-}
-
-interface Builder {
-  readonly index: LayoutIndex;
-  readonly timeline: Timeline;
-  readonly priors: Priors;
-  readonly scopes: Scopes;
-  /** The list that repeats a scope for every run, made once a scope. */
-  readonly everyRun: Map<Scope, readonly Scope[]>;
-}
 
 const firstRuns = new WeakMap<LayoutIndex, { priors: Priors; parts: readonly Part[] }>();
 
@@ -73,34 +28,6 @@ function listAfresh(builder: Builder): readonly Part[] {
     ...unlistedParts(builder),
     ...shortParts(builder),
   ];
-}
-
-/** The two kinds of a fault: always there, or coming and going. */
-function twoKinds(
-  { priors, timeline, everyRun }: Builder,
-  prior: number,
-  scopes: Scope | readonly (Scope | null)[],
-): Kind[] {
-  let perRun: readonly (Scope | null)[];
-  if ('lanes' in scopes) {
-    perRun = everyRun.get(scopes) ?? new Array<Scope>(timeline.runCount).fill(scopes);
-    everyRun.set(scopes, perRun as readonly Scope[]);
-  } else perRun = scopes;
-  const hard = {
-    intermittent: false,
-    prior: prior * (1 - priors.intermittentShare),
-    miss: 1 - priors.detectionHard,
-    scopes: perRun,
-    cured: null,
-  };
-  const comesAndGoes = {
-    intermittent: true,
-    prior: prior * priors.intermittentShare,
-    miss: 1 - priors.detectionIntermittent,
-    scopes: perRun,
-    cured: null,
-  };
-  return [hard, comesAndGoes];
 }
 
 /** The lanes behind each data pin of a socket's chip. */
@@ -275,95 +202,4 @@ function fittingKinds(builder: Builder, socket: SocketIndex): Kind[] {
       cured: next === Infinity ? null : next,
     }));
   });
-}
-
-function sharedParts(builder: Builder): Part[] {
-  const { index, priors, scopes } = builder;
-  return index.document.sharedParts.flatMap((part) => {
-    const served = servedLanes(index, part);
-    if (served.length === 0) return [];
-    const channels = channelsOf(index, part);
-    const causes: Cause[] = [
-      { mode: 'whole', where: null, kinds: twoKinds(builder, priors.sharedWhole, scopes.of(served)) },
-    ];
-    if (channels.length > 1) {
-      for (const channel of channels) {
-        causes.push({
-          mode: 'channel',
-          where: channel.name,
-          kinds: twoKinds(builder, priors.sharedChannel, scopes.of(channel.lanes)),
-        });
-      }
-    }
-    const words = part.name ?? part.role.replace('-', ' ');
-    return [
-      {
-        kind: 'shared-part' as const,
-        id: `shared:${part.label}`,
-        label: `${part.label} (${words})`,
-        socket: null,
-        cameFrom: null,
-        sharedPart: part.label,
-        causes,
-      },
-    ];
-  });
-}
-
-/**
- * A layout seldom lists everything that serves more than one lane. What it leaves out is still there on the
- * board: each data line, each bank and the board as a whole has something shared behind it, so that chips
- * are not blamed for want of another name.
- */
-function unlistedParts(builder: Builder): Part[] {
-  const { index, priors, scopes } = builder;
-  const listed = new Set<Scope>();
-  for (const part of index.document.sharedParts) {
-    const served = servedLanes(index, part);
-    if (served.length > 0) listed.add(scopes.of(served));
-    for (const channel of channelsOf(index, part)) listed.add(scopes.of(channel.lanes));
-  }
-  const parts: Part[] = [];
-  const add = (id: string, label: string, { scope, prior, mode }: { scope: Scope; prior: number; mode: FaultMode }) => {
-    if (listed.has(scope) || scope.lanes.length < 2) return;
-    listed.add(scope);
-    const causes = [{ mode, where: null, kinds: twoKinds(builder, prior, scope) }];
-    parts.push({ kind: 'shared-part', id, label, socket: null, cameFrom: null, sharedPart: null, causes });
-  };
-  const whole = { prior: priors.sharedWhole, mode: 'whole' as const };
-  add('unlisted:all', 'something that all banks share (supply, strobes, address lines)', {
-    scope: scopes.all(),
-    ...whole,
-  });
-  index.document.memory.banks.forEach((bank, b) => {
-    const label = `what selects ${bankWords(bank.id)} (strobe, decoder, its supply)`;
-    add(`unlisted:bank:${bank.id}`, label, { scope: scopes.ofBank(bankIndex(b)), ...whole });
-  });
-  for (let line = 0; line < index.lineCount; line++) {
-    const label = `data line ${index.lineName(line)} (trace, buffer)`;
-    add(`unlisted:line:${line}`, label, { scope: scopes.ofLine(line), prior: priors.sharedChannel, mode: 'channel' });
-  }
-  return parts;
-}
-
-function shortParts(builder: Builder): Part[] {
-  const { index, priors, scopes } = builder;
-  const parts: Part[] = [];
-  for (let line = 0; line + 1 < index.lineCount; line++) {
-    if ((line + 1) % index.bitCount === 0) continue;
-    const one = scopes.ofLine(line).lanes;
-    const other = scopes.ofLine(line + 1).lanes;
-    if (one.length === 0 || other.length === 0) continue;
-    const kinds = twoKinds(builder, priors.lineShort, scopes.of([...one, ...other]));
-    parts.push({
-      kind: 'short',
-      id: `short:${line}-${line + 1}`,
-      label: `short between data lines ${index.lineName(line)} and ${index.lineName(line + 1)}`,
-      socket: null,
-      cameFrom: null,
-      sharedPart: null,
-      causes: [{ mode: 'short', where: null, kinds }],
-    });
-  }
-  return parts;
 }

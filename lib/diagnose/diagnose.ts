@@ -51,12 +51,16 @@ export function diagnose(index: LayoutIndex, runs: readonly Run[], priors: Prior
     places: anyFailed ? listPlaces(findings) : [],
     lastRun,
     interpretations: observations.interpretations,
+    unreadable: observations.evidence.length > 0 && observations.evidence.every((piece) => !piece.ok),
     unexplained: anyFailed ? unexplainedLanes(findings, explainedFrom * Math.max(...shares)) : [],
   };
   const verdict = decide(weighed);
   const last = lastRun === null ? undefined : best.runs[lastRun];
+  const possible = new Set(
+    observations.interpretations.flatMap((each) => (lastRun === null ? [] : [...(each.runs[lastRun]?.failing ?? [])])),
+  );
   const untested = last
-    ? ([...index.lanes] as Lane[]).filter((lane) => !last.failing.has(lane) && !last.passed.has(lane))
+    ? ([...index.lanes] as Lane[]).filter((lane) => !last.passed.has(lane) && !possible.has(lane))
     : [];
   const problems = timeline.problems.map(
     (problem) => `Run ${problem.run + 1}: ${problem.reason} The change was left out.`,

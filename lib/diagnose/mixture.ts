@@ -1,4 +1,4 @@
-import type { Part } from './causes';
+import type { Part } from './cause-types';
 import type { Interpretation } from './observations';
 import { weigh, type Posterior } from './posterior';
 import type { Priors } from './priors';

@@ -53,7 +53,8 @@ export function nextChecks(input: CheckInput): NextCheck[] {
       if (verdict.headline.includes('fitted:')) return [refit(verdict)];
       const [first] = weighed.places as [Place];
       if (first.contact > first.chip) return [measure(input, first)];
-      if (first.chip >= provenFrom) return [substitute(first, isSoldered(weighed.findings.index, first.socket))];
+      if (first.chip >= provenFrom)
+        return [substitute(first, { soldered: isSoldered(weighed.findings.index, first.socket) })];
       return [swapCheck(input)];
     }
   }
@@ -194,7 +195,7 @@ function swapCheck(input: CheckInput): NextCheck {
   if (socket === undefined || !last || last.failing.size === 0) return readAgain();
   const partner = partnerFor(index, socket, last);
   const soldered = isSoldered(index, place.socket);
-  if (partner === null || soldered) return substitute(place, soldered);
+  if (partner === null || soldered) return substitute(place, { soldered });
   const labels: [string, string] = [labelOf(index, socket), labelOf(index, partner)];
   const change: Change = { kind: 'swap', sockets: labels };
   const outcomes = [
@@ -231,7 +232,7 @@ function swapCheck(input: CheckInput): NextCheck {
   });
   const rest = Math.max(0, 1 - told);
   // Where most of the time the swap shows something else, it does not decide between chip and contact.
-  if (rest > 0.5) return substitute(place, false);
+  if (rest > 0.5) return substitute(place, { soldered: false });
   return {
     action: 'swap',
     label: `Power off, swap ${labels[0]} with ${labels[1]}, run again.`,
@@ -253,7 +254,7 @@ function shares(places: readonly Place[], place: Place): number[] {
   return [place.chip, place.contact, Math.max(0, 1 - place.chip - place.contact)];
 }
 
-function substitute(place: Place, soldered: boolean): NextCheck {
+function substitute(place: Place, { soldered }: { soldered: boolean }): NextCheck {
   return {
     action: 'replace',
     label: soldered

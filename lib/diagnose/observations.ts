@@ -40,7 +40,7 @@ interface Piece {
 type Read = { piece: Piece; shown: ReadEvidence } | { piece: null; shown: ReadEvidence };
 
 /** More ways to understand all the evidence together than this are not followed. */
-const mostInterpretations = 16;
+const mostInterpretations = 96;
 
 /**
  * Reads every piece of evidence of every run, and says for each lane whether it failed, passed or was not
@@ -59,7 +59,7 @@ export function observe(
   const choices = consistentChoices(pieces);
   if (choices.length > mostInterpretations) {
     notes.push(
-      `The open conventions allow ${choices.length} ways to understand the evidence; the first ${mostInterpretations} are weighed.`,
+      `The evidence can be understood in ${choices.length} ways; the first ${mostInterpretations} are weighed.`,
     );
   }
   const interpretations = choices.slice(0, mostInterpretations).map((choice) => ({

@@ -1,5 +1,5 @@
 import type { Lane } from '../brand';
-import type { Cause, Kind, Part } from './causes';
+import type { Cause, Kind, Part } from './cause-types';
 import { inferNoisyOr, type HiddenVariable } from './noisy-or';
 import type { RunObservation } from './observations';
 import type { Priors } from './priors';

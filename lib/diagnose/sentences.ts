@@ -2,7 +2,7 @@ import type { Lane } from '../brand';
 import { sentenceCase } from '../layout/words';
 import { lanesWords, saidAsOne } from './lane-words';
 import type { Observations } from './observations';
-import { openConvention, wentAway, type Verdict, type Weighed } from './verdict';
+import { openMeaning, wentAway, type Verdict, type Weighed } from './verdict';
 
 export interface Told {
   readonly weighed: Weighed;
@@ -11,6 +11,10 @@ export interface Told {
   readonly untested: readonly Lane[];
   readonly leftOut: number;
   readonly problems: readonly string[];
+}
+
+function shortened(text: string): string {
+  return text.length > 40 ? `${text.slice(0, 40)}…` : text;
 }
 
 function percent(p: number): string {
@@ -24,13 +28,18 @@ export function tell(told: Told): string[] {
   const { weighed, verdict, observations, untested } = told;
   const { findings, lastRun, places, unexplained } = weighed;
   const sentences = [...told.problems];
-  if (lastRun === null) return [...sentences, ...observations.notes];
+  if (lastRun === null) {
+    const reasons = observations.evidence.flatMap((piece) =>
+      piece.reason === null ? [] : [`"${shortened(piece.text)}": ${piece.reason}`],
+    );
+    return [...sentences, ...reasons, ...observations.notes];
+  }
   const gone = wentAway(weighed);
   const shown = gone ? lastFailing(weighed) : lastRun;
   const run = findings.runs[shown];
-  const open = openConvention(weighed);
+  const open = openMeaning(weighed);
   if (open) {
-    sentences.push(open);
+    sentences.push(open.words);
   } else if (run && run.failing.size > 0) {
     const failed = sentenceCase(lanesWords(findings.index, run.failing));
     const alone = run.failing.size === 1 && run.passed.size > 0 ? ' alone' : '';

@@ -2,7 +2,7 @@ import type { FaultMode, Place, Suspect, SuspectMode } from '@/shared';
 import type { Lane, SocketIndex } from '../brand';
 import type { LayoutIndex } from '../layout/layout-index';
 import { sentenceCase } from '../layout/words';
-import type { Cause, Part } from './causes';
+import type { Cause, Part } from './cause-types';
 import { lanesWords } from './lane-words';
 import type { RunObservation } from './observations';
 import { probabilityOf, sumOf, type Posterior } from './posterior';

@@ -22,6 +22,8 @@ export interface Weighed {
   readonly places: readonly Place[];
   /** The last run that showed anything, null where none did. */
   readonly lastRun: number | null;
+  /** Something was entered, and none of it could be read. */
+  readonly unreadable: boolean;
   /** The ways to understand the evidence; more than one where a convention is unknown. */
   readonly interpretations: readonly Interpretation[];
   /** Failing lanes that nothing in the model explains well. */
@@ -30,12 +32,13 @@ export interface Weighed {
 
 /** A place or shared part leads when it is likelier than all others together. */
 const leads = 0.5;
-/** Members of a group hold together this share of the probability; none below a tenth of the first. */
+/** Members of a group hold together this share of the probability; none is far below the first. */
 const groupHolds = 0.95;
 const mostMembers = 24;
+const leastBesideFirst = 0.2;
 
 /** The words for a probability. `capped` where the evidence cannot prove more, such as a fault that went away. */
-export function sureWords(probability: number, capped: boolean): Diagnosis['sure'] {
+export function sureWords(probability: number, { capped }: { capped: boolean }): Diagnosis['sure'] {
   if (capped || probability < 0.7) return 'not sure';
   if (probability >= 0.99) return 'sure';
   return probability >= 0.9 ? 'strong' : 'likely';
@@ -54,7 +57,8 @@ export function decide(weighed: Weighed): Verdict {
   const { findings, lastRun, places, suspects, unexplained } = weighed;
   const nothing = { probability: null, groups: [], sockets: [] };
   if (lastRun === null) {
-    return { outcome: 'no-evidence', headline: 'Enter what the board reported.', sure: 'no reading', ...nothing };
+    const headline = weighed.unreadable ? 'The report cannot be read.' : 'Enter what the board reported.';
+    return { outcome: 'no-evidence', headline, sure: 'no reading', ...nothing };
   }
   const failing = new Set(findings.runs.flatMap((run) => [...run.failing]));
   if (failing.size === 0) {
@@ -85,7 +89,7 @@ function placeVerdict(weighed: Weighed, leading: readonly Place[]): Verdict {
   return {
     outcome: 'place',
     headline: leading.length === 1 ? onePlace(weighed, first) : `Pull ${listWords(labels)}.`,
-    sure: sureWords(probability, capped),
+    sure: sureWords(probability, { capped }),
     probability,
     groups: [],
     sockets: labels,
@@ -119,7 +123,7 @@ function fittingVerdict({ suspects, findings, lastRun }: Weighed): Verdict | nul
   return {
     outcome: 'place',
     headline: `Power off. Look how ${listWords(sockets)} ${sockets.length === 1 ? 'is' : 'are'} fitted: a bent leg, or a chip turned round.`,
-    sure: sureWords(total, true),
+    sure: sureWords(total, { capped: true }),
     probability: total,
     groups: [],
     sockets,
@@ -140,7 +144,7 @@ function sharedVerdict(shared: readonly Suspect[], sum: number): Verdict {
       one && first.kind === 'short'
         ? `Do not pull a chip yet. Look for a ${first.label}.`
         : `Do not pull a chip yet. Look at ${one ? `${names[0]} first` : listWords(names, 4)}.`,
-    sure: sureWords(one ? first.probability : sum, false),
+    sure: sureWords(one ? first.probability : sum, { capped: false }),
     probability: one ? first.probability : sum,
     groups:
       members.length > 1
@@ -171,7 +175,8 @@ function membersOf(candidates: readonly Member[], total: number): Member[] {
   let held = 0;
   for (const each of sorted) {
     const tied = each.share > (members.at(-1)?.share ?? Infinity) * 0.99;
-    if (members.length >= mostMembers || each.share < most / 10 || (held >= groupHolds * total && !tied)) break;
+    if (members.length >= mostMembers || each.share < most * leastBesideFirst || (held >= groupHolds * total && !tied))
+      break;
     members.push(each);
     held += each.share;
   }
@@ -206,14 +211,14 @@ function groupVerdict(weighed: Weighed, shared: readonly Suspect[]): Verdict {
     holders.length > 1 &&
     members.every((m) => shared.some((s) => s.id === m.id) || holders.some((h) => h.socket === m.label));
   const names = members.map((member) => member.label);
-  const open = openConvention(weighed);
+  const open = openMeaning(weighed);
   const why = open
-    ? open
+    ? open.words
     : held
       ? `${sentenceCase(lanesWords(findings.index, allFailing(findings)))} ${saidAsOne(findings.index, allFailing(findings)) ? 'fails' : 'fail'}. One chip that never lets go of the line does that, and so does what drives the line: the code cannot tell them apart.`
       : 'The evidence fits these about equally well.';
   const check = open
-    ? 'Find out how this machine counts: look for a code that names the first or the last, in the manual or by taking out one chip that is known.'
+    ? open.check
     : wentAway(weighed)
       ? 'Clean the legs and contacts, then let the test run for hours, cold and warm. Swap them back if it does not return.'
       : held
@@ -244,14 +249,32 @@ function heldHeadline({ findings }: Weighed, members: readonly Member[], sockets
   return `${line}: ${[...drivers.slice(0, 2), chips].join(', or ')}.`;
 }
 
-/** What the code means under each convention that remains, null where only one does. */
-export function openConvention({ interpretations, findings }: Weighed): string | null {
+/** More meanings than this are told together. */
+const mostMeanings = 4;
+
+/** What the evidence can mean where it can mean more than one thing, null where it cannot. */
+export function openMeaning({ interpretations, findings }: Weighed): { words: string; check: string } | null {
   if (interpretations.length < 2) return null;
-  const meanings = interpretations.slice(0, 4).map(({ takes, runs }) => {
-    const lanes = new Set(runs.flatMap((run) => [...run.failing]));
-    return `${takes.join(', ')}: ${lanesWords(findings.index, lanes)}`;
-  });
-  return `It is not known how this machine counts. ${sentenceCase(meanings.join('; '))}.`;
+  const lanesOf = (runs: (typeof interpretations)[number]['runs']) => new Set(runs.flatMap((run) => [...run.failing]));
+  const counting = interpretations.some(({ takes }) => takes.some((each) => /counted from|highest|lowest/.test(each)));
+  if (interpretations.length > mostMeanings) {
+    const all = new Set(interpretations.flatMap(({ runs }) => [...lanesOf(runs)]));
+    const words = `The report leaves open which lane failed, within ${lanesWords(findings.index, all)}.`;
+    return { words, check: 'Look for another report of this machine that says more, or read it again.' };
+  }
+  const meanings = interpretations.map(
+    ({ takes, runs }) => `${takes.join(', ')}: ${lanesWords(findings.index, lanesOf(runs))}`,
+  );
+  return counting
+    ? {
+        words: `It is not known how this machine counts. ${sentenceCase(meanings.join('; '))}.`,
+        check:
+          'Find out how this machine counts: look for a code that names the first or the last, in the manual or by taking out one chip that is known.',
+      }
+    : {
+        words: `The report can mean more than one thing. ${sentenceCase(meanings.join('; '))}.`,
+        check: 'Start the machine again and read the report once more before you touch a chip.',
+      };
 }
 
 function allFailing(findings: Findings): Lane[] {

@@ -1,0 +1,99 @@
+import type { FaultMode } from '@/shared';
+import { bankIndex } from '../brand';
+import { channelsOf, servedLanes } from '../layout/served-lanes';
+import { bankWords } from '../layout/words';
+import { twoKinds, type Builder, type Cause, type Part } from './cause-types';
+import type { Scope } from './scopes';
+
+/** The shared parts that the layout lists, as a whole and channel by channel. */
+export function sharedParts(builder: Builder): Part[] {
+  const { index, priors, scopes } = builder;
+  return index.document.sharedParts.flatMap((part) => {
+    const served = servedLanes(index, part);
+    if (served.length === 0) return [];
+    const channels = channelsOf(index, part);
+    const causes: Cause[] = [
+      { mode: 'whole', where: null, kinds: twoKinds(builder, priors.sharedWhole, scopes.of(served)) },
+    ];
+    if (channels.length > 1) {
+      for (const channel of channels) {
+        causes.push({
+          mode: 'channel',
+          where: channel.name,
+          kinds: twoKinds(builder, priors.sharedChannel, scopes.of(channel.lanes)),
+        });
+      }
+    }
+    const words = part.name ?? part.role.replace('-', ' ');
+    return [
+      {
+        kind: 'shared-part' as const,
+        id: `shared:${part.label}`,
+        label: `${part.label} (${words})`,
+        socket: null,
+        cameFrom: null,
+        sharedPart: part.label,
+        causes,
+      },
+    ];
+  });
+}
+
+/**
+ * A layout seldom lists everything that serves more than one lane. What it leaves out is still there on the
+ * board: each data line, each bank and the board as a whole has something shared behind it, so that chips
+ * are not blamed for want of another name.
+ */
+export function unlistedParts(builder: Builder): Part[] {
+  const { index, priors, scopes } = builder;
+  const listed = new Set<Scope>();
+  for (const part of index.document.sharedParts) {
+    const served = servedLanes(index, part);
+    if (served.length > 0) listed.add(scopes.of(served));
+    for (const channel of channelsOf(index, part)) listed.add(scopes.of(channel.lanes));
+  }
+  const parts: Part[] = [];
+  const add = (id: string, label: string, { scope, prior, mode }: { scope: Scope; prior: number; mode: FaultMode }) => {
+    if (listed.has(scope) || scope.lanes.length < 2) return;
+    listed.add(scope);
+    const causes = [{ mode, where: null, kinds: twoKinds(builder, prior, scope) }];
+    parts.push({ kind: 'shared-part', id, label, socket: null, cameFrom: null, sharedPart: null, causes });
+  };
+  const whole = { prior: priors.sharedWhole, mode: 'whole' as const };
+  add('unlisted:all', 'something that all banks share (supply, strobes, address lines)', {
+    scope: scopes.all(),
+    ...whole,
+  });
+  index.document.memory.banks.forEach((bank, b) => {
+    const label = `what selects ${bankWords(bank.id)} (strobe, decoder, its supply)`;
+    add(`unlisted:bank:${bank.id}`, label, { scope: scopes.ofBank(bankIndex(b)), ...whole });
+  });
+  for (let line = 0; line < index.lineCount; line++) {
+    const label = `data line ${index.lineName(line)} (trace, buffer)`;
+    add(`unlisted:line:${line}`, label, { scope: scopes.ofLine(line), prior: priors.sharedChannel, mode: 'channel' });
+  }
+  return parts;
+}
+
+/** Shorts between neighbouring data lines of one set. */
+export function shortParts(builder: Builder): Part[] {
+  const { index, priors, scopes } = builder;
+  const parts: Part[] = [];
+  for (let line = 0; line + 1 < index.lineCount; line++) {
+    if ((line + 1) % index.bitCount === 0) continue;
+    const one = scopes.ofLine(line).lanes;
+    const other = scopes.ofLine(line + 1).lanes;
+    if (one.length === 0 || other.length === 0) continue;
+    const kinds = twoKinds(builder, priors.lineShort, scopes.of([...one, ...other]));
+    parts.push({
+      kind: 'short',
+      id: `short:${line}-${line + 1}`,
+      label: `short between data lines ${index.lineName(line)} and ${index.lineName(line + 1)}`,
+      socket: null,
+      cameFrom: null,
+      sharedPart: null,
+      causes: [{ mode: 'short', where: null, kinds }],
+    });
+  }
+  return parts;
+}
