@@ -43,7 +43,7 @@ export function SelectField({ label, options, value, onChange, disabled = false 
 }
 
 const useStyles = makeStyles((t) => ({
-  field: { gap: t.space.hair, flexGrow: 1, flexShrink: 1, flexBasis: t.target * 3, minWidth: t.target * 2 },
+  field: { gap: t.space.hair },
   label: { alignSelf: 'flex-start' },
   select: {
     ...t.text.body,

@@ -10,29 +10,28 @@ type SplitProps = {
   /** Names of both parts for a screen reader. */
   mainLabel: string;
   asideLabel: string;
-  /** On a narrow window: the aside before the sheet. */
-  asideFirst?: boolean;
 };
 
 /** A sheet with a narrower column beside it, ruled off; one under the other where the window is not wide. */
-export function Split({ main, aside, mainLabel, asideLabel, asideFirst = false }: SplitProps) {
+export function Split({ main, aside, mainLabel, asideLabel }: SplitProps) {
   const styles = useStyles();
   const breakpoint = useBreakpoint();
   const wide = breakpoint === 'wide';
   const room = breakpoint === 'phone' ? styles.roomPhone : styles.room;
   const sheet = (
-    <View key="main" role="region" aria-label={mainLabel} style={[styles.main, wide && styles.mainWide, room]}>
+    <View role="region" aria-label={mainLabel} style={[styles.main, wide && styles.mainWide, room]}>
       {main}
     </View>
   );
   const beside = (
-    <View key="aside" role="region" aria-label={asideLabel} style={[wide && styles.asideWide, styles.aside, room]}>
+    <View role="region" aria-label={asideLabel} style={[wide && styles.asideWide, styles.aside, room]}>
       {aside}
     </View>
   );
   return (
     <View style={[styles.split, wide && styles.splitWide]}>
-      {asideFirst && !wide ? [beside, sheet] : [sheet, beside]}
+      {sheet}
+      {beside}
     </View>
   );
 }

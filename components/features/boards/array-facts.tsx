@@ -1,8 +1,7 @@
 import { View } from 'react-native';
 import { makeStyles } from '@/components/theme';
-import { Table } from '@/components/ui/table';
 import { Text } from '@/components/ui/text';
-import { addressWords, listWords, numbersWords, sentenceCase } from '@/lib/layout/words';
+import { addressWords, listWords, numbersWords } from '@/lib/layout/words';
 import type { AddressWindow, Bank, LayoutDocument } from '@/shared';
 import { bankTitle, familyCounts, railWords, socketListWords, wordsCount } from './board-facts';
 import { DetailLines } from './detail-lines';
@@ -41,19 +40,26 @@ export function ArrayFacts({ document }: { document: LayoutDocument }) {
 const mostBanks = 32;
 
 function Banks({ document: { memory } }: { document: LayoutDocument }) {
-  const bits = (bank: Bank) => (bank.bits === undefined ? `0 to ${memory.dataBits - 1}` : numbersWords(bank.bits));
+  const styles = useStyles();
+  const facts = ({ words, bits, dataLines }: Bank) =>
+    [
+      `${wordsCount(words)} words`,
+      `bits ${bits === undefined ? `0 to ${memory.dataBits - 1}` : numbersWords(bits)}`,
+      dataLines && `data lines of their own: ${dataLines}`,
+    ]
+      .filter(Boolean)
+      .join(', ');
+  const all = memory.banks.length;
   return (
-    <Table
-      caption={memory.banks.length > mostBanks ? `The first ${mostBanks} of ${memory.banks.length} banks` : 'Banks'}
-      columns={[
-        { key: 'bank', header: 'Bank', share: 2, cell: (bank) => sentenceCase(bankTitle(bank)) },
-        { key: 'words', header: 'Words', cell: ({ words }) => wordsCount(words) },
-        { key: 'bits', header: 'Bits', cell: bits },
-        { key: 'lines', header: 'Data lines', cell: ({ dataLines }) => dataLines ?? 'of the board' },
-      ]}
-      rows={memory.banks.slice(0, mostBanks)}
-      rowKey={({ id }) => id}
-    />
+    <View style={styles.part}>
+      <Text variant="subheading">{all > mostBanks ? `The first ${mostBanks} of ${all} banks` : 'Banks'}</Text>
+      <DetailLines
+        label="Banks"
+        lines={memory.banks
+          .slice(0, mostBanks)
+          .map((bank) => ({ key: bank.id, name: bankTitle(bank), value: facts(bank) }))}
+      />
+    </View>
   );
 }
 
@@ -102,37 +108,34 @@ function Inputs({ document: { multiplexing } }: { document: LayoutDocument }) {
 
 const mostWindows = 24;
 
-function Windows({ document }: { document: LayoutDocument }) {
-  const { addressMap } = document;
-  if (addressMap.windows.length === 0) return null;
+function Windows({ document: { addressMap } }: { document: LayoutDocument }) {
+  const styles = useStyles();
+  const all = addressMap.windows.length;
+  if (all === 0) return null;
   const at = (address: number) => addressWords(addressMap, address);
-  const how = ({ interleave, lanes }: AddressWindow) =>
-    [interleave.length > 0 && 'the banks take turns', lanes && `${lanes.length} addresses a word`]
+  const facts = ({ banks, register, interleave, lanes }: AddressWindow) =>
+    [
+      `${banks.length === 1 ? 'bank' : 'banks'} ${listWords(banks, 8)}`,
+      register && `while ${register.name} is ${register.value}`,
+      interleave.length > 0 && 'taking turns',
+      lanes && `${lanes.length} addresses a word`,
+    ]
       .filter(Boolean)
       .join(', ');
-  const all = addressMap.windows.length;
   return (
-    <Table
-      caption={`${all > mostWindows ? `The first ${mostWindows} of ${all} address windows` : 'Addresses'}, ${addressMap.notation}`}
-      columns={[
-        {
-          key: 'range',
-          header: 'From, to',
-          mono: true,
-          share: 2,
-          cell: ({ range }) => `${at(range.from)} ${at(range.to)}`,
-        },
-        { key: 'banks', header: 'Banks', share: 1, cell: ({ banks }) => listWords(banks, 8) },
-        {
-          key: 'register',
-          header: 'While',
-          cell: ({ register }) => (register === undefined ? 'always' : `${register.name} is ${register.value}`),
-        },
-        { key: 'how', header: 'How', share: 1.4, cell: how },
-      ]}
-      rows={addressMap.windows.slice(0, mostWindows)}
-      rowKey={({ range, register }) => `${range.from}/${range.to}/${register?.value ?? ''}`}
-    />
+    <View style={styles.part}>
+      <Text variant="subheading">
+        {`${all > mostWindows ? `The first ${mostWindows} of ${all} address windows` : 'Addresses'}, ${addressMap.notation}`}
+      </Text>
+      <DetailLines
+        label="Addresses"
+        lines={addressMap.windows.slice(0, mostWindows).map((window, place) => ({
+          key: String(place),
+          name: `${at(window.range.from)} to ${at(window.range.to)}`,
+          value: facts(window),
+        }))}
+      />
+    </View>
   );
 }
 

@@ -26,7 +26,7 @@ function CurrentVersion({ slug }: { slug: string }) {
     <BoardPage
       bench={bench}
       slug={slug}
-      version={`Version ${layout.number} of ${dateWords(layout.publishedAt)}${fromDevice ? ', kept on this device' : ''}`}
+      version={`Version ${layout.number}, ${dateWords(layout.publishedAt)}${fromDevice ? ', kept on this device' : ''}`}
       notice={
         withdrawn ? (
           <Notice kind="warning" title="This board is no longer published.">

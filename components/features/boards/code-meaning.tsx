@@ -78,6 +78,6 @@ function Answer({ meaning }: { meaning: Meaning }) {
 
 const useStyles = makeStyles((t) => ({
   all: { gap: t.space.sm },
-  answer: { minHeight: t.text.codeMedium.lineHeight + t.text.small.lineHeight, gap: t.space.xs },
+  answer: { minHeight: t.text.small.lineHeight, gap: t.space.xs },
   reading: { gap: t.space.none },
 }));

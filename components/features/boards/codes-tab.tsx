@@ -1,6 +1,6 @@
 import { View } from 'react-native';
 import type { Bench, BenchFormat } from '@/components/features/diagnose/bench';
-import { makeStyles } from '@/components/theme';
+import { makeStyles, useBreakpoint } from '@/components/theme';
 import { SegmentedControl } from '@/components/ui/segmented-control';
 import { SelectField } from '@/components/ui/select-field';
 import { Split } from '@/components/ui/split';
@@ -18,6 +18,7 @@ type CodesTabProps = { bench: Bench; slug: string };
 /** What the machine reports: every code of a report format with its socket, and a field to try one. */
 export function CodesTab({ bench, slug }: CodesTabProps) {
   const styles = useStyles();
+  const wide = useBreakpoint() === 'wide';
   const { format: chosen, change } = useBoardLink();
   const format = bench.formats.find(({ definition }) => definition.id === chosen) ?? bench.formats[0];
   if (format === undefined) {
@@ -29,20 +30,26 @@ export function CodesTab({ bench, slug }: CodesTabProps) {
       </View>
     );
   }
+  const { id } = format.definition;
+  const ask = (
+    <>
+      <FormatChoice formats={bench.formats} value={id} onChange={(next) => change({ format: next })} />
+      <CodeMeaning key={id} bench={bench} format={format} slug={slug} />
+    </>
+  );
   return (
     <Split
       mainLabel="Codes"
       asideLabel="The report format"
-      asideFirst
-      main={<CodeTable key={format.definition.id} bench={bench} format={format} />}
+      main={
+        <>
+          {wide ? null : ask}
+          <CodeTable key={id} bench={bench} format={format} />
+        </>
+      }
       aside={
         <View style={styles.aside}>
-          <FormatChoice
-            formats={bench.formats}
-            value={format.definition.id}
-            onChange={(id) => change({ format: id })}
-          />
-          <CodeMeaning key={format.definition.id} bench={bench} format={format} slug={slug} />
+          {wide ? ask : null}
           <View style={styles.part}>
             <Text variant="subheading">How it reports</Text>
             <DetailLines label="How it reports" lines={formatLines(format)} />

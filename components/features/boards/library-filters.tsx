@@ -62,13 +62,14 @@ export function LibraryFilters({ link, onChange, onClear }: LibraryFiltersProps)
         const known = data === undefined ? [] : values(data);
         const all = chosen === '' || known.includes(chosen) ? known : [chosen, ...known];
         return (
-          <SelectField
-            key={name}
-            label={label}
-            value={chosen}
-            onChange={(value) => onChange({ [name]: value === '' ? undefined : value })}
-            options={[{ value: '', label: any }, ...all.map((value) => ({ value, label: words(value) }))]}
-          />
+          <View key={name} style={styles.filter}>
+            <SelectField
+              label={label}
+              value={chosen}
+              onChange={(value) => onChange({ [name]: value === '' ? undefined : value })}
+              options={[{ value: '', label: any }, ...all.map((value) => ({ value, label: words(value) }))]}
+            />
+          </View>
         );
       })}
       {narrowed ? <Button kind="quiet" label="Clear filters" onPress={onClear} /> : null}
@@ -78,4 +79,5 @@ export function LibraryFilters({ link, onChange, onClear }: LibraryFiltersProps)
 
 const useStyles = makeStyles((t) => ({
   row: { flexDirection: 'row', flexWrap: 'wrap', alignItems: 'flex-end', gap: t.space.md },
+  filter: { flexGrow: 1, flexShrink: 1, flexBasis: t.target * 3 },
 }));

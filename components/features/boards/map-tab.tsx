@@ -23,7 +23,8 @@ type MapTabProps = { bench: Bench; slug: string };
 /** The board's sketch, and what is known of the socket or shared part that was tapped. */
 export function MapTab({ bench, slug }: MapTabProps) {
   const styles = useStyles();
-  const phone = useBreakpoint() === 'phone';
+  const breakpoint = useBreakpoint();
+  const [phone, wide] = [breakpoint === 'phone', breakpoint === 'wide'];
   const { at, change } = useBoardLink();
   const [view, setView] = useSketchView(bench.index);
   const picked = useMemo(() => targetOf(bench, at), [bench, at]);
@@ -31,6 +32,8 @@ export function MapTab({ bench, slug }: MapTabProps) {
   const pick = ({ label }: PickTarget) => change({ at: label === at ? undefined : label });
   const close = () => change({ at: undefined });
   const details = picked === null ? null : <Details bench={bench} target={picked} onPick={pick} />;
+  // One under the other, the marks come first: they decide whether the sketch may be believed.
+  const facts = <ArrayFacts document={bench.document} />;
   return (
     <>
       <Split
@@ -50,7 +53,7 @@ export function MapTab({ bench, slug }: MapTabProps) {
             <Text variant="small" tone="soft">
               Tap a socket to see what it holds and which codes would name it; tap a shared part to see what it serves.
             </Text>
-            <ArrayFacts document={bench.document} />
+            {wide ? facts : null}
           </>
         }
         aside={
@@ -66,6 +69,7 @@ export function MapTab({ bench, slug }: MapTabProps) {
                 <OtherRevisions bench={bench} slug={slug} />
               </>
             )}
+            {wide ? null : facts}
           </View>
         }
       />

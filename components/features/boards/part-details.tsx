@@ -42,7 +42,9 @@ export function PartDetails({ bench, label, onPick }: PartDetailsProps) {
       key: 'channels',
       name: 'can fail alone',
       value:
-        facts.channels.length === 0 ? 'none of it: only as a whole' : facts.channels.map(({ name }) => name).join(', '),
+        facts.channels.length === 0
+          ? 'none of it: only as a whole'
+          : channelWords(facts.channels.map(({ name }) => name)),
     },
     ...(rails.length > 0 ? [{ key: 'rails', name: 'rails', value: rails.map(railWords).join(', ') }] : []),
   ];
@@ -76,6 +78,14 @@ export function PartDetails({ bench, label, onPick }: PartDetailsProps) {
       </View>
     </View>
   );
+}
+
+const addressBit = 'address bit ';
+
+/** "D4, D5"; "address bits 0, 1, 2" rather than the word each time. */
+function channelWords(names: readonly string[]): string {
+  if (names.length < 2 || !names.every((name) => name.startsWith(addressBit))) return names.join(', ');
+  return `address bits ${names.map((name) => name.slice(addressBit.length)).join(', ')}`;
 }
 
 const useStyles = makeStyles((t) => ({

@@ -91,7 +91,7 @@ function chipLines({ bench, socket, family }: ChipFacts) {
     ...(family?.rows
       ? [line('refresh', `${family.rows} rows${family.refreshMs ? ` in ${family.refreshMs} ms` : ''}`)]
       : []),
-    line('pin 1', `${socket.pin1.replace('-', ' ')} of the socket as it stands upright`),
+    line('pin 1 mark', `${socket.pin1.replace('-', ' ')}, the socket upright`),
     line('fixed', socket.soldered ? 'soldered in' : 'in a socket'),
     ...measured.map((rail) => line(`pin${rail.pins.length === 1 ? '' : 's'} ${rail.pins.join(', ')}`, railWords(rail))),
     ...(measured.length === 0 ? supplyLines(family) : []),

@@ -3,12 +3,11 @@ import { View } from 'react-native';
 import { versionsQuery } from '@/components/api/layout-versions';
 import { problemWords } from '@/components/api/problem';
 import type { Bench } from '@/components/features/diagnose/bench';
-import { makeStyles } from '@/components/theme';
+import { makeStyles, useBreakpoint } from '@/components/theme';
 import { Button, ButtonLink } from '@/components/ui/button';
 import { dateWords } from '@/components/ui/date-words';
 import { downloadText } from '@/components/ui/download';
 import { Link } from '@/components/ui/link';
-import { Panel } from '@/components/ui/panel';
 import { ErrorState, Loading } from '@/components/ui/states';
 import { Table } from '@/components/ui/table';
 import { Text } from '@/components/ui/text';
@@ -20,6 +19,7 @@ type VersionsTabProps = { bench: Bench; slug: string };
 /** The versions of a board's layout, and what can be done with the one that is shown. */
 export function VersionsTab({ bench, slug }: VersionsTabProps) {
   const styles = useStyles();
+  const phone = useBreakpoint() === 'phone';
   const save = () =>
     downloadText({
       name: `${slug}.json`,
@@ -27,10 +27,14 @@ export function VersionsTab({ bench, slug }: VersionsTabProps) {
       type: 'application/json',
     });
   return (
-    <View style={styles.room}>
-      <Panel title="Versions" note="A published version never changes; a correction is a new one.">
-        <VersionList slug={slug} />
-      </Panel>
+    <View style={[styles.room, phone && styles.roomPhone]}>
+      <View>
+        <Text variant="heading">Versions</Text>
+        <Text variant="small" tone="soft">
+          A published version never changes; a correction is a new one.
+        </Text>
+      </View>
+      <VersionList slug={slug} />
       <View style={styles.actions}>
         <Button label="Save this layout as a file" onPress={save} />
         <ButtonLink
@@ -86,6 +90,7 @@ function VersionLink({ row: { slug, number, current } }: { row: VersionRow }) {
 }
 
 const useStyles = makeStyles((t) => ({
-  room: { padding: t.space.lg, gap: t.space.xl, maxWidth: t.measure.page },
+  room: { padding: t.space.xl, gap: t.space.lg, maxWidth: t.measure.page },
+  roomPhone: { padding: t.space.lg },
   actions: { flexDirection: 'row', flexWrap: 'wrap', gap: t.space.sm },
 }));

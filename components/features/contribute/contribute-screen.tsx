@@ -45,9 +45,8 @@ function Introduction() {
           </View>
         ))}
       </View>
-      <Panel title="Contributors send layouts" note="The role is given on request, by a moderator.">
-        <SignedInOnly page={path}>{({ role }) => <RolePanel role={role} />}</SignedInOnly>
-      </Panel>
+      <Text>Layouts are sent by contributors. A moderator gives that role to whoever asks for it.</Text>
+      <SignedInOnly page={path}>{({ role }) => <RolePanel role={role} />}</SignedInOnly>
       <Panel title="The document">
         <Documents />
       </Panel>

@@ -16,11 +16,17 @@ import type { KeptText } from './kept-text';
 
 type OwnVersionsProps = { onPut: (next: KeptText, what: string) => void };
 
+/** Versions that stand before one asks for more; the last change is the first. */
+const firstShown = 5;
+
 /** What the contributor has sent, how far each has come, and what the moderators said. */
 export function OwnVersions({ onPut }: OwnVersionsProps) {
+  const styles = useStyles();
   const { data, error, isPending, refetch, hasNextPage, fetchNextPage, isFetchingNextPage } =
     useInfiniteQuery(ownVersionsQuery);
+  const [all, setAll] = useState(false);
   const rows = data?.pages.flatMap(({ items }) => items) ?? [];
+  const shown = all ? rows : rows.slice(0, firstShown);
   return (
     <Panel title="What you have sent">
       {isPending ? <Loading label="Fetching what you have sent" lines={2} /> : null}
@@ -29,11 +35,13 @@ export function OwnVersions({ onPut }: OwnVersionsProps) {
       ) : null}
       {data !== undefined && rows.length === 0 ? <Text tone="soft">Nothing yet.</Text> : null}
       <View role="list" aria-label="What you have sent">
-        {rows.map((row) => (
+        {shown.map((row) => (
           <OwnVersion key={row.id} row={row} onPut={onPut} />
         ))}
       </View>
-      {hasNextPage ? (
+      {shown.length < rows.length ? (
+        <Button kind="quiet" label="Show all of them" onPress={() => setAll(true)} style={styles.more} />
+      ) : hasNextPage ? (
         <Button label="Older ones" busy={isFetchingNextPage} onPress={() => void fetchNextPage()} />
       ) : null}
     </Panel>
@@ -105,5 +113,6 @@ const useStyles = makeStyles((t) => ({
     borderBottomColor: t.colours.rule,
   },
   returned: { paddingLeft: t.space.md, borderLeftWidth: t.line.underline, borderLeftColor: t.colours.mark },
+  more: { alignSelf: 'flex-start' },
   mend: { alignSelf: 'flex-start', marginTop: t.space.xs },
 }));

@@ -38,7 +38,9 @@ export function StartFrom({ empty, ready, onPut }: StartFromProps) {
     <View style={styles.all}>
       <View style={styles.row}>
         <FileButton onFile={(file) => void take(file)} />
-        <BoardChoice empty={empty} ready={ready} onPut={onPut} onProblem={setProblem} />
+        <View style={styles.choice}>
+          <BoardChoice empty={empty} ready={ready} onPut={onPut} onProblem={setProblem} />
+        </View>
       </View>
       {problem === null ? null : (
         <Text role="alert" variant="smallStrong" tone="pencil">
@@ -116,5 +118,6 @@ function BoardChoice({ empty, ready, onPut, onProblem }: BoardChoiceProps) {
 const useStyles = makeStyles((t) => ({
   all: { gap: t.space.sm },
   row: { flexDirection: 'row', flexWrap: 'wrap', alignItems: 'flex-end', gap: t.space.md },
+  choice: { flexGrow: 1, flexShrink: 1, flexBasis: t.target * 4 },
   hidden: { display: 'none' },
 }));

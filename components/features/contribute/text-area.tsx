@@ -19,7 +19,7 @@ type TextAreaProps = {
 };
 
 /** Lines that are in sight at once. */
-const visibleLines = 24;
+const visibleLines = 18;
 
 /** A tall field for a document, in fixed width, its lines numbered and never wrapped. */
 export function TextArea({ label, value, onChange, describedBy, invalid, ref }: TextAreaProps) {

@@ -46,7 +46,9 @@ const useStyles = makeStyles((t) => ({
     borderBottomWidth: t.line.underline,
   },
   foot: {
-    flex: 1,
+    // By the length of its word: five places fit on a phone only so.
+    flexGrow: 1,
+    flexShrink: 1,
     minHeight: t.headerHeight.phone - t.space.sm,
     paddingBottom: t.line.underline,
     borderTopWidth: t.line.underline,
