@@ -57,7 +57,7 @@ export const partPad = gap.small + gap.hair;
 const easyLabel = 10;
 
 /** Where letters may stand on a socket, from its centre. */
-export function textArea({ width, height }: Box, notch: Point): Box {
+function textArea({ width, height }: Box, notch: Point): Box {
   const side = Math.min(width, height);
   const cut = notch.x === 0 ? 0 : shares.notch * side;
   return {

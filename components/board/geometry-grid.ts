@@ -3,10 +3,10 @@ import { bitName } from '@/lib/layout/words';
 import type { SceneSocket } from './geometry-scene';
 
 /** What the names along a side of the sketch tell. */
-export type AxisKind = 'bank' | 'bit';
+type AxisKind = 'bank' | 'bit';
 
 /** Names along one side of the sketch. */
-export interface Axis {
+interface Axis {
   readonly kind: AxisKind;
   /** Where each name stands, in sketch units along the axis, ascending. */
   readonly names: readonly { readonly at: number; readonly text: string }[];

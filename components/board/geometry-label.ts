@@ -9,7 +9,7 @@ export interface FittedText {
 }
 
 /** How letters may be made to fit: width and sizes in px. */
-export interface Fitting {
+interface Fitting {
   readonly width: number;
   readonly least: number;
   readonly most: number;

@@ -44,9 +44,9 @@ export function hatchPath({ width, height }: { width: number; height: number }, 
   return path;
 }
 
-/** A small tick, `size` px wide, its foot at the origin's left. */
-export function tickPath(size: number): string {
-  return `M${at(-size * 0.5)} ${at(0)}L${at(-size * 0.14)} ${at(size * 0.36)}L${at(size * 0.5)} ${at(-size * 0.4)}`;
+/** A small tick, `size` px wide, around its centre. */
+export function tickPath(size: number, { x, y }: Point): string {
+  return `M${at(x - size * 0.5)} ${at(y)}l${at(size * 0.36)} ${at(size * 0.36)}l${at(size * 0.64)} ${at(-size * 0.76)}`;
 }
 
 /**
@@ -64,12 +64,12 @@ export function tickPlace(
 }
 
 /** How far a ring passes the sides of its chip, px: a share of the chip, but not onto what lies beside it. */
-export function ringOverhang({ width, height }: { width: number; height: number }): number {
+function ringOverhang({ width, height }: { width: number; height: number }): number {
   return Math.min(10, Math.min(width, height) * 0.13 + 2);
 }
 
 /** The part of a ring that is drawn, in degrees clockwise from the right. */
-export interface Arc {
+interface Arc {
   readonly from: number;
   readonly to: number;
 }

@@ -1,7 +1,7 @@
 import { distanceToBox, type Box, type Point } from './geometry';
 
 /** Something with a place that can be picked or moved to. */
-export interface Placed {
+interface Placed {
   readonly box: Box;
 }
 

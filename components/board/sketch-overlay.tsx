@@ -22,7 +22,7 @@ type SketchOverlayProps = {
 };
 
 /** Whether a socket gets the pencil ring: it did not answer, or it is the first to pull. */
-export function isRinged(mark: SocketMark): boolean {
+function isRinged(mark: SocketMark): boolean {
   return mark.state === 'failed' || mark.state === 'mixed' || mark.rank === 1;
 }
 

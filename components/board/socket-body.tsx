@@ -1,4 +1,4 @@
-import { Circle, G, Path } from 'react-native-svg';
+import { Circle, Path } from 'react-native-svg';
 import { sketchScale } from '@/components/theme/sketch-scale';
 import type { Point } from './geometry';
 import { bodyPath, hatchPath, notchPath, pin1Place, ringPath, shares, tickPath, tickPlace } from './geometry-marks';
@@ -38,7 +38,13 @@ export function SocketBody({ size, pin1, notch, state, captioned = false, inks }
   const fill = hollow ? 'transparent' : hatched ? inks.pencilWash : inks.chip;
   return (
     <>
-      <Path d={bodyPath(size)} fill={fill} stroke={stroke} strokeWidth={width} strokeDasharray={dashes[state]} />
+      <Path
+        d={bodyPath(size) + notchPath(size, notch)}
+        fill={fill}
+        stroke={stroke}
+        strokeWidth={width}
+        strokeDasharray={dashes[state]}
+      />
       {hatched ? (
         <Path
           d={hatchPath(size, Math.max(sketchScale.hatch, side * 0.13))}
@@ -47,12 +53,6 @@ export function SocketBody({ size, pin1, notch, state, captioned = false, inks }
           strokeOpacity={0.55}
         />
       ) : null}
-      <Path
-        d={notchPath(size, notch)}
-        fill="none"
-        stroke={stroke}
-        strokeWidth={Math.min(width, sketchScale.line.body)}
-      />
       <Circle
         cx={dot.x}
         cy={dot.y}
@@ -60,14 +60,12 @@ export function SocketBody({ size, pin1, notch, state, captioned = false, inks }
         fill={hollow ? inks.soft : inks.ink}
       />
       {state === 'passed' || state === 'mixed' ? (
-        <G transform={`translate(${tick.x} ${tick.y})`}>
-          <Path
-            d={tickPath(Math.min(side * shares.tick, sketchScale.greatestLabel))}
-            fill="none"
-            stroke={inks.tick}
-            strokeWidth={Math.min(sketchScale.line.mark, side * 0.08)}
-          />
-        </G>
+        <Path
+          d={tickPath(Math.min(side * shares.tick, sketchScale.greatestLabel), tick)}
+          fill="none"
+          stroke={inks.tick}
+          strokeWidth={Math.min(sketchScale.line.mark, side * 0.08)}
+        />
       ) : null}
     </>
   );

@@ -2,6 +2,7 @@ import { memo } from 'react';
 import { G, Rect, Text as SvgText } from 'react-native-svg';
 import { sketchScale } from '@/components/theme/sketch-scale';
 import type { LayoutIndex } from '@/lib/layout/layout-index';
+import type { Point } from './geometry';
 import { fitCaption, textLines, type SocketDrawing } from './geometry-drawing';
 import { letterWidth, type Face, type FittedText } from './geometry-label';
 import type { Inks } from './sketch-inks';
@@ -42,45 +43,47 @@ function Glyph({ index, drawing, mark, id, chosen, inks }: SocketGlyphProps) {
     <G {...aria} transform={`translate(${box.x} ${box.y})`}>
       {svgTitle(words)}
       <SocketBody size={box} pin1={pin1} notch={notch} state={state} captioned={caption !== null} inks={inks} />
+      {label && lines && hatched ? (
+        <Plate text={label} at={{ x: area.x, y: lines.label }} face="mono" fill={inks.pencilWash} />
+      ) : null}
       {label && lines ? (
-        <G transform={`translate(${area.x} 0)`}>
-          {hatched ? <Plate text={label} middle={lines.label} face="mono" fill={inks.pencilWash} /> : null}
-          <SvgText
-            y={lines.label + label.size * 0.34}
-            textAnchor="middle"
-            fontFamily={font.monoBold}
-            fontSize={label.size}
-            fill={tone}
-          >
-            {label.text}
-          </SvgText>
-          {caption && hatched ? (
-            <Plate text={caption} middle={lines.caption} face="text" fill={inks.pencilWash} />
-          ) : null}
-          {caption ? (
-            <SvgText
-              y={lines.caption + caption.size * 0.34}
-              textAnchor="middle"
-              fontFamily={font.text}
-              fontSize={caption.size}
-              fill={inks.soft}
-            >
-              {caption.text}
-            </SvgText>
-          ) : null}
-        </G>
+        <SvgText
+          x={area.x}
+          y={lines.label + label.size * 0.34}
+          textAnchor="middle"
+          fontFamily={font.monoBold}
+          fontSize={label.size}
+          fill={tone}
+        >
+          {label.text}
+        </SvgText>
+      ) : null}
+      {caption && lines && hatched ? (
+        <Plate text={caption} at={{ x: area.x, y: lines.caption }} face="text" fill={inks.pencilWash} />
+      ) : null}
+      {caption && lines ? (
+        <SvgText
+          x={area.x}
+          y={lines.caption + caption.size * 0.34}
+          textAnchor="middle"
+          fontFamily={font.text}
+          fontSize={caption.size}
+          fill={inks.soft}
+        >
+          {caption.text}
+        </SvgText>
       ) : null}
     </G>
   );
 }
 
-type PlateProps = { text: FittedText; middle: number; face: Face; fill: string };
+type PlateProps = { text: FittedText; at: Point; face: Face; fill: string };
 
 /** Bare paper under the letters, so that no hatching runs through them. */
-function Plate({ text, middle, face, fill }: PlateProps) {
+function Plate({ text, at, face, fill }: PlateProps) {
   const width = (letterWidth(text.text, face) + 0.3) * text.size;
   const height = text.size * 1.15;
-  return <Rect x={-width / 2} y={middle - height / 2} width={width} height={height} fill={fill} />;
+  return <Rect x={at.x - width / 2} y={at.y - height / 2} width={width} height={height} fill={fill} />;
 }
 
 /** Drawn again only when what is said about this socket has changed, since marks come as new maps each time. */

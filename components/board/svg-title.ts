@@ -1,6 +1,7 @@
-import { createDomElement } from '@/components/ui/dom-element';
+import { createElement } from 'react';
 
 /** The words that a pointer shows when it rests on a part of the drawing. */
 export function svgTitle(words: string) {
-  return createDomElement('title', { children: words });
+  // A title inside an SVG needs no React Native style, so it goes to the page as it is.
+  return createElement('title', null, words);
 }
