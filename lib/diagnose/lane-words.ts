@@ -1,3 +1,4 @@
+import { rollup, sort } from 'd3-array';
 import { bankIndex, type Lane } from '../brand';
 import type { LayoutIndex } from '../layout/layout-index';
 import { bankWords, bitName, bitWords, listWords, numbersWords, rangeWords } from '../layout/words';
@@ -7,13 +8,11 @@ import { bankWords, bitName, bitWords, listWords, numbersWords, rangeWords } fro
  * bank", "every bank". Empty for no lanes.
  */
 export function lanesWords(index: LayoutIndex, lanes: Iterable<Lane>): string {
-  const perBank = new Map<number, number[]>();
-  for (const lane of [...lanes].sort((a, b) => a - b)) {
-    const bank = index.bankOf(lane);
-    const bits = perBank.get(bank);
-    if (bits) bits.push(index.bitOf(lane));
-    else perBank.set(bank, [index.bitOf(lane)]);
-  }
+  const perBank = rollup(
+    sort(lanes),
+    (own) => own.map((lane): number => index.bitOf(lane)),
+    (lane): number => index.bankOf(lane),
+  );
   if (perBank.size === 0) return '';
   const whole: number[] = [];
   const partly = new Map<string, number[]>();

@@ -1,3 +1,4 @@
+import { sum } from 'd3-array';
 import type { Change, Evidence, NextCheck, Place, Run } from '@/shared';
 import type { Lane, SocketIndex } from '../brand';
 import type { LayoutIndex } from '../layout/layout-index';
@@ -112,8 +113,8 @@ function measure({ weighed }: CheckInput, place: Place): NextCheck {
 }
 
 function entropy(shares: readonly number[]): number {
-  const total = shares.reduce((a, b) => a + b, 0);
-  return shares.reduce((sum, share) => (share > 0 ? sum - (share / total) * Math.log2(share / total) : sum), 0);
+  const total = sum(shares);
+  return -sum(shares, (share) => (share > 0 ? (share / total) * Math.log2(share / total) : 0));
 }
 
 function probe(verdict: Verdict): NextCheck {

@@ -1,3 +1,4 @@
+import { sum } from 'd3-array';
 import type { Lane } from '../brand';
 import type { Cause, Kind, Part } from './cause-types';
 import { inferNoisyOr, type HiddenVariable } from './noisy-or';
@@ -5,12 +6,15 @@ import type { RunObservation } from './observations';
 import type { Priors } from './priors';
 import type { Scope } from './scopes';
 
+/** Of the kinds of one cause. */
+type Probabilities = readonly number[] | Float64Array;
+
 /** Posterior of every kind of every cause, given what each run showed. */
 export interface Posterior {
   /** Natural logarithm of the probability of all observations. */
   readonly logEvidence: number;
   /** By part, cause and kind. */
-  readonly kinds: readonly (readonly ArrayLike<number>[])[];
+  readonly kinds: readonly (readonly Probabilities[])[];
   /** Probability that at least one of these parts has failed; exact within `leftOut`. */
   readonly anyOf: (parts: ReadonlySet<number>) => number;
   /** Upper bound of the share of probability that was left out. */
@@ -30,7 +34,7 @@ export function weigh(parts: readonly Part[], runs: readonly RunObservation[], p
   /** Logarithms of what each part contributes without touching any failure, and of its not being there. */
   const apart = new Float64Array(parts.length);
   const absent = new Float64Array(parts.length);
-  const kinds: ArrayLike<number>[][] = parts.map((part, p) =>
+  const kinds: Probabilities[][] = parts.map((part, p) =>
     part.causes.map((cause, c) => {
       const variable = variableOf(cause, evidence);
       absent[p] = (absent[p] as number) + Math.log(variable.absent);
@@ -43,12 +47,12 @@ export function weigh(parts: readonly Part[], runs: readonly RunObservation[], p
       return variable.states.map((state) => state.weight / total);
     }),
   );
-  const always = apart.reduce((a, b) => a + b, evidence.negatives * Math.log(1 - priors.leak));
+  const always = sum(apart) + evidence.negatives * Math.log(1 - priors.leak);
   const solve = (slots: readonly Slot[]) =>
     inferNoisyOr({ variables: slots.map((slot) => slot.variable), positives: evidence.positives, leak: priors.leak });
   const answer = solve(touching);
   touching.forEach(({ part, cause }, i) => {
-    (kinds[part] as ArrayLike<number>[])[cause] = answer.marginals[i] as Float64Array;
+    (kinds[part] as Probabilities[])[cause] = answer.marginals[i] as Float64Array;
   });
   const anyOf = (chosen: ReadonlySet<number>): number => {
     const without = solve(touching.filter((slot) => !chosen.has(slot.part)));
@@ -61,20 +65,13 @@ export function weigh(parts: readonly Part[], runs: readonly RunObservation[], p
 
 /** Probability of a part: the sum over its modes, which are so rare together that their overlap is nothing. */
 export function probabilityOf(posterior: Posterior, part: number): number {
-  let sum = 0;
-  for (const kinds of posterior.kinds[part] ?? []) sum += sumOf(kinds);
-  return Math.min(1, sum);
-}
-
-/** Sum of a list of numbers. */
-export function sumOf(list: ArrayLike<number>): number {
-  let sum = 0;
-  for (let i = 0; i < list.length; i++) sum += list[i] as number;
-  return sum;
+  let total = 0;
+  for (const kinds of posterior.kinds[part] ?? []) total += sum(kinds);
+  return Math.min(1, total);
 }
 
 function totalOf(variable: HiddenVariable): number {
-  return variable.states.reduce((sum, state) => sum + state.weight, variable.absent);
+  return variable.absent + sum(variable.states, (state) => state.weight);
 }
 
 function variableOf(cause: Cause, evidence: Evidence): HiddenVariable {
@@ -96,7 +93,7 @@ class Evidence {
     let next = 0;
     this.numberOf = runs.map((run) => new Map([...run.failing].map((lane) => [lane, next++])));
     this.positives = next;
-    this.negatives = runs.reduce((sum, run) => sum + run.passed.size, 0);
+    this.negatives = sum(runs, (run) => run.passed.size);
   }
 
   stateOf(kind: Kind): HiddenVariable['states'][number] {

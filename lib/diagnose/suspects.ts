@@ -1,11 +1,12 @@
 import type { FaultMode, Place, Suspect, SuspectMode } from '@/shared';
+import { maxIndex, sum } from 'd3-array';
 import type { Lane, SocketIndex } from '../brand';
 import type { LayoutIndex } from '../layout/layout-index';
 import { sentenceCase } from '../layout/words';
 import type { Cause, Part } from './cause-types';
 import { lanesWords } from './lane-words';
 import type { RunObservation } from './observations';
-import { probabilityOf, sumOf, type Posterior } from './posterior';
+import { probabilityOf, type Posterior } from './posterior';
 import { labelOf } from './timeline';
 
 /** What the words about a suspect are made from. */
@@ -50,7 +51,7 @@ export function listSuspects(findings: Findings): Suspect[] {
 
 /** Probability of the modes of a part that spoil any of these lanes. */
 function explaining({ parts, posterior, runs }: Findings, at: number, failing: ReadonlySet<Lane>): number {
-  let sum = 0;
+  let total = 0;
   parts[at]?.causes.forEach((cause, c) =>
     cause.kinds.forEach((kind, k) => {
       const own = posterior.kinds[at]?.[c]?.[k] ?? 0;
@@ -58,10 +59,10 @@ function explaining({ parts, posterior, runs }: Findings, at: number, failing: R
       const reaches = kind.scopes.some((scope, r) =>
         scope?.lanes.some((lane) => failing.has(lane) && runs[r]?.failing.has(lane)),
       );
-      if (reaches) sum += own;
+      if (reaches) total += own;
     }),
   );
-  return sum;
+  return total;
 }
 
 /** Difference of two probabilities, 0 where only the last digits of a double differ. */
@@ -70,8 +71,7 @@ function likelier(a: number, b: number): number {
 }
 
 function leadingCause(findings: Findings, { part, at }: { part: Part; at: number }): { cause: Cause; at: number } {
-  const perCause = (findings.posterior.kinds[at] ?? []).map(sumOf);
-  const best = perCause.indexOf(Math.max(...perCause));
+  const best = maxIndex(findings.posterior.kinds[at] ?? [], (kinds) => sum(kinds));
   return { cause: part.causes[Math.max(0, best)] as Cause, at: Math.max(0, best) };
 }
 

@@ -1,3 +1,4 @@
+import { sum } from 'd3-array';
 import type { Diagnosis, LaneName, Place, Suspect, SuspectGroup } from '@/shared';
 import type { Lane } from '../brand';
 import { bankWords, listWords, sentenceCase } from '../layout/words';
@@ -71,7 +72,7 @@ export function decide(weighed: Weighed): Verdict {
   const shared = suspects.filter((suspect) => suspect.kind === 'shared-part' || suspect.kind === 'short');
   const sharedSum = Math.min(
     1,
-    shared.reduce((sum, suspect) => sum + suspect.probability, 0),
+    sum(shared, (suspect) => suspect.probability),
   );
   const fitting = fittingVerdict(weighed);
   if (fitting) return fitting;
@@ -116,7 +117,7 @@ function fittingVerdict({ suspects, findings, lastRun }: Weighed): Verdict | nul
   });
   const total = Math.min(
     1,
-    fitted.reduce((sum, each) => sum + each.probability, 0),
+    sum(fitted, (each) => each.probability),
   );
   if (total < leads || lastRun === null || findings.runs[lastRun]?.failing.size === 0) return null;
   const sockets = fitted.map((each) => each.socket);
@@ -130,28 +131,28 @@ function fittingVerdict({ suspects, findings, lastRun }: Weighed): Verdict | nul
   };
 }
 
-function sharedVerdict(shared: readonly Suspect[], sum: number): Verdict {
+function sharedVerdict(shared: readonly Suspect[], total: number): Verdict {
   const members = membersOf(
     shared.map((suspect) => ({ id: suspect.id, label: suspect.label, share: suspect.probability })),
-    sum,
+    total,
   );
   const [first] = shared as [Suspect];
   const names = members.map((member) => shared.find((suspect) => suspect.id === member.id)?.sharedPart ?? member.label);
-  const one = first.probability >= leads * sum;
+  const one = first.probability >= leads * total;
   return {
     outcome: 'shared',
     headline:
       one && first.kind === 'short'
         ? `Do not pull a chip yet. Look for a ${first.label}.`
         : `Do not pull a chip yet. Look at ${one ? `${names[0]} first` : listWords(names, 4)}.`,
-    sure: sureWords(one ? first.probability : sum, { capped: false }),
-    probability: one ? first.probability : sum,
+    sure: sureWords(one ? first.probability : total, { capped: false }),
+    probability: one ? first.probability : total,
     groups:
       members.length > 1
         ? [
             {
               members,
-              probability: sum,
+              probability: total,
               why: 'What failed has no chip in common, but one of these serves it all.',
               check:
                 'Measure the supply at a socket, then follow the signals of these parts with a scope, the likeliest first.',
@@ -197,11 +198,11 @@ function groupVerdict(weighed: Weighed, shared: readonly Suspect[]): Verdict {
       share: suspect.probability,
     })),
   ];
-  const total = candidates.reduce((sum, each) => sum + each.share, 0);
+  const total = sum(candidates, (each) => each.share);
   const members = membersOf(candidates, total);
   const probability = Math.min(
     1,
-    members.reduce((sum, member) => sum + member.share, 0),
+    sum(members, (member) => member.share),
   );
   const sockets = places
     .filter((place) => members.some((member) => member.label === place.socket))

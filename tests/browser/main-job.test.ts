@@ -1,0 +1,159 @@
+import AxeBuilder from '@axe-core/playwright';
+import { chromium, type Browser, type BrowserContext, type Page } from 'playwright-core';
+
+const address = process.env.ROWCALL_URL ?? '';
+const board = '/boards/tarnvall-t-64-rev-b';
+const patience = 45_000;
+
+jest.setTimeout(300_000);
+
+let browser: Browser;
+let context: BrowserContext;
+let page: Page;
+
+const sizes = [
+  { name: 'on a phone', width: 390, height: 844 },
+  { name: 'on a wide screen', width: 1440, height: 900 },
+];
+
+beforeAll(async () => {
+  browser = await chromium.launch({
+    executablePath: '/usr/bin/chromium',
+    args: ['--no-sandbox', '--disable-background-networking', '--disable-component-update', '--no-first-run'],
+  });
+});
+afterAll(() => browser.close());
+
+const open = async (size: { width: number; height: number }, colorScheme: 'light' | 'dark' = 'light') => {
+  context = await browser.newContext({ viewport: { width: size.width, height: size.height }, colorScheme });
+  context.setDefaultTimeout(patience);
+  page = await context.newPage();
+};
+afterEach(() => context.close());
+
+/** What axe finds against WCAG 2.2 A and AA, in a form that names the place. */
+const barriers = async (): Promise<string[]> => {
+  const { violations } = await new AxeBuilder({ page })
+    .withTags(['wcag2a', 'wcag2aa', 'wcag21a', 'wcag21aa', 'wcag22aa'])
+    .analyze();
+  return violations.flatMap(({ id, nodes }) => nodes.map(({ target }) => `${id}: ${target.join(' ')}`));
+};
+
+const key = (name: string) => page.getByRole('button', { name, exact: true });
+const sideways = () => page.evaluate(() => document.documentElement.scrollWidth - document.documentElement.clientWidth);
+
+describe.each(sizes)('the main job $name', (size) => {
+  it('goes from the board, over its revision and its code, to the socket to pull, and on after the swap', async () => {
+    await open(size);
+    await page.goto(address);
+    await page.getByRole('textbox', { name: 'Board' }).fill('tarnv');
+    await page.getByText('T-64 loom controller').first().click();
+    await page.getByRole('button', { name: 'It is revision B' }).click();
+    await page.waitForURL(/tarnvall-t-64-rev-b\/diagnose/);
+
+    await key('C').click();
+    expect(await key('A').isDisabled()).toBe(true);
+    expect(await key('Find the chip').isDisabled()).toBe(true);
+    await key('5').click();
+    expect(await barriers()).toEqual([]);
+    await key('Find the chip').click();
+
+    await page.getByRole('heading', { name: /U31/ }).first().waitFor();
+    const answer = (await page.locator('main').innerText()).replace(/\s+/g, ' ');
+    expect(answer).toMatch(/Pull first U31/);
+    expect(answer).toContain('Bit 5 of bank C alone fails');
+    expect(answer).toContain('stops at the first failure');
+    expect(answer).toMatch(/swap U31 with U30/i);
+    expect(await sideways()).toBeLessThanOrEqual(0);
+    expect(await barriers()).toEqual([]);
+
+    await page.getByRole('button', { name: 'I swapped them' }).first().click();
+    await key('C').click();
+    await key('4').click();
+    await key('Find the chip').click();
+    await page
+      .getByText(/came from U31/)
+      .first()
+      .waitFor();
+    expect(await barriers()).toEqual([]);
+
+    // The whole state is in the link: another browser that opens it reads the same.
+    const link = page.url();
+    await context.close();
+    await open(size);
+    await page.goto(link);
+    await page
+      .getByText(/came from U31/)
+      .first()
+      .waitFor();
+  });
+
+  it('says at once why a code cannot be, and loses nothing when too much is pasted', async () => {
+    await open(size);
+    await page.goto(`${address}${board}/diagnose`);
+    await key('Find the chip').waitFor();
+    await page.keyboard.type('E');
+    await page
+      .getByText(/this board has banks A to D/)
+      .first()
+      .waitFor();
+    await page.keyboard.press('Backspace');
+    await page.evaluate(() => {
+      const paste = new DataTransfer();
+      paste.setData('text/plain', 'C5 '.repeat(3500));
+      document.dispatchEvent(new ClipboardEvent('paste', { clipboardData: paste, bubbles: true }));
+      document.activeElement?.dispatchEvent(new ClipboardEvent('paste', { clipboardData: paste, bubbles: true }));
+    });
+    await page
+      .getByText(/characters/i)
+      .first()
+      .waitFor();
+    expect(await barriers()).toEqual([]);
+  });
+
+  it.each(['light', 'dark'] as const)('has no barrier on any page that a guest can open, %s', async (scheme) => {
+    await open(size, scheme);
+    const paths = [
+      '/',
+      '/boards',
+      board,
+      '/boards/wrayburn-gr-5-2b',
+      '/learn/cautions',
+      '/sign-in',
+      '/sign-up',
+      '/reset',
+      '/boards/none-such',
+    ];
+    const found: string[] = [];
+    for (const path of paths) {
+      await page.goto(address + path);
+      await page.waitForFunction(() => (document.querySelector('main')?.innerText.length ?? 0) > 40);
+      await page.waitForLoadState('networkidle');
+      found.push(...(await barriers()).map((each) => `${path} ${each}`));
+      const over = await sideways();
+      if (over > 0) found.push(`${path} is ${over} px wider than the screen`);
+    }
+    expect(found).toEqual([]);
+  });
+});
+
+describe('accounts and moderation', () => {
+  const signIn = async (email: string) => {
+    await page.goto(`${address}/sign-in`);
+    await page.getByRole('textbox', { name: /mail/i }).fill(email);
+    await page.getByLabel('Password', { exact: true }).fill(process.env.ROWCALL_DEMO_PASSWORD ?? '');
+    await page.getByRole('main').getByRole('button', { name: 'Sign in' }).click();
+    await page.waitForFunction(() => !location.pathname.startsWith('/sign-in'));
+  };
+
+  it('a moderator opens the list of what waits for review, without a barrier', async () => {
+    await open({ width: 1440, height: 900 });
+    const people = await (await fetch(`${address}/api/v1/health`)).status;
+    expect(people).toBe(200);
+    await signIn(process.env.ROWCALL_MODERATOR ?? 'moderator@rowcall.example');
+    await page.goto(`${address}/review`);
+    await page.getByRole('heading', { level: 1 }).first().waitFor();
+    await page.waitForLoadState('networkidle');
+    expect(await barriers()).toEqual([]);
+  });
+});
