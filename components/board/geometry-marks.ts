@@ -1,7 +1,15 @@
 import { distanceToBox, type Box, type Point } from './geometry';
 
 /** Sizes on a chip as shares of its short side: radius of the notch, inset of the dot of pin 1, inset and size of the tick. */
-export const shares = { corner: 0.05, notch: 0.13, pin1: 0.16, tickInset: 0.2, tick: 0.3 } as const;
+export const shares = {
+  corner: 0.05,
+  notch: 0.13,
+  pin1: 0.16,
+  tickInset: 0.2,
+  tick: 0.3,
+  smallTickInset: 0.12,
+  smallTick: 0.2,
+} as const;
 
 const at = (n: number) => Number(n.toFixed(2));
 
@@ -57,7 +65,7 @@ export function tickPlace(
   { width, height }: { width: number; height: number },
   { pin1, overCaption }: { pin1: Point; overCaption: boolean },
 ): Point {
-  const inset = Math.min(width, height) * shares.tickInset;
+  const inset = Math.min(width, height) * (overCaption ? shares.smallTickInset : shares.tickInset);
   const y = overCaption ? -1 : 1;
   const x = pin1.y === y && pin1.x === 1 ? -1 : 1;
   return { x: x * (width / 2 - inset), y: y * (height / 2 - inset) };

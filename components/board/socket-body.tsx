@@ -35,16 +35,26 @@ export function SocketBody({ size, pin1, notch, state, captioned = false, inks }
   const side = Math.min(size.width, size.height);
   const dot = pin1Place(size, pin1);
   const tick = tickPlace(size, { pin1, overCaption: captioned });
+  // Dashes would swallow the small notch, and a heavy line would fill it.
+  const notchApart = hollow || state === 'possible';
   const fill = hollow ? 'transparent' : hatched ? inks.pencilWash : inks.chip;
   return (
     <>
       <Path
-        d={bodyPath(size) + notchPath(size, notch)}
+        d={notchApart ? bodyPath(size) : bodyPath(size) + notchPath(size, notch)}
         fill={fill}
         stroke={stroke}
         strokeWidth={width}
         strokeDasharray={dashes[state]}
       />
+      {notchApart ? (
+        <Path
+          d={notchPath(size, notch)}
+          fill="none"
+          stroke={stroke}
+          strokeWidth={Math.min(width, sketchScale.line.body)}
+        />
+      ) : null}
       {hatched ? (
         <Path
           d={hatchPath(size, Math.max(sketchScale.hatch, side * 0.13))}
@@ -61,7 +71,7 @@ export function SocketBody({ size, pin1, notch, state, captioned = false, inks }
       />
       {state === 'passed' || state === 'mixed' ? (
         <Path
-          d={tickPath(Math.min(side * shares.tick, sketchScale.greatestLabel), tick)}
+          d={tickPath(Math.min(side * (captioned ? shares.smallTick : shares.tick), sketchScale.greatestLabel), tick)}
           fill="none"
           stroke={inks.tick}
           strokeWidth={Math.min(sketchScale.line.mark, side * 0.08)}
