@@ -1,7 +1,7 @@
 import { lane } from '@/lib/brand';
 import { buildLayoutIndex, compileFormat, validateLayout } from '@/lib';
 import { type LayoutDocument, type LayoutDocumentInput, layoutDocument } from '@/shared';
-import type { ibmPc} from './machine-charts';
+import type { ibmPc } from './machine-charts';
 import { bbcModelB, commodore64, spectrum48 } from './machine-charts';
 
 interface Chart {
