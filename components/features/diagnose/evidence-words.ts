@@ -16,7 +16,11 @@ export function evidenceWords(seen: Evidence, { index, formatName }: Bench): Evi
   switch (seen.kind) {
     case 'code': {
       const name = formatName(seen.format) ?? 'a format that this board does not have';
-      return { text: seen.text, note: name.charAt(0).toLowerCase() + name.slice(1), code: true };
+      return {
+        text: seen.text,
+        note: /^.[a-z ]/.test(name) ? name.charAt(0).toLowerCase() + name.slice(1) : name,
+        code: true,
+      };
     }
     case 'lanes':
       return { text: lanesOrNone(index, seen.failing), note: passedWords(seen.passed), code: false };

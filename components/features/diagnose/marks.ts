@@ -1,4 +1,5 @@
 import type { SharedPartMark, SketchMarks, SocketMark, SocketState } from '@/components/board/sketch-types';
+import { leadingSuspects } from './answer/suspect-words';
 import type { Lane, LayoutIndex } from '@/lib';
 import type { Diagnosis, LaneName, LaneState } from '@/shared';
 
@@ -13,9 +14,9 @@ export function answerMarks(index: LayoutIndex, diagnosis: Diagnosis): SketchMar
   const sockets = new Map<string, SocketMark>();
   const sharedParts = new Map<string, SharedPartMark>();
   const ranks = new Map<string, number>();
-  for (const { rank, socket, sharedPart, probability, explains } of diagnosis.suspects) {
-    // What explains nothing is merely not cleared; its number would draw the eye for no reason.
-    if (rank > mostRanks || probability < leastRanked || explains.length === 0) continue;
+  // What explains nothing is merely not cleared; its number would draw the eye for no reason.
+  for (const { rank, socket, sharedPart, probability } of leadingSuspects(diagnosis)) {
+    if (rank > mostRanks || probability < leastRanked) continue;
     if (sharedPart !== null && !sharedParts.has(sharedPart)) sharedParts.set(sharedPart, { rank, state: 'suspect' });
     else if (socket !== null && !ranks.has(socket)) ranks.set(socket, rank);
   }

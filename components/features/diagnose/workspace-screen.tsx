@@ -16,6 +16,9 @@ import { useWorkspace } from './use-workspace';
 import { useWorkspaceModel } from './use-workspace-model';
 import { WorkspaceColumns } from './workspace-columns';
 
+/** Longest name in characters that leaves the header one line on a phone, or two. */
+const longestName = 44;
+
 type WorkspaceScreenProps = { bench: Bench; fromDevice: boolean; error: Error | null };
 
 /** The workspace of a board that is there. */
@@ -28,7 +31,7 @@ export function WorkspaceScreen({ bench, fromDevice, error }: WorkspaceScreenPro
   const short = `${board.name}, rev ${board.revision}`;
   const { slug } = workspace;
   useKeepAwake();
-  useShowBoardInHeader(short, slug);
+  useShowBoardInHeader(short.length > longestName ? `${short.slice(0, longestName)}…` : short, slug);
   const body = useRef<View>(null);
   useFocusOnStep(workspace.revision, body);
   useEffect(() => rememberBoard({ slug, name: boardName(board) }), [slug, board]);

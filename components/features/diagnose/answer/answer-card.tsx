@@ -54,7 +54,12 @@ export function AnswerCard({ diagnosis }: { diagnosis: Diagnosis }) {
       )}
       <Unread diagnosis={diagnosis} />
       {diagnosis.groups.map((group) => (
-        <GroupMembers key={group.why} group={group} nextCheck={diagnosis.nextChecks[0]?.label ?? null} />
+        <GroupMembers
+          key={group.why}
+          members={group.members}
+          why={isSaid(diagnosis, group.why) ? null : group.why}
+          check={group.check === diagnosis.nextChecks[0]?.label ? null : group.check}
+        />
       ))}
       {diagnosis.pairs.map(({ parts, labels, probability }) => (
         <Text key={parts.join()} variant="small">
@@ -70,9 +75,13 @@ export function AnswerCard({ diagnosis }: { diagnosis: Diagnosis }) {
   );
 }
 
+/** Whether the sentences say it already. */
+const isSaid = ({ sentences }: Diagnosis, words: string | null) =>
+  words !== null && sentences.join(' ').includes(words);
+
 /** Evidence that was not used, and why: an answer that rests on less than was typed says so. */
 function Unread({ diagnosis }: { diagnosis: Diagnosis }) {
-  const unread = diagnosis.evidence.filter(({ ok }) => !ok);
+  const unread = diagnosis.evidence.filter(({ ok, reason }) => !ok && !isSaid(diagnosis, reason));
   return unread.map(({ run, index, text, reason }) => (
     <Text key={`${run}.${index}`} variant="small">
       <Text variant="smallStrong" tone="pencil">

@@ -4,23 +4,28 @@ import { Text } from '@/components/ui/text';
 import type { SuspectGroup } from '@/shared';
 import { ShareBar } from './share-bar';
 
-/** Parts that the evidence cannot tell apart, with their shares, why, and what would tell them apart where the next check does not say it anyway. */
-export function GroupMembers({ group, nextCheck }: { group: SuspectGroup; nextCheck: string | null }) {
+type GroupMembersProps = Pick<SuspectGroup, 'members' | 'check'> & {
+  /** Null where it is said already. */
+  why: string | null;
+};
+
+/** Parts that the evidence cannot tell apart, with their shares, why, and what would tell them apart. */
+export function GroupMembers({ members, why, check }: GroupMembersProps) {
   const styles = useStyles();
   return (
     <View style={styles.group}>
       <View role="list" aria-label="Members of the group" style={styles.list}>
-        {group.members.map(({ id, label, share }) => (
+        {members.map(({ id, label, share }) => (
           <View key={id} role="listitem">
             <ShareBar label={label} share={share} mono={label.length <= 8} />
           </View>
         ))}
       </View>
-      <Text variant="small">{group.why}</Text>
-      {group.check === null || group.check === nextCheck ? null : (
+      {why === null ? null : <Text variant="small">{why}</Text>}
+      {check === null ? null : (
         <Text variant="small">
           <Text variant="smallStrong">To tell them apart: </Text>
-          {group.check}
+          {check}
         </Text>
       )}
     </View>

@@ -92,7 +92,7 @@ export function doneOf({ action, sockets }: NextCheck): { label: string; changes
       if (one === undefined) return null;
       return { label: 'I reseated it', changes: [{ kind: 'reseat', socket: one }] };
     case 'read-again':
-      return { label: 'I ran it again', changes: [] };
+      return { label: 'I have another report', changes: [] };
     case 'soak':
       return { label: 'It has run', changes: sockets.map((socket): Change => ({ kind: 'reseat', socket })) };
     case 'measure':
@@ -103,7 +103,7 @@ export function doneOf({ action, sockets }: NextCheck): { label: string; changes
 }
 
 /** What is seen may be a code, or words such as "no failure". */
-const isWords = (sees: string) => /^[a-z]+ [a-z ]+$|^nothing$/.test(sees);
+const isWords = (sees: string) => /^[a-z]{2,}( |$)/.test(sees);
 
 function minutesWords(minutes: number): string {
   return minutes < 120 ? `${Math.round(minutes)}\u00a0min` : `${Math.round(minutes / 60)}\u00a0h`;

@@ -42,7 +42,7 @@ export function SuspectEntry({ suspect, onShow }: { suspect: Suspect; onShow: (s
             <Button
               kind="quiet"
               label={open ? 'Less' : 'Why, and what against'}
-              aria-label={`${open ? 'Less' : 'Why, and what against'}: ${name}`}
+              aria-label={`${open ? 'Less' : 'Why, and what against'}: ${name} ${suspectKind(suspect)}`.trim()}
               aria-expanded={open}
               onPress={() => setOpen(!open)}
             />

@@ -4,6 +4,7 @@ import { Button } from '@/components/ui/button';
 import { Panel } from '@/components/ui/panel';
 import type { Diagnosis } from '@/shared';
 import { SuspectEntry } from './suspect-entry';
+import { leadingSuspects } from './suspect-words';
 
 /** Suspects that stand at once. */
 const atOnce = 4;
@@ -13,8 +14,7 @@ export function SuspectList({ diagnosis, onShow }: { diagnosis: Diagnosis; onSho
   const [all, setAll] = useState(false);
   const { suspects } = diagnosis;
   if (suspects.length === 0) return null;
-  // What explains nothing is merely not cleared yet: it is there on request.
-  const leading = suspects.filter(({ explains }) => explains.length > 0).slice(0, atOnce);
+  const leading = leadingSuspects(diagnosis).slice(0, atOnce);
   const shown = all ? suspects : leading;
   return (
     <Panel title="Suspects">

@@ -1,4 +1,4 @@
-import type { Suspect } from '@/shared';
+import type { Diagnosis, Suspect } from '@/shared';
 
 /** What stands large for a suspect: its label on the board. */
 export function suspectName({ socket, sharedPart, label, kind }: Suspect): string {
@@ -27,4 +27,10 @@ export function suspectKind(suspect: Suspect): string {
 function beside(label: string, name: string | null): string {
   const rest = name === null ? label : label.replace(name, '').replace(/^[\s,:(]+|[\s)]+$/g, '');
   return rest === '' ? 'shared part' : rest;
+}
+
+/** Suspects that the evidence speaks for: they explain some of it, or belong to a group that does. Others are merely not cleared. */
+export function leadingSuspects({ suspects, groups }: Diagnosis): Suspect[] {
+  const members = new Set(groups.flatMap((group) => group.members.map(({ id }) => id)));
+  return suspects.filter(({ id, explains }) => explains.length > 0 || members.has(id));
 }

@@ -2,7 +2,7 @@ import { useEffect, useRef, useState } from 'react';
 import { TextInput, View } from 'react-native';
 import { makeStyles, useBreakpoint } from '@/components/theme';
 import { Text } from '@/components/ui/text';
-import { erase, press, type TypedCode } from './typed-code';
+import { erase, typeSign, type TypedCode } from './typed-code';
 import type { CompiledFormat } from '@/lib';
 
 type CodeDisplayProps = {
@@ -35,7 +35,7 @@ export function CodeDisplay({ format, code, onChange, onSubmit, describedBy }: C
 
   const type = (next: string) => {
     if (next.length === code.text.length + 1 && next.startsWith(code.text)) {
-      return onChange(press(format, code.text, next.slice(-1)));
+      return onChange(typeSign(format, code.text, next.slice(-1)));
     }
     if (next.length === code.text.length - 1 && code.text.startsWith(next)) return onChange(erase(format, code.text));
     onChange(next);

@@ -15,9 +15,15 @@ export function withFills(format: CompiledFormat, text: string): string {
   return filled;
 }
 
-/** The text after a key. Fixed text before and after the key comes by itself. */
+/** The text after a key of the keypad. Fixed text before the key comes by itself. */
 export function press(format: CompiledFormat, text: string, key: string): string {
-  return withFills(format, withFills(format, text) + key);
+  return withFills(format, text) + key;
+}
+
+/** The text after a sign of a real keyboard: whoever types the fixed text too, as the machine shows it, types it once. */
+export function typeSign(format: CompiledFormat, text: string, sign: string): string {
+  const fixed = withFills(format, text).charAt(text.length);
+  return fixed !== '' && fixed.toUpperCase() === sign.toUpperCase() ? text + fixed : press(format, text, sign);
 }
 
 /** The text with the last thing that was typed taken away; fixed text that came by itself goes with it. */

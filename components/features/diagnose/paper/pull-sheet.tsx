@@ -8,7 +8,7 @@ import { Text } from '@/components/ui/text';
 import { Wordmark } from '@/components/features/shell/wordmark';
 import type { Diagnosis, Run } from '@/shared';
 import { stated } from '../stated';
-import { suspectKind, suspectName } from '../answer/suspect-words';
+import { leadingSuspects, suspectKind, suspectName } from '../answer/suspect-words';
 import type { Bench } from '../bench';
 import { evidenceWords, runTitle } from '../evidence-words';
 import { pullSteps } from './pull-steps';
@@ -24,6 +24,8 @@ type PullSheetProps = {
 /** Suspects, and pieces of evidence of a run, that fit on one page. */
 const mostSuspects = 4;
 const mostEvidence = 8;
+/** Suspects below this probability are left to the screen. */
+const leastPrinted = 0.01;
 
 /** One page for the bench: what was reported, what to pull, how sure, the steps, and blanks to fill in by hand. */
 export function PullSheet({ bench, runs, diagnosis, marks, view }: PullSheetProps) {
@@ -61,7 +63,7 @@ export function PullSheet({ bench, runs, diagnosis, marks, view }: PullSheetProp
             print
             compact={false}
             showControls={false}
-            greatestHeight={330}
+            greatestHeight={300}
           />
         </View>
         <View style={styles.right}>
@@ -99,16 +101,16 @@ export function PullSheet({ bench, runs, diagnosis, marks, view }: PullSheetProp
             {text}
           </Text>
         ))}
-        <Text variant="fine">The equipment’s service manual and local rules come first.</Text>
       </View>
     </View>
   );
 }
 
-// Until it is printed the sheet lies beside the page, where the sketch can measure itself.
+// Until it is printed the sheet lies beside the page, where the sketch can measure itself. Type made for a screen at
+// arm's length is smaller on paper, so that all of it fits one page of A4 or Letter.
 const paperRules = `
 @page { margin: 12mm; }
-@media print { [data-paper] { position: static !important; width: auto !important; } }
+@media print { [data-paper] { position: static !important; width: auto !important; background: none !important; zoom: 0.82; } }
 `;
 
 const ignore = () => undefined;
@@ -142,13 +144,14 @@ function Reported({ bench, runs }: { bench: Bench; runs: readonly Run[] }) {
 
 function Suspects({ diagnosis }: { diagnosis: Diagnosis }) {
   const styles = useStyles();
-  if (diagnosis.suspects.length === 0) return null;
+  const suspects = leadingSuspects(diagnosis).filter(({ probability }) => probability >= leastPrinted);
+  if (suspects.length === 0) return null;
   return (
     <View style={styles.suspects}>
       <Text variant="smallStrong" level={3}>
         Suspects
       </Text>
-      {diagnosis.suspects.slice(0, mostSuspects).map((suspect) => (
+      {suspects.slice(0, mostSuspects).map((suspect) => (
         <View key={suspect.id} style={styles.suspect}>
           <Text variant="codeSmall">{`${suspect.rank}  ${suspectName(suspect)}`}</Text>
           <Text variant="small" style={styles.words}>
@@ -193,7 +196,8 @@ const useStyles = makeStyles((t) => ({
   blanks: { flexDirection: 'row', gap: t.space.lg },
   blank: {
     flexGrow: 1,
-    flexBasis: 0,
+    flexBasis: 'auto',
+    maxHeight: t.space.xl,
     flexDirection: 'row',
     alignItems: 'flex-end',
     gap: t.space.sm,

@@ -10,7 +10,7 @@ export function pullSteps({ document }: Bench, { headline, nextChecks, outcome }
   steps.push(headline);
   if (check !== undefined && check.label !== headline) {
     const outcomes = check.outcomes.slice(0, 3).map(({ sees, means }) => `${sees}: ${means}`);
-    steps.push([check.label, ...outcomes].join(' ').trim());
+    steps.push(`${check.label} ${outcomes.join('; ')}`.trim());
   }
   steps.push('Run the test again, and write down what it reports: ____________________');
   steps.push('Soak it for some hours, cold and warm, before it is called repaired.');
