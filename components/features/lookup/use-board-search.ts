@@ -43,7 +43,7 @@ export function useBoardSearch(text: string): BoardSearch {
   return {
     families,
     kept: keptSlugs,
-    state: failed && families.length === 0 ? 'failed' : served.isPending && families.length === 0 ? 'loading' : 'ready',
+    state: failed && keptSlugs.size === 0 ? 'failed' : served.isPending && families.length === 0 ? 'loading' : 'ready',
     deviceOnly: served.isError && served.error instanceof NetworkFailure,
     error: served.error,
     retry: () => void served.refetch(),

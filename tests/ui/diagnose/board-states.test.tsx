@@ -3,20 +3,14 @@ import { DiagnoseScreen } from '@/components/features/diagnose/diagnose-screen';
 import { demoBoards } from '@/server/seeders/boards';
 import { layoutDocument } from '@/shared';
 import { setDevice } from '../support/device';
+import { keptOnDevice } from '../support/idb';
 import { renderPage } from '../support/render';
 import { fakeServer, problem } from '../support/server';
 import { address } from './live-router';
 
 jest.mock('expo-router', () => jest.requireActual<typeof import('./live-router')>('./live-router').liveRouter());
 
-const kept = new Map<string, unknown>();
-jest.mock('idb-keyval', () => ({
-  createStore: () => 'store',
-  get: async (key: string) => kept.get(key),
-  set: async (key: string, value: unknown) => void kept.set(key, value),
-  del: async (key: string) => void kept.delete(key),
-  entries: async () => [...kept],
-}));
+jest.mock('idb-keyval', () => jest.requireActual<typeof import('../support/idb')>('../support/idb').idbDouble());
 
 const loom = demoBoards.find(({ slug }) => slug === 'tarnvall-t-64-rev-b');
 const published = {
@@ -27,7 +21,7 @@ const published = {
 };
 
 beforeEach(() => {
-  kept.clear();
+  keptOnDevice.clear();
   window.scrollTo = jest.fn();
   setDevice({ width: 390 });
   address.start({ slug: 'loom', r: '1~c.lamp.C5' });
@@ -38,18 +32,18 @@ describe('the board of a workspace', () => {
     fakeServer({ 'GET /layouts/loom': { status: 200, body: published } });
     renderPage(<DiagnoseScreen />);
     expect(await screen.findByLabelText('Pull U31 first.')).toBeInTheDocument();
-    expect(kept.has('loom')).toBe(true);
+    expect(keptOnDevice.has('loom')).toBe(true);
   });
 
   it('answers from the device where there is no network', async () => {
-    kept.set('loom', { ...published, keptAt: 0 });
+    keptOnDevice.set('loom', { ...published, keptAt: 0 });
     fakeServer({ 'GET /layouts/loom': null });
     renderPage(<DiagnoseScreen />);
     expect(await screen.findByLabelText('Pull U31 first.')).toBeInTheDocument();
   });
 
   it('says that it is kept only, where it is no longer published', async () => {
-    kept.set('loom', { ...published, keptAt: 0 });
+    keptOnDevice.set('loom', { ...published, keptAt: 0 });
     fakeServer({ 'GET /layouts/loom': problem('not-found') });
     renderPage(<DiagnoseScreen />);
     expect(await screen.findByText('This board is no longer published.')).toBeInTheDocument();

@@ -3,6 +3,7 @@ import { LookupScreen } from '@/components/features/lookup/lookup-screen';
 import { demoBoards } from '@/server/seeders/boards';
 import { layoutDocument } from '@/shared';
 import type { LayoutCard } from '@/shared/api/layouts';
+import { keptOnDevice } from '../support/idb';
 import { renderPage } from '../support/render';
 import { routes } from '../support/router';
 import { fakeServer } from '../support/server';
@@ -11,14 +12,7 @@ jest.mock('expo-router', () =>
   jest.requireActual<typeof import('../support/router')>('../support/router').routerDouble(),
 );
 
-const kept = new Map<string, unknown>();
-jest.mock('idb-keyval', () => ({
-  createStore: () => 'store',
-  get: async (key: string) => kept.get(key),
-  set: async (key: string, value: unknown) => void kept.set(key, value),
-  del: async (key: string) => void kept.delete(key),
-  entries: async () => [...kept],
-}));
+jest.mock('idb-keyval', () => jest.requireActual<typeof import('../support/idb')>('../support/idb').idbDouble());
 
 const publishedOf = (slug: string) => ({
   slug,
@@ -54,7 +48,7 @@ const online = {
 };
 
 beforeEach(() => {
-  kept.clear();
+  keptOnDevice.clear();
   routes.params = {};
   routes.pushed = [];
 });
@@ -87,7 +81,7 @@ describe('the look-up', () => {
   });
 
   it('searches the boards of the device where there is no network', async () => {
-    kept.set('kestrup-lc-2-rev-d', { ...publishedOf('kestrup-lc-2-rev-d'), keptAt: 0 });
+    keptOnDevice.set('kestrup-lc-2-rev-d', { ...publishedOf('kestrup-lc-2-rev-d'), keptAt: 0 });
     fakeServer({ 'GET /layouts': null });
     const { user } = renderPage(<LookupScreen />);
     expect(await screen.findByText('✓ works without network')).toBeInTheDocument();
