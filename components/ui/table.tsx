@@ -28,7 +28,7 @@ export type TableProps<Row> = {
   rowKey: (row: Row) => string;
   /** A row to point out, with pencil wash. */
   isMarked?: (row: Row) => boolean;
-  /** Rows close together, for a table in which nothing is tapped. */
+  /** Few and short columns in which nothing is tapped: rows close together, and columns on a phone too. */
   dense?: boolean;
   /** What to show where there is no row. */
   empty?: ReactNode;
@@ -39,8 +39,8 @@ export function Table<Row>(props: TableProps<Row>) {
   const styles = useStyles();
   const captionId = useId();
   const breakpoint = useBreakpoint();
-  const { caption, hideCaption, rows, empty } = props;
-  const Body = breakpoint === 'phone' ? StackedRows : WideRows;
+  const { caption, hideCaption, rows, empty, dense } = props;
+  const Body = breakpoint === 'phone' && !dense ? StackedRows : WideRows;
   return (
     <View style={styles.table}>
       {hideCaption ? (

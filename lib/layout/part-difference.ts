@@ -7,6 +7,9 @@ export interface ThingDifference {
   readonly words: string;
 }
 
+/** What is said of a socket whose contents alone have changed. */
+export const holdsOther = 'holds other lanes or words';
+
 type Facts<Thing> = readonly (readonly [words: string, fact: (thing: Thing) => unknown])[];
 
 const socketFacts: Facts<Socket> = [
@@ -14,7 +17,7 @@ const socketFacts: Facts<Socket> = [
   ['has pin 1 at another corner', ({ pin1 }) => pin1],
   ['takes another chip family', ({ family }) => family],
   ['is soldered or socketed otherwise', ({ soldered }) => soldered],
-  ['holds other lanes or words', ({ holds }) => holds],
+  [holdsOther, ({ holds }) => holds],
 ];
 
 const partFacts: Facts<SharedPart> = [

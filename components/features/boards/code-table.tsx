@@ -36,18 +36,17 @@ export function CodeTable({ bench, format }: CodeTableProps) {
         hideCaption={spoken.length <= pageSize}
         columns={[
           { key: 'code', header: 'Code', mono: true, share: 2, cell: ({ text }) => text ?? '' },
-          { key: 'bank', header: 'Bank', share: 1.4, cell: ({ bank }) => bank },
-          { key: 'bit', header: 'Bit', share: 1.4, cell: ({ bit }) => bit },
+          { key: 'lane', header: 'Bit', share: 2, cell: ({ lane }) => <Text variant="small">{lane}</Text> },
           {
             key: 'socket',
             header: 'Socket',
-            share: 1.6,
+            share: 1.2,
             cell: ({ sockets }) => <Text variant="code">{listWords(sockets, 8) || 'none'}</Text>,
           },
         ]}
         dense
         rows={shown}
-        rowKey={({ lane }) => String(lane)}
+        rowKey={({ key }) => key}
         empty={<Text tone="soft">This format names no single bit of the board.</Text>}
       />
       {spoken.length > pageSize ? <Pages page={page} count={spoken.length} onPage={setPage} /> : null}

@@ -11,7 +11,7 @@ export function differenceMarks(after: LayoutDocument, difference: LayoutDiffere
     // A code that moved without its lane: the counting changed.
     for (const label of [...before, ...now]) if (!notes.has(label)) notes.set(label, `was not ${text}`);
   }
-  for (const [label, was] of heldBefore(difference.lanes)) notes.set(label, wasWords(after, was));
+  for (const [label, was] of heldBefore(difference.lanes)) notes.set(label, wasWords(after, label, was));
   const sockets = new Map(
     after.sockets.flatMap(({ label }): [string, SocketMark][] => {
       const note = notes.get(label);
@@ -32,8 +32,10 @@ function heldBefore(lanes: readonly LaneDifference[]): Map<string, LaneDifferenc
   return held;
 }
 
-function wasWords({ memory }: LayoutDocument, was: readonly LaneDifference[]): string {
-  const several = memory.banks.length > 1;
+/** "was bit 3"; with the bank where the socket belongs to another one now. */
+function wasWords({ memory, sockets }: LayoutDocument, label: string, was: readonly LaneDifference[]): string {
+  const banks = new Set(sockets.find((socket) => socket.label === label)?.holds.map(({ bank }) => bank));
+  const several = was.some(({ bank }) => !banks.has(bank));
   return `was ${listWords(
     was.map(({ bank, bit }) => `${several ? `${bank} ` : ''}bit ${bitName(memory, bit)}`),
     2,

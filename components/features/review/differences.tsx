@@ -5,6 +5,7 @@ import { makeStyles } from '@/components/theme';
 import { Button } from '@/components/ui/button';
 import { Text } from '@/components/ui/text';
 import type { FormatDifference, LayoutDifference } from '@/lib/layout/difference';
+import { holdsOther } from '@/lib/layout/part-difference';
 import { bankWords, sentenceCase } from '@/lib/layout/words';
 
 type DifferencesProps = { difference: LayoutDifference; before: number; after: number };
@@ -17,7 +18,10 @@ export function Differences({ difference, before, after }: DifferencesProps) {
   const styles = useStyles();
   const { lanes, sameLanes, formats, sockets, sharedParts, sections } = difference;
   const codes = formats.flatMap((format) => format.changed.map((code) => ({ format, code })));
-  const things = [...sockets, ...sharedParts];
+  // What a socket holds is told by its lanes already.
+  const held = new Set(lanes.flatMap(({ before: was, after: now }) => [...was, ...now]));
+  const others = sockets.filter(({ label, words }) => words !== holdsOther || !held.has(label));
+  const things = [...others, ...sharedParts];
   const nothing = codes.length + lanes.length + things.length === 0;
   return (
     <View style={styles.all}>
