@@ -47,7 +47,9 @@ export interface NoisyOrAnswer {
 export const exactWithin = 1e-9;
 /** Work that one answer may take before combinations of many faults are left out, in elementary steps. */
 const workLimit = 300_000;
-/** A group whose table of explained subsets costs less than this is summed in one go. */
+/** A whole group is summed by one table up to this many steps: they are short ones, and nothing is left out. */
+const wholeTable = 150_000;
+/** A piece of a larger group whose table of explained subsets costs less than this is summed in one go. */
 const smallTable = 3_000;
 /** Up to this the table is still taken where the group only falls apart after many variables are fixed. */
 const largeTable = 150_000;
@@ -101,6 +103,7 @@ function inferMerged(model: NoisyOrModel): NoisyOrAnswer {
 
 /** Sums one connected group, leaving out less and less until the answer is exact or the work is used up. */
 function solveWithin(nodes: readonly Node[], part: Component, quiet: Float64Array): Solution {
+  if (tableSteps(nodes, part) <= wholeTable) return solveByTable(nodes, part, quiet);
   let best: Solution | null = null;
   let spent = 0;
   // A first coarse pass tells how large the sum is; the next ones leave out only what is small beside it.
