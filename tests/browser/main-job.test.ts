@@ -52,7 +52,7 @@ describe.each(sizes)('the main job $name', (size) => {
     await page.goto(address);
     await page.getByLabel('Board', { exact: true }).fill('tarnv');
     await page.getByText('T-64 loom controller').first().click();
-    await page.getByRole('button', { name: 'It is revision B' }).click();
+    await page.getByText('It is revision B').click();
     await page.waitForURL(/tarnvall-t-64-rev-b\/diagnose/);
 
     await key('C').click();
