@@ -13,7 +13,9 @@ export function ArrayFacts({ document }: { document: LayoutDocument }) {
     <View style={styles.facts}>
       <Banks document={document} />
       <View style={styles.part}>
-        <Text variant="subheading">Chips</Text>
+        <Text variant="subheading" level={2}>
+          Chips
+        </Text>
         <DetailLines
           label="Chips"
           lines={familyCounts(document).map(({ id, name, sockets }) => ({
@@ -28,7 +30,9 @@ export function ArrayFacts({ document }: { document: LayoutDocument }) {
       <Windows document={document} />
       {document.board.notes === undefined ? null : (
         <View style={styles.part}>
-          <Text variant="subheading">Notes</Text>
+          <Text variant="subheading" level={2}>
+            Notes
+          </Text>
           <Text style={styles.notes}>{document.board.notes}</Text>
         </View>
       )}
@@ -52,7 +56,9 @@ function Banks({ document: { memory } }: { document: LayoutDocument }) {
   const all = memory.banks.length;
   return (
     <View style={styles.part}>
-      <Text variant="subheading">{all > mostBanks ? `The first ${mostBanks} of ${all} banks` : 'Banks'}</Text>
+      <Text variant="subheading" level={2}>
+        {all > mostBanks ? `The first ${mostBanks} of ${all} banks` : 'Banks'}
+      </Text>
       <DetailLines
         label="Banks"
         lines={memory.banks
@@ -68,7 +74,9 @@ function Rails({ document }: { document: LayoutDocument }) {
   const { rails } = document;
   return (
     <View style={styles.part}>
-      <Text variant="subheading">Rails at the pins</Text>
+      <Text variant="subheading" level={2}>
+        Rails at the pins
+      </Text>
       {rails.length === 0 ? (
         <Text tone="soft">Nobody has noted them. Measure before another chip is fitted.</Text>
       ) : (
@@ -94,7 +102,9 @@ function Inputs({ document: { multiplexing } }: { document: LayoutDocument }) {
   const order = (bits: readonly number[]) => (bits.length === 0 ? 'none' : `word bits ${bits.join(', ')}`);
   return (
     <View style={styles.part}>
-      <Text variant="subheading">Row and column inputs</Text>
+      <Text variant="subheading" level={2}>
+        Row and column inputs
+      </Text>
       <DetailLines
         label="Row and column inputs"
         lines={[
@@ -124,7 +134,7 @@ function Windows({ document: { addressMap } }: { document: LayoutDocument }) {
       .join(', ');
   return (
     <View style={styles.part}>
-      <Text variant="subheading">
+      <Text variant="subheading" level={2}>
         {`${all > mostWindows ? `The first ${mostWindows} of ${all} address windows` : 'Addresses'}, ${addressMap.notation}`}
       </Text>
       <DetailLines

@@ -25,7 +25,8 @@ export function meaningOf({ index }: Bench, { compiled }: BenchFormat, text: str
   const map = buildAddressMap(index);
   return {
     ok: true,
-    notes: read.notes.map((note) => `${sentenceCase(note)}.`),
+    // As they are: a capital in front would spoil "c read as C".
+    notes: read.notes,
     readings: read.readings.map((reading) => {
       const lanes = reading.failing.map(({ lane }) => lane);
       return {

@@ -8,8 +8,8 @@ import { SourceList } from './source-list';
 export function SourcesTab({ bench }: { bench: Bench }) {
   return (
     <Split
-      mainLabel="Sources"
-      asideLabel="Worked examples"
+      mainLabel="What it rests on"
+      asideLabel="What was tried"
       main={
         <Panel title="Sources" note="Where the facts come from, and which of them each one proves.">
           <SourceList sources={bench.document.sources} />
