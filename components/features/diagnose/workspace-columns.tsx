@@ -6,6 +6,7 @@ import { Button } from '@/components/ui/button';
 import { Text } from '@/components/ui/text';
 import { AnswerCard } from './answer/answer-card';
 import { Cautions } from './answer/cautions';
+import { Expectations } from './answer/expectations';
 import { NextChecks } from './answer/next-checks';
 import { SuspectList } from './answer/suspect-list';
 import { EntryPanel } from './entry/entry-panel';
@@ -14,6 +15,7 @@ import { ChangePanel } from './runs/change-panel';
 import { RunList } from './runs/run-list';
 import { RevisionNote } from './revision-note';
 import type { WorkspaceModel } from './use-workspace-model';
+import { awaitsReport } from './workspace-runs';
 import { WorkspaceTools } from './workspace-tools';
 
 type ColumnsProps = { model: WorkspaceModel; onPrint: () => void };
@@ -38,6 +40,7 @@ function OneColumn({ model, onPrint }: ColumnsProps) {
           between={
             <>
               <Sketch model={model} compact />
+              {model.workspace.runs.length > 1 && awaitsReport(model.workspace.runs) ? <Checks model={model} /> : null}
               <RevisionNote document={model.bench.document} slug={model.workspace.slug} />
             </>
           }
@@ -95,6 +98,11 @@ function SideBySide({ model, onPrint }: ColumnsProps) {
       <NoReportYet model={model} />
     ) : (
       <>
+        {awaitsReport(model.workspace.runs) ? (
+          <Text variant="small" tone="soft">
+            As it stands before the report of this run:
+          </Text>
+        ) : null}
         <AnswerCard diagnosis={model.diagnosis} />
         <Checks model={model} />
         <SuspectList diagnosis={model.diagnosis} onShow={model.open} />
@@ -153,7 +161,9 @@ function Sketch({ model, compact = false }: { model: WorkspaceModel; compact?: b
 }
 
 function Checks({ model }: { model: WorkspaceModel }) {
-  if (model.workspace.step.at === 'change') return null;
+  const { bench, workspace } = model;
+  if (workspace.step.at === 'change') return null;
+  if (awaitsReport(workspace.runs)) return <Expectations bench={bench} runs={workspace.runs} />;
   return <NextChecks diagnosis={model.diagnosis} onDone={model.begin} onOther={() => model.beginChange()} />;
 }
 

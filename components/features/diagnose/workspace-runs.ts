@@ -41,11 +41,6 @@ export function beginRun(runs: readonly Run[], changes: readonly Change[]): Run[
   return [...before, { ...emptyRun(), changes: [...changes] }];
 }
 
-/** Takes a change of a run back. */
-export function dropChange(runs: readonly Run[], at: number, index: number): Run[] {
-  return tidy(editRun(runs, at, (run) => ({ ...run, changes: run.changes.filter((_, place) => place !== index) })));
-}
-
 /** Takes a whole run away, with what was done before it. */
 export function dropRun(runs: readonly Run[], at: number): Run[] {
   return tidy(runs.filter((_, place) => place !== at));

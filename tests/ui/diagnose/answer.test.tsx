@@ -78,6 +78,16 @@ describe('after the answer', () => {
     expect(screen.getByText('What does it report now?')).toBeInTheDocument();
   });
 
+  it('says while the run waits what each report would mean', async () => {
+    setDevice({ width: 1440 });
+    const { user } = showWorkspace(loom, { r: '1~c.lamp.C5' });
+    const before = screen.getByLabelText('What the board may report').textContent;
+    await user.click(control('I swapped them'));
+    expect(screen.getByText('Run the test, and type what it reports')).toBeInTheDocument();
+    expect(screen.getByLabelText('What the board may report').textContent).toBe(before);
+    expect(screen.queryByText('Something else was done')).toBeNull();
+  });
+
   it('follows the chip: it is named by where it is now', () => {
     showWorkspace(loom, { r: '1~c.lamp.C5~n~s.U31.U23~c.lamp.B5' });
     expect(headline()).toContain('U23');

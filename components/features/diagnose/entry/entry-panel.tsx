@@ -43,7 +43,7 @@ export function EntryPanel({ model, between, keysAtFoot = false }: EntryPanelPro
   return (
     <View style={styles.panel}>
       <View style={styles.top}>
-        <EntryTitle model={model} />
+        <EntryTitle model={model} named={keysAtFoot} />
         {keysAtFoot ? (
           <ScrollView horizontal showsHorizontalScrollIndicator={false} contentContainerStyle={styles.tabs}>
             {choice}
@@ -87,7 +87,8 @@ export function EntryPanel({ model, between, keysAtFoot = false }: EntryPanelPro
   );
 }
 
-function EntryTitle({ model: { workspace } }: { model: WorkspaceModel }) {
+/** The question, and on a phone over it the run that it is about; elsewhere the list of runs stands above. */
+function EntryTitle({ model: { workspace }, named }: { model: WorkspaceModel; named: boolean }) {
   const { runs, step } = workspace;
   const place = step.at === 'entry' ? step.place : null;
   const at = place?.run ?? runInHand(runs);
@@ -96,7 +97,7 @@ function EntryTitle({ model: { workspace } }: { model: WorkspaceModel }) {
   const title = titleOf(workspace);
   return (
     <View>
-      {run !== undefined && later ? (
+      {named && run !== undefined && later ? (
         <Text variant="small" tone="soft">
           {`Run ${runTitle(run, at)}`}
         </Text>
@@ -115,7 +116,7 @@ function titleOf({ runs, step }: Workspace): string {
 /** The ways out of typing where there is an answer to go back to. */
 function EditActions({ model: { workspace, entry, diagnosis } }: { model: WorkspaceModel }) {
   const styles = useStyles();
-  if (diagnosis.evidence.length === 0) return null;
+  if (diagnosis.evidence.length === 0 || (awaitsReport(workspace.runs) && !entry.editing)) return null;
   return (
     <View style={styles.row}>
       <Button kind="quiet" label="Back to the answer" onPress={() => workspace.goTo({ at: 'answer' })} />

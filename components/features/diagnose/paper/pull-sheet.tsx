@@ -63,7 +63,7 @@ export function PullSheet({ bench, runs, diagnosis, marks, view }: PullSheetProp
             print
             compact={false}
             showControls={false}
-            greatestHeight={300}
+            greatestHeight={360}
           />
         </View>
         <View style={styles.right}>
@@ -110,7 +110,7 @@ export function PullSheet({ bench, runs, diagnosis, marks, view }: PullSheetProp
 // arm's length is smaller on paper, so that all of it fits one page of A4 or Letter.
 const paperRules = `
 @page { margin: 12mm; }
-@media print { [data-paper] { position: static !important; width: auto !important; background: none !important; zoom: 0.82; } }
+@media print { [data-paper] { position: static !important; width: auto !important; background: none !important; zoom: 0.85; } }
 `;
 
 const ignore = () => undefined;
