@@ -39,6 +39,9 @@ export function diagnose(index: LayoutIndex, runs: readonly Run[], priors: Prior
     parts,
     posterior,
     runs: best.runs,
+    everFailing: runs.map(
+      (_, r) => new Set(observations.interpretations.flatMap((each) => [...(each.runs[r]?.failing ?? [])])),
+    ),
     said: observations.evidence.flatMap((piece, i) =>
       piece.ok ? [{ run: piece.run, text: piece.text, failing: observations.failingOf[i] ?? [] }] : [],
     ),

@@ -15,6 +15,8 @@ export interface Findings {
   readonly parts: readonly Part[];
   readonly posterior: Posterior;
   readonly runs: readonly RunObservation[];
+  /** For each run, the lanes that failed in any of the ways to understand the evidence. */
+  readonly everFailing: readonly ReadonlySet<Lane>[];
   /** Each piece of evidence as typed, with its run and the lanes that it says failed. */
   readonly said: readonly { readonly run: number; readonly text: string; readonly failing: readonly Lane[] }[];
 }
@@ -34,13 +36,12 @@ const mostListed = 24;
  */
 export function listSuspects(findings: Findings): Suspect[] {
   const { parts, posterior } = findings;
-  const failing = new Set(findings.runs.flatMap((run) => [...run.failing]));
   return parts
     .map((part, at) => ({
       part,
       at,
       probability: probabilityOf(posterior, at),
-      explains: explaining(findings, at, failing),
+      explains: explaining(findings, at),
     }))
     .filter(({ explains }) => explains > 0)
     .sort((a, b) => likelier(b.explains, a.explains) || a.at - b.at)
@@ -49,16 +50,14 @@ export function listSuspects(findings: Findings): Suspect[] {
     .map(({ part, at, probability }, i) => describe(findings, { part, at, probability, rank: i + 1 }));
 }
 
-/** Probability of the modes of a part that spoil any of these lanes. */
-function explaining({ parts, posterior, runs }: Findings, at: number, failing: ReadonlySet<Lane>): number {
+/** Probability of the modes of a part that spoil anything that failed. */
+function explaining({ parts, posterior, everFailing }: Findings, at: number): number {
   let total = 0;
   parts[at]?.causes.forEach((cause, c) =>
     cause.kinds.forEach((kind, k) => {
       const own = posterior.kinds[at]?.[c]?.[k] ?? 0;
       if (own < least) return;
-      const reaches = kind.scopes.some((scope, r) =>
-        scope?.lanes.some((lane) => failing.has(lane) && runs[r]?.failing.has(lane)),
-      );
+      const reaches = kind.scopes.some((scope, r) => scope?.lanes.some((lane) => everFailing[r]?.has(lane)));
       if (reaches) total += own;
     }),
   );

@@ -198,6 +198,20 @@ describe('after a swap', () => {
 describe('what it does not know', () => {
   const board = bench({ ...fourBanks, first: 'unknown', bankNames: 'numbers-from-1' });
 
+  it('a code of a machine that counts from nobody knows where suspects the socket of each meaning', () => {
+    const format = board.document.reportFormats[0]?.id ?? '';
+    const answer = board.answer({ evidence: [{ kind: 'code', format, text: '2-3' }] });
+    expect(answer.evidence[0]?.alternatives).toBeGreaterThan(1);
+    expect(answer.outcome).toBe('group');
+    const meant = answer.evidence[0]?.failing ?? [];
+    const named = answer.suspects.flatMap((suspect) => (suspect.kind === 'chip' ? [suspect.socket] : []));
+    for (const { bank, bit } of meant) {
+      const at = board.document.memory.banks.findIndex((each) => each.id === bank);
+      expect(named).toContain(board.socket(at, bit));
+    }
+    expect(answer.sentences[0]).toContain('not known how this machine counts');
+  });
+
   it('nothing entered names no chip', () => {
     expect(board.answer()).toMatchObject({ outcome: 'no-evidence', suspects: [], probability: null });
     expect(board.answer({ evidence: [] })).toMatchObject({ outcome: 'no-evidence' });
