@@ -126,7 +126,7 @@ function SideBySide({ model, onPrint }: ColumnsProps) {
       <View role="region" aria-label="Board" style={styles.middle}>
         <Sketch model={model} />
       </View>
-      <View role="region" aria-label="Answer" style={styles.right}>
+      <View role="region" aria-label="Suspects and checks" style={styles.right}>
         {answer}
       </View>
     </View>

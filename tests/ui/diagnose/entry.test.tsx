@@ -120,7 +120,8 @@ describe('taking a report over', () => {
 
   it('stays for the next line where the machine lists its failures', async () => {
     const { user } = showWorkspace(loom, { f: 'monitor' });
-    await user.type(code(), '4C1A wrote FF read F7');
+    await user.click(code());
+    await user.paste('4C1A wrote FF read F7');
     await user.click(key('Next line'));
     expect(screen.getByText('What else did it report?')).toBeInTheDocument();
     await user.click(control('There was more'));
