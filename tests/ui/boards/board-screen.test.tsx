@@ -16,7 +16,7 @@ jest.mock('@/components/api/layout-store', () => ({
   readKeptLayout: jest.fn(async () => undefined),
 }));
 // Whether each of a thousand nodes is hidden takes jsdom most of a test's time; nothing here is.
-configure({ defaultHidden: true });
+configure({ defaultHidden: true, asyncUtilTimeout: 5000 });
 
 const slug = 'tarnvall-t-64-rev-b';
 const other = 'tarnvall-t-64-rev-c';

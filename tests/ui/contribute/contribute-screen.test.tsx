@@ -12,7 +12,7 @@ jest.mock('expo-router', () =>
   jest.requireActual<typeof import('../diagnose/live-router')>('../diagnose/live-router').liveRouter(),
 );
 // Whether each of a thousand nodes is hidden takes jsdom most of a test's time; nothing here is.
-configure({ defaultHidden: true });
+configure({ defaultHidden: true, asyncUtilTimeout: 5000 });
 
 const slug = 'tarnvall-t-64-rev-b';
 const loom = demoDocument(slug);
