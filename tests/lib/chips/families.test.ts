@@ -20,7 +20,8 @@ describe('built-in chip families', () => {
           .map((pin) => pin.index)
           .sort((a, b) => a! - b!);
       const addressBits = Math.log2(family.words);
-      const inputs = family.kind === 'dynamic' ? Math.max(Math.ceil(addressBits / 2), Math.log2(family.rows!)) : addressBits;
+      const inputs =
+        family.kind === 'dynamic' ? Math.max(Math.ceil(addressBits / 2), Math.log2(family.rows!)) : addressBits;
       expect(indexes('address')).toEqual(Array.from({ length: inputs }, (_, i) => i));
       if (family.width === 1) expect([count('data-in'), count('data-out')]).toEqual([1, 1]);
       else expect(indexes('data')).toEqual(Array.from({ length: family.width }, (_, i) => i));
