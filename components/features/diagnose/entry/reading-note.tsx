@@ -48,7 +48,8 @@ function Words({ bench, entry }: { bench: Bench; entry: Entry }) {
       ))}
       {read.notes.map((note) => (
         <Text key={note} variant="small" tone="mark">
-          {`${sentenceCase(note)}.`}
+          {/* No capital: "c read as C" would say nothing any more. */}
+          {`${note}.`}
         </Text>
       ))}
     </>
