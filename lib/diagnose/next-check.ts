@@ -51,7 +51,7 @@ export function nextChecks(input: CheckInput): NextCheck[] {
     }
     case 'place': {
       if (wentAway(weighed)) return [soak(verdict)];
-      if (verdict.headline.includes('fitted:')) return [refit(verdict)];
+      if (verdict.refit) return [refit(verdict)];
       const [first] = weighed.places as [Place];
       if (first.contact > first.chip) return [measure(input, first)];
       if (first.chip >= provenFrom)

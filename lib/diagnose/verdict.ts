@@ -13,6 +13,8 @@ export interface Verdict {
   readonly sure: Diagnosis['sure'];
   readonly probability: number | null;
   readonly groups: readonly SuspectGroup[];
+  /** The handling itself is looked at first, before any part. */
+  readonly refit?: true;
   /** Sockets that the headline tells to handle. */
   readonly sockets: readonly string[];
 }
@@ -127,6 +129,7 @@ function fittingVerdict({ suspects, findings, lastRun }: Weighed): Verdict | nul
     sure: sureWords(total, { capped: true }),
     probability: total,
     groups: [],
+    refit: true,
     sockets,
   };
 }
