@@ -16,9 +16,11 @@ export const faultModes = [
   'channel', // one channel of a shared part
   'whole', // the whole shared part
   'short', // two neighbouring data lines joined
+  'wrong-part', // a chip of a family that the socket's supply destroys
+  'supply', // a rail out of its limits
 ] as const;
 
-export const partKinds = ['chip', 'position', 'shared-part', 'short'] as const;
+export const partKinds = ['chip', 'position', 'shared-part', 'short', 'rail'] as const;
 
 export const suspectMode = z.strictObject({
   mode: z.enum(faultModes),
@@ -79,6 +81,20 @@ export const readEvidence = z.strictObject({
   notes: z.array(z.string()),
   reason: z.string().nullable().describe('Why it could not be read, and what is allowed.'),
   failing: z.array(laneName),
+  words: z
+    .array(
+      z.strictObject({
+        address: z.number().int(),
+        bank: z.string(),
+        word: z.number().int().describe('Number of the word in its bank.'),
+        row: z.number().int().nullable().describe('Row inside the chip, null where the layout does not say.'),
+        column: z.number().int().nullable(),
+        mask: z.number().int().describe('The failing bits of the word, as far as bits 0 to 39.'),
+      }),
+    )
+    .max(64)
+    .default([])
+    .describe('Where the first readings lead.'),
   passed: z.number().int().min(0).describe('How many lanes it says passed.'),
   alternatives: z.number().int().min(1).describe('How many readings remain where a convention is unknown.'),
 });
@@ -98,8 +114,24 @@ export const group = z.strictObject({
   check: z.string().nullable().describe('What would tell the members apart.'),
 });
 
+export const checkActions = [
+  'swap',
+  'replace',
+  'reseat',
+  'stack', // a good chip laid on top
+  'pull-in-turn',
+  'measure', // with the power off: continuity, or from line to line
+  'rails', // the supply at a socket
+  'probe', // a signal with a scope
+  'pattern', // write given values and read them back
+  'test-whole', // run the test over all of the memory
+  'soak',
+  'read-again',
+  'ask', // settle how the machine counts
+] as const;
+
 export const nextCheck = z.strictObject({
-  action: z.enum(['swap', 'replace', 'reseat', 'pull-in-turn', 'measure', 'probe', 'soak', 'read-again']),
+  action: z.enum(checkActions),
   label: z.string().describe('What to do, in one short sentence.'),
   sockets: z.array(z.string()).describe('The sockets that it handles, in the order of the words; two for a swap.'),
   minutes: z.number().positive(),
@@ -107,12 +139,32 @@ export const nextCheck = z.strictObject({
   outcomes: z.array(z.strictObject({ sees: z.string(), means: z.string(), probability })),
 });
 
+/** How failures lie inside a chip, or between lines. */
+export const shapes = ['cell', 'row', 'column', 'block', 'scattered', 'whole', 'follows-neighbour'] as const;
+
+/** A pattern in the readings that speaks for some causes and against others. */
+export const signature = z.strictObject({
+  shape: z.enum(shapes),
+  words: z.string().describe('In one sentence: "All 128 failing words lie in row 53."'),
+  lanes: z.array(laneName),
+  row: z.number().int().nullable(),
+  column: z.number().int().nullable(),
+  count: z.number().int().nullable().describe('Failing words that were seen.'),
+});
+
+/** A question whose answer would rule out readings of the evidence. */
+export const question = z.strictObject({
+  ask: z.string(),
+  answers: z.array(z.strictObject({ words: z.string(), share: probability, sockets: z.array(z.string()) })),
+  settles: z.string().describe('What would settle it, where nobody knows the answer.'),
+});
+
 /** The whole answer. Everything that the workspace shows is here, and nothing that it computes by itself. */
 export const diagnosis = z.strictObject({
   outcome: z
-    .enum(['place', 'group', 'shared', 'not-shown', 'unexplained', 'no-evidence'])
+    .enum(['supply', 'place', 'group', 'shared', 'not-shown', 'unexplained', 'no-evidence'])
     .describe(
-      'place: one socket leads. group: several parts that the evidence cannot tell apart. shared: a shared part leads and no chip is to be pulled. not-shown: everything tested passed. unexplained: no cause in the model fits well. no-evidence: nothing that names a lane yet.',
+      'supply: a rail comes first and no chip is named. place: one socket leads. group: several parts that the evidence cannot tell apart. shared: a shared part leads and no chip is to be pulled. not-shown: everything tested passed. unexplained: no cause in the model fits well. no-evidence: nothing that names a lane yet.',
     ),
   headline: z.string().describe('What to do, in one short sentence.'),
   sure: z.enum(['sure', 'strong', 'likely', 'not sure', 'no reading']),
@@ -126,7 +178,9 @@ export const diagnosis = z.strictObject({
   untested: z.array(laneName),
   lanes: z.array(laneState),
   evidence: z.array(readEvidence),
-  nextChecks: z.array(nextCheck),
+  signatures: z.array(signature).default([]),
+  questions: z.array(question).default([]),
+  nextChecks: z.array(nextCheck).describe('The best first: most information for the minutes that it costs.'),
   cautions: z.array(caution),
   exact: z
     .boolean()
@@ -145,5 +199,9 @@ export type SuspectGroup = z.output<typeof group>;
 export type LaneState = z.output<typeof laneState>;
 export type ReadEvidence = z.output<typeof readEvidence>;
 export type Diagnosis = z.output<typeof diagnosis>;
+export type CheckAction = (typeof checkActions)[number];
+export type Shape = (typeof shapes)[number];
+export type Signature = z.output<typeof signature>;
+export type Question = z.output<typeof question>;
 export type NextCheck = z.output<typeof nextCheck>;
 export type Caution = z.output<typeof caution>;

@@ -1,7 +1,10 @@
 import { z } from 'zod';
 import { limits } from './limits';
 import { bitNumber } from './layout/memory';
-import { address, label, slug } from './layout/primitives';
+import { address, label, slug, words } from './layout/primitives';
+import { picture } from './picture';
+import { log, readings } from './readings';
+import { alias, measurement, sign } from './signs';
 
 export const laneName = z.strictObject({ bank: label, bit: bitNumber });
 
@@ -9,6 +12,13 @@ const code = z.strictObject({
   kind: z.literal('code'),
   format: slug.describe('The id of one of the report formats of the layout.'),
   text: z.string().min(1).max(limits.reportText).describe('The code as the machine showed it.'),
+  doubts: z
+    .array(z.enum(['first', 'order']))
+    .max(2)
+    .optional()
+    .describe(
+      'What of the layout the technician does not take for granted. first: whether the machine counts from 0 or 1. order: which end is bit 0. Each is then left open.',
+    ),
 });
 
 const lanes = z.strictObject({
@@ -33,8 +43,36 @@ const pass = z.strictObject({
   banks: z.array(label).max(limits.banks).optional().describe('The banks that passed. Left out: all.'),
 });
 
+const plain = z.discriminatedUnion('kind', [code, lanes, mask, pass, readings, log, picture, sign, measurement, alias]);
+
+/** One thing that can be understood in several ways: octal or hexadecimal, five or six flashes, which byte came first. */
+const either = z.strictObject({
+  kind: z.literal('either'),
+  ways: z
+    .array(
+      z.strictObject({
+        takes: words(80).describe('What this way takes, such as "the log is octal".'),
+        evidence: plain,
+      }),
+    )
+    .min(2)
+    .max(8),
+});
+
 /** One thing that the technician saw. */
-export const evidence = z.discriminatedUnion('kind', [code, lanes, mask, pass]);
+export const evidence = z.discriminatedUnion('kind', [
+  code,
+  lanes,
+  mask,
+  pass,
+  readings,
+  log,
+  picture,
+  sign,
+  measurement,
+  alias,
+  either,
+]);
 
 /** One thing that was done to the board between two runs. */
 export const change = z.discriminatedUnion('kind', [
@@ -43,6 +81,7 @@ export const change = z.discriminatedUnion('kind', [
     kind: z.literal('replace'),
     socket: label,
     with: z.enum(['known-good', 'untested']).default('known-good'),
+    family: slug.optional().describe('The chip family that was fitted, where it is not the one of the socket.'),
   }),
   z.strictObject({ kind: z.literal('reseat'), socket: label }),
 ]);
@@ -62,6 +101,7 @@ export const run = z.strictObject({
 export const runs = z.array(run).max(limits.runs);
 
 export type LaneName = z.output<typeof laneName>;
+export type PlainEvidence = z.output<typeof plain>;
 export type Evidence = z.output<typeof evidence>;
 export type Change = z.output<typeof change>;
 export type Run = z.output<typeof run>;

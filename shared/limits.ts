@@ -17,6 +17,11 @@ export const limits = {
   runs: 64,
   evidencePerRun: 512,
   changesPerRun: 64,
+  /** Readings in one piece of evidence; more of them are a log. */
+  readings: 1024,
+  /** Lanes and pairs of written and read that a log is drawn together into. */
+  tallyLanes: 1024,
+  tallyValues: 256,
   /** Characters of the address of a board. */
   slug: 100,
   /** Bytes of a layout document sent to the server. */

@@ -1,0 +1,44 @@
+import { z } from 'zod';
+import { address, label } from './layout/primitives';
+import { bitNumber } from './layout/memory';
+
+/** What a board does besides naming lanes. */
+export const signKinds = [
+  'changes-each-pass', // other lanes fail in each pass of the test
+  'grows-with-waiting', // more fails the longer the test waits between writing and reading
+  'grows-with-warmth', // fails only warm, or more when warm
+  'touch', // comes and goes when a place is pressed or the board is flexed
+  'hot', // a chip is much hotter than its neighbours
+  'writes-do-not-stick', // reads what was there before the writing
+  'dead', // no picture, no sound, nothing runs
+] as const;
+
+export const sign = z.strictObject({
+  kind: z.literal('sign'),
+  sign: z.enum(signKinds),
+  socket: label.optional().describe('The socket that is hot, or that was touched.'),
+});
+
+/** A supply measured at a pin of a socket, in volts against 0 V. */
+export const measurement = z.strictObject({
+  kind: z.literal('measurement'),
+  socket: label,
+  pin: z.number().int().min(1).max(64),
+  volts: z.number().min(-100).max(100),
+});
+
+/** Two addresses that lead to the same cell: writing at one changes the other. */
+export const alias = z.strictObject({
+  kind: z.literal('alias'),
+  addresses: z.tuple([address, address]),
+  bits: z
+    .array(bitNumber)
+    .min(1)
+    .max(72)
+    .optional()
+    .describe('The bits in which they do. Left out: all bits of the word.'),
+});
+
+export type SignKind = (typeof signKinds)[number];
+export type Sign = z.output<typeof sign>;
+export type Measurement = z.output<typeof measurement>;
