@@ -31,6 +31,8 @@ export { validateLayout } from './layout/validate';
 export { testSequence } from './report/silence';
 export { blamedSockets } from './report/blamed-sockets';
 export { builtInFamilies, findFamily } from './chips/families';
+export { fitCheck, railsAtSocket } from './chips/fit';
+export type { FitCheck, FitPin, FitReason, FitSeverity, FitVerdict, RailAtPins } from './chips/fit-types';
 export {
   buildAddressMap,
   decodeAddress,
