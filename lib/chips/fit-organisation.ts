@@ -63,7 +63,8 @@ const addressPins = (family: ChipFamily) => new Set(family.pins.flatMap((p) => (
 
 function addresses(socket: ChipFamily, chip: ChipFamily): readonly Finding[] {
   const wants = addressPins(chip);
-  const lost = [...addressPins(socket)].filter((pin) => !wants.has(pin));
+  const described = new Set(chip.pins.map(({ pin }) => pin));
+  const lost = [...addressPins(socket)].filter((pin) => described.has(pin) && !wants.has(pin));
   if (lost.length === 0) return [];
   return [
     blocked(

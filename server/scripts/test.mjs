@@ -11,8 +11,9 @@ import { ensureWebExport } from './setup/web-export.mjs';
 const prepare = async (wanted) => {
   await ensurePackages();
   const { ensureMariadb } = await import('./setup/local-services.mjs');
-  const { ensureChromium } = await import('./setup/debian.mjs');
+  const { ensureChromium, ensureKicadSymbols } = await import('./setup/debian.mjs');
   if (wanted.includes('server') || wanted.includes('browser')) await ensureMariadb();
+  if (wanted.includes('published')) await ensureKicadSymbols();
   if (!wanted.includes('browser')) return;
   await ensureChromium();
   await ensureWebExport();

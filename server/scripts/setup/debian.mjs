@@ -43,3 +43,14 @@ const chromium = '/usr/bin/chromium';
 /** Chromium for the browser tests. */
 export const ensureChromium = () =>
   ensureDebianPackage({ name: 'chromium', present: () => existsSync(chromium), purpose: 'the browser of the tests' });
+
+/** Pin tables of chips, which a test of the chip families compares with. */
+const kicadSymbols = '/usr/share/kicad/symbols/Memory_RAM.kicad_sym';
+
+/** The symbols of KiCad for the tests against published pin tables. */
+export const ensureKicadSymbols = () =>
+  ensureDebianPackage({
+    name: 'kicad-symbols',
+    present: () => existsSync(kicadSymbols),
+    purpose: 'the pin tables of the tests',
+  });
