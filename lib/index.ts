@@ -41,3 +41,25 @@ export {
   type AddressOf,
   type WordPlace,
 } from './place/address';
+export { eitherReadings, parseReadings, type ParsedReadings, type UnreadLine } from './logs/parse-readings';
+export { findLinePatterns } from './logs/find-pattern';
+export { patternWords, type Column, type LinePattern } from './logs/line-pattern';
+export {
+  brierScore,
+  expectedCalibrationError,
+  reliabilityCurve,
+  type Prediction,
+  type ReliabilityBin,
+} from './statistics/calibration';
+export { wilsonInterval, type Interval } from './statistics/interval';
+export { soakBound, type SoakBound } from './statistics/soak';
+export {
+  priorsFor,
+  socketRates,
+  type BoardRates,
+  type HistoryPriors,
+  type SocketCount,
+  type SocketRate,
+} from './statistics/socket-rates';
+export { leastGroup, showGroups, type NamedGroup, type ShownGroups } from './statistics/small-groups';
+export { lanesOfMarks, type LanesOfMarks, type MarkedLane } from './screen/lanes-of-marks';
