@@ -41,6 +41,7 @@ export {
   type AddressOf,
   type WordPlace,
 } from './place/address';
+export { tallyReadings } from './readings/tally';
 export { eitherReadings, parseReadings, type ParsedReadings, type UnreadLine } from './logs/parse-readings';
 export { findLinePatterns } from './logs/find-pattern';
 export { patternWords, type Column, type LinePattern } from './logs/line-pattern';

@@ -1,0 +1,308 @@
+import type { Column, ColumnPattern, LogNotation } from './line-pattern';
+import { type LineReader, type Outcome, marks, outcomes, slots } from './line-reader';
+import { codeOf, numberOfLimbs, readNumber, separator } from './numbers';
+
+const roles = { none: 0, address: 1, written: 2, read: 3, mask: 4, register: 5, to: 6, step: 7 } as const;
+type Role = (typeof roles)[keyof typeof roles];
+
+const markOf = [0, marks.address, marks.written, marks.read, marks.mask, marks.register, 0, 0];
+const slotOf = [0, 0, slots.written, slots.read, slots.mask, 0, 0, 0];
+const bitsOfNotation: Readonly<Record<LogNotation | 'binary', number>> = {
+  hexadecimal: 4,
+  octal: 3,
+  binary: 1,
+  decimal: 0,
+};
+const radixOfNotation = { hexadecimal: 16, octal: 8, binary: 2, decimal: 10 } as const;
+const mostColumns = 64;
+const lineEnd = 254;
+const highest = 2 ** 40 - 1;
+
+/** Words that join the two ends of a run, and those before the distance of its addresses. */
+const joiningWords = ['to', 'thru', 'through', 'until'];
+const stepWords = ['step', 'every'];
+
+interface Label {
+  readonly codes: readonly number[];
+  readonly hash: number;
+  readonly role: Role;
+}
+
+function labelOf(word: string, role: Role): Label {
+  const codes = Array.from(word, (letter) => codeOf[letter.charCodeAt(0)] ?? separator);
+  return { codes, hash: codes.reduce((hash, code) => (Math.imul(hash, 37) + code) | 0, 0), role };
+}
+
+function roleColumns(pattern: ColumnPattern): (readonly [Role, Column])[] {
+  const { address, written, read, mask, register } = pattern;
+  const columns: [Role, Column | undefined][] = [
+    [roles.address, address],
+    [roles.written, written],
+    [roles.read, read],
+    [roles.mask, mask],
+    [roles.register, register?.column],
+  ];
+  return columns.filter((entry): entry is [Role, Column] => entry[1] !== undefined);
+}
+
+const nouns = ['', 'address', 'value written', 'value read', 'mask of failing bits', 'register value', '', ''];
+
+/** Reads lines by columns and by the words before the numbers. */
+export class ColumnReader implements LineReader {
+  address = 0;
+  to = -1;
+  step = 1;
+  register = -1;
+  has = 0;
+  next = 0;
+  readonly values = new Int32Array(9);
+  private readonly codes = codeOf.slice();
+  private readonly roleAt = new Uint8Array(mostColumns + 1);
+  private readonly labels: readonly Label[];
+  private readonly all: number;
+  private readonly bitsOf = new Uint8Array(8);
+  private readonly mostDigits = new Uint8Array(8);
+  private readonly radixOf = new Uint8Array(8);
+  /** A dash between two numbers of different length makes a run, which it cannot where columns are bare. */
+  private readonly freeDash: boolean;
+  private readonly number = new Int32Array(3);
+  private addressDigits = 0;
+  private tooGreat: Role = roles.none;
+
+  constructor(
+    private readonly pattern: ColumnPattern,
+    newline = 10,
+  ) {
+    this.codes[newline] = lineEnd;
+    const columns = roleColumns(pattern);
+    const labels: Label[] = [];
+    let all = 0;
+    for (const [role, column] of columns) {
+      all |= markOf[role]!;
+      if (typeof column === 'string') labels.push(labelOf(column, role));
+      else if (column >= 1 && column <= mostColumns) this.roleAt[column] = role;
+    }
+    this.all = all;
+    this.freeDash = labels.length > 0;
+    this.labels = labels;
+    for (const role of Object.values(roles)) {
+      const isValue = role === roles.written || role === roles.read || role === roles.mask;
+      const notation = isValue ? (pattern.values ?? pattern.notation) : pattern.notation;
+      const bits = bitsOfNotation[notation];
+      this.bitsOf[role] = bits;
+      this.mostDigits[role] = bits === 0 ? 0 : Math.floor(32 / bits);
+      this.radixOf[role] = radixOfNotation[notation];
+    }
+  }
+
+  line(bytes: Uint8Array, at: number): Outcome {
+    const outcome = this.follow(bytes, at, 'runs');
+    // A dash that made a run may have stood between two columns.
+    if (outcome === outcomes.unread && this.to >= 0 && !this.freeDash) return this.follow(bytes, at, 'columns only');
+    return outcome;
+  }
+
+  private follow(bytes: Uint8Array, at: number, dashes: 'runs' | 'columns only'): Outcome {
+    const { codes, roleAt, labels, all } = this;
+    this.has = 0;
+    this.to = -1;
+    this.step = 1;
+    this.register = -1;
+    this.tooGreat = roles.none;
+    let p = at;
+    let column = 0;
+    let pending: Role = roles.none;
+    let afterAddress = false;
+    for (;;) {
+      const gap = p;
+      let code = codes[bytes[p]!]!;
+      while (code === separator) code = codes[bytes[++p]!]!;
+      if (code === lineEnd) break;
+      const start = p;
+      if (afterAddress) {
+        afterAddress = false;
+        if (dashes === 'runs') {
+          const end = this.runEnd(bytes, gap, start);
+          if (end > 0) {
+            p = end;
+            continue;
+          }
+        }
+      }
+      column++;
+      let role = column <= mostColumns ? (roleAt[column] as Role) : roles.none;
+      const fixed = role !== roles.none;
+      if (!fixed) role = pending;
+      if (role !== roles.none) {
+        const bits = this.bitsOf[role]!;
+        let value = 0;
+        let bad = 0;
+        do {
+          bad |= code >> bits;
+          value = (value << bits) | code;
+          code = codes[bytes[++p]!]!;
+        } while (code < lineEnd);
+        if (bad === 0 && p - start <= this.mostDigits[role]!) this.keepShort(role, value, p - start);
+        else if (!this.keepLong(bytes, [start, p], role)) {
+          if (fixed) return this.leave(bytes, p);
+          role = roles.none;
+        }
+        if (role !== roles.none) {
+          afterAddress = role === roles.address;
+          pending = roles.none;
+          if (!afterAddress && (this.has & all) === all && this.to < 0) break;
+          continue;
+        }
+        p = start;
+        code = codes[bytes[p]!]!;
+      }
+      let hash = 0;
+      do {
+        hash = (Math.imul(hash, 37) + code) | 0;
+        code = codes[bytes[++p]!]!;
+      } while (code < lineEnd);
+      for (let n = 0; n < labels.length; n++) {
+        if (labels[n]!.hash === hash && this.isLabel(bytes, [start, p], labels[n]!)) {
+          pending = labels[n]!.role;
+          break;
+        }
+      }
+      if (pending === roles.none && (labels.length > 0 || this.to >= 0)) pending = this.rareWord(bytes, start, p);
+      afterAddress = pending === roles.address && (this.has & marks.address) !== 0;
+      if (afterAddress) pending = roles.none;
+    }
+    return this.leave(bytes, p, column);
+  }
+
+  /** Goes to the line's end and says what the line was. */
+  private leave(bytes: Uint8Array, at: number, column = 1): Outcome {
+    let p = at;
+    while (this.codes[bytes[p]!] !== lineEnd) p++;
+    this.next = p + 1;
+    if (column === 0) return outcomes.blank;
+    const { has } = this;
+    const pair = marks.written | marks.read;
+    const whole = (has & marks.address) !== 0 && ((has & pair) === pair || (has & marks.mask) !== 0);
+    return whole && this.tooGreat === roles.none ? outcomes.read : outcomes.unread;
+  }
+
+  private keepShort(role: Role, value: number, digits: number): void {
+    const mark = markOf[role]!;
+    if ((this.has & mark) !== 0) return;
+    this.has |= mark;
+    if (role === roles.address) {
+      this.address = value >>> 0;
+      this.addressDigits = digits;
+    } else if (role === roles.register) this.register = value >>> 0;
+    else if (role === roles.step) this.step = Math.max(1, value >>> 0);
+    else {
+      const slot = slotOf[role]!;
+      this.values[slot] = value;
+      this.values[slot + 1] = 0;
+      this.values[slot + 2] = 0;
+    }
+  }
+
+  /** Numbers with marks of their base, decimal ones and those of more than 32 bits. */
+  private keepLong(bytes: Uint8Array, [from, to]: [number, number], role: Role): boolean {
+    const digits = readNumber({ bytes, from, to }, this.radixOf[role]!, { limbs: this.number, at: 0 });
+    if (digits === 0) return false;
+    const mark = markOf[role]!;
+    if ((this.has & mark) !== 0) return true;
+    const slot = slotOf[role]!;
+    if (role === roles.written || role === roles.read || role === roles.mask) {
+      this.values.set(this.number, slot);
+      this.has |= mark;
+      return true;
+    }
+    const value = numberOfLimbs(this.number, 0);
+    if (value > highest) this.tooGreat = role;
+    this.has |= mark;
+    if (role === roles.address) {
+      this.address = value;
+      this.addressDigits = digits;
+    } else if (role === roles.register) this.register = value;
+    else if (role === roles.step) this.step = Math.max(1, value);
+    return true;
+  }
+
+  /** The end of a run that follows its first address: "1A80-1AFF", "1A80 TO 1AFF". 0 where there is none. */
+  private runEnd(bytes: Uint8Array, gap: number, start: number): number {
+    let from = start;
+    let to = this.wordEnd(bytes, from);
+    let freely = this.freeDash;
+    if (joiningWords.some((word) => this.isWord(bytes, [from, to], word))) {
+      from = to;
+      while (this.codes[bytes[from]!] === separator) from++;
+      to = this.wordEnd(bytes, from);
+      freely = true;
+    } else if (!hasDash(bytes, gap, start)) return 0;
+    if (to === from) return 0;
+    const digits = readNumber({ bytes, from, to }, this.radixOf[roles.address]!, { limbs: this.number, at: 0 });
+    const value = numberOfLimbs(this.number, 0);
+    if (digits === 0 || value < this.address || value > highest) return 0;
+    if (!freely && digits !== this.addressDigits) return 0;
+    this.to = value;
+    return to;
+  }
+
+  private wordEnd(bytes: Uint8Array, at: number): number {
+    let p = at;
+    while (this.codes[bytes[p]!]! < lineEnd) p++;
+    return p;
+  }
+
+  private isLabel(bytes: Uint8Array, [from, to]: [number, number], { codes }: Label): boolean {
+    if (to - from !== codes.length) return false;
+    for (let n = 0; n < codes.length; n++) if (codeOf[bytes[from + n]!] !== codes[n]) return false;
+    return true;
+  }
+
+  private isWord(bytes: Uint8Array, span: [number, number], word: string): boolean {
+    return span[1] - span[0] === word.length && this.isLabel(bytes, span, labelOf(word, roles.none));
+  }
+
+  /** A word before the step of a run, or a label with its number at once, such as W00. */
+  private rareWord(bytes: Uint8Array, from: number, to: number): Role {
+    if (this.to >= 0 && stepWords.some((word) => this.isWord(bytes, [from, to], word))) return roles.step;
+    for (const label of this.labels) {
+      const cut = from + label.codes.length;
+      if (cut >= to || !this.isLabel(bytes, [from, cut], label)) continue;
+      if (!looksLikeNumber(bytes, cut, to) || !this.keepLong(bytes, [cut, to], label.role)) continue;
+      return label.role === roles.address ? roles.address : roles.none;
+    }
+    return roles.none;
+  }
+
+  reason(): string {
+    if (this.tooGreat !== roles.none) return `The ${nouns[this.tooGreat]} has more digits than any board needs.`;
+    const { pattern, has } = this;
+    const wanted = roleColumns(pattern).filter(([role]) => role !== roles.register && role !== roles.mask);
+    const lacking = wanted.find(([role]) => (has & markOf[role]!) === 0) ?? [roles.mask, pattern.mask ?? 0];
+    const [role, column] = lacking;
+    const where = typeof column === 'number' ? `word ${column} of the line` : `after ${column}`;
+    const notation = role === roles.address ? pattern.notation : (pattern.values ?? pattern.notation);
+    return `There is no ${nouns[role]} (${notation} number, ${where}).`;
+  }
+}
+
+/** A hyphen, a tilde, two dots, or a dash of UTF-8. */
+function hasDash(bytes: Uint8Array, from: number, to: number): boolean {
+  for (let p = from; p < to; p++) {
+    const byte = bytes[p]!;
+    if (byte === 0x2d || byte === 0x7e) return true;
+    if (byte === 0x2e && bytes[p + 1] === 0x2e) return true;
+    if (byte === 0xe2 && bytes[p + 1] === 0x80 && bytes[p + 2]! >= 0x90 && bytes[p + 2]! <= 0x95) return true;
+  }
+  return false;
+}
+
+/** Digits after a label that touches them: with a decimal digit among them, or one letter several times, as FF. */
+function looksLikeNumber(bytes: Uint8Array, from: number, to: number): boolean {
+  let same = to - from > 1;
+  for (let p = from; p < to; p++) {
+    if (codeOf[bytes[p]!]! < 10) return true;
+    if (codeOf[bytes[p]!] !== codeOf[bytes[from]!]) same = false;
+  }
+  return same;
+}
