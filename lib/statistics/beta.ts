@@ -60,8 +60,8 @@ export function betaShareBelow(x: number, a: number, b: number): number {
 }
 
 /**
- * The value below which a share `p` of a beta distribution lies, found by halving, to about 15 digits of the nearer
- * end. Throws RangeError where p is not from 0 to 1 or a shape not above 0.
+ * The value below which a share `p` of a beta distribution lies, found by halving to the last digit of a number
+ * between 0 and 1. Throws RangeError where p is not from 0 to 1 or a shape not above 0.
  */
 export function betaQuantile(p: number, a: number, b: number): number {
   if (!(p >= 0 && p <= 1)) throw new RangeError(`A share lies from 0 to 1, not at ${p}.`);
