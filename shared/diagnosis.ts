@@ -122,10 +122,12 @@ export const checkActions = [
   'pull-in-turn',
   'measure', // with the power off: continuity, or from line to line
   'rails', // the supply at a socket
+  'feel', // with the power on: a chip hotter than its neighbours
   'probe', // a signal with a scope
   'pattern', // write given values and read them back
   'test-whole', // run the test over all of the memory
   'soak',
+  'feel', // for a chip hotter than its neighbours
   'read-again',
   'ask', // settle how the machine counts
 ] as const;

@@ -1,0 +1,100 @@
+import type { NextCheck, Run } from '@/shared';
+import type { Priors } from '../priors';
+import { wentAway, type Verdict, type Weighed } from '../verdict';
+import { asNextCheck, type Candidate } from './candidate';
+import { effort, type Desk } from './desk';
+import { deadChecks, provenPlace, refitCheck, runAgain, soakCheck, supplyChecks, wrongPartWords } from './first-rules';
+import { meaningFor } from './meanings';
+import { measureCheck, placeChecks, replaceCheck } from './place-checks';
+import { reporterFor } from './report-words';
+import { railsCheck, sharedChecks } from './shared-checks';
+import { believe, placesOf } from './states';
+import { settleMeaning, testWhole } from './whole-checks';
+
+interface CheckInput {
+  readonly weighed: Weighed;
+  readonly verdict: Verdict;
+  readonly runs: readonly Run[];
+  readonly priors: Priors;
+}
+
+/** No more than this many checks are listed. */
+const mostListed = 5;
+/** Places whose checks are weighed. */
+const mostPlaces = 2;
+/** From here on a chip is replaced without another check: a repair that helps is the proof. */
+const provenFrom = 0.95;
+/** A check that tells less than this is not listed. */
+const leastBits = 0.005;
+
+/**
+ * What to check next, the best first: the most expected information about the part at fault for the minutes
+ * that it takes. Before that come the rules of the trade: the supply before any chip, the handling before any
+ * part, the meaning of the report before any socket, a soak after a fault that went away, and a proof by
+ * repair where one cheap repair is all but certain (probability over cost, where a repair is likely: D.
+ * Heckerman, J. S. Breese, K. Rommelse, Decision-theoretic troubleshooting, 1995; from memory). No inference
+ * is made for a candidate: what it would show follows from the states that are already weighed.
+ */
+export function nextChecks(input: CheckInput): NextCheck[] {
+  const { weighed, verdict, runs, priors } = input;
+  const { index } = weighed.findings;
+  if (verdict.outcome === 'supply') return supplyChecks(weighed);
+  if (verdict.outcome === 'no-evidence')
+    return weighed.signs.some(({ sign }) => sign === 'dead') ? deadChecks(index) : [];
+  if (verdict.outcome === 'not-shown') return [];
+  const beliefs = believe(weighed);
+  if (!beliefs) return [runAgain()];
+  const meaning = meaningFor(beliefs);
+  const desk: Desk = { index, weighed, verdict, runs, priors, beliefs, meaning, report: reporterFor(index, runs) };
+  const first = comesFirst(desk);
+  const ranked = candidates(desk)
+    .filter(({ bits }) => bits >= leastBits)
+    .sort((a, b) => b.bits / b.minutes - a.bits / a.minutes)
+    .map((candidate) => asNextCheck(beliefs, candidate));
+  const others = ranked.filter((check) => first.every((each) => each.label !== check.label));
+  return followUp([...first, ...others].slice(0, mostListed));
+}
+
+/** What the rules of the trade put before the score. */
+function comesFirst(desk: Desk): NextCheck[] {
+  const { weighed, verdict, beliefs, index } = desk;
+  if (wentAway(weighed)) return [soakCheck(desk)];
+  if (verdict.refit) return [refitCheck(verdict, desk.runs)];
+  if (verdict.outcome === 'unexplained') return [runAgain()];
+  const settle = settleMeaning(desk);
+  if (settle) return [asNextCheck(beliefs, settle)];
+  if (verdict.outcome !== 'place') return [];
+  const [place] = weighed.places;
+  const socket = place ? index.socketByLabel.get(place.socket) : undefined;
+  if (place === undefined || socket === undefined) return [];
+  const wrong = wrongPartWords(desk, socket);
+  if (wrong !== null) return [asNextCheck(beliefs, replaceCheck(desk, socket, wrong))];
+  if (provenPlace(weighed, provenFrom) !== null && effort(index, [socket]) === 1)
+    return [asNextCheck(beliefs, replaceCheck(desk, socket))];
+  if (place.contact > place.chip) return [asNextCheck(beliefs, measureCheck(desk, socket))];
+  return [];
+}
+
+function candidates(desk: Desk): Candidate[] {
+  const { verdict, beliefs } = desk;
+  const whole = testWhole(desk);
+  const shared = [...sharedChecks(desk), ...railsCheck(desk)];
+  // What many chips share is looked at before a chip is moved.
+  const chips =
+    verdict.outcome === 'shared'
+      ? []
+      : placesOf(beliefs)
+          .slice(0, mostPlaces)
+          .flatMap((place) => placeChecks(desk, place));
+  const seen = new Set<string>();
+  return [...(whole ? [whole] : []), ...shared, ...chips].filter(({ label }) => !seen.has(label) && seen.add(label));
+}
+
+/** A test of the whole is cheap and comes with what follows it. */
+function followUp(checks: NextCheck[]): NextCheck[] {
+  const [first] = checks;
+  const then = checks.find(({ action }) => action === 'swap');
+  if (first?.action !== 'test-whole' || !then) return checks;
+  const label = `${first.label.slice(0, -1)}, then swap ${then.sockets.join(' with ')}.`;
+  return [{ ...first, label }, ...checks.slice(1)];
+}

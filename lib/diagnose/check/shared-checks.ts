@@ -1,0 +1,244 @@
+import type { Lane, SocketIndex } from '../../brand';
+import { listWords } from '../../layout/words';
+import type { Part } from '../cause-types';
+import { labelOf } from '../timeline';
+import { weighSeen, type Candidate } from './candidate';
+import { minutes, solderedFactor } from './costs';
+import { effort, type Desk } from './desk';
+import { shows } from './likelihoods';
+import { railsWords } from './pin-words';
+import type { State } from './states';
+
+/** Checks of what several lanes share. */
+export function sharedChecks(desk: Desk): Candidate[] {
+  return [...partProbes(desk), ...shortChecks(desk), ...pullChecks(desk), ...readBack(desk), ...railsCheck(desk)];
+}
+
+const mostProbes = 4;
+
+/** Each shared part that may be at fault, its outputs with a scope. */
+function partProbes(desk: Desk): Candidate[] {
+  const { beliefs } = desk;
+  const parts = beliefs.answers
+    .filter(({ part, share }) => part?.kind === 'shared-part' && share >= 0.02)
+    .sort((a, b) => b.share - a.share)
+    .slice(0, mostProbes);
+  return parts.map(({ part }) => {
+    const leading = beliefs.states.find((state) => state.part === part);
+    const label = part?.label ?? '';
+    const channel =
+      leading?.cause.mode === 'channel' && leading.cause.where ? `, first its channel for ${leading.cause.where}` : '';
+    const bad = (state: State | null) => {
+      if (!state) return shows.draggedPart.other;
+      return (state.part === part ? shows.badPart : shows.draggedPart)[state.sort];
+    };
+    return weighSeen(
+      beliefs,
+      { action: 'probe', label: `Scope the outputs of ${label}${channel}.`, sockets: [], minutes: minutes.probe },
+      [
+        { sees: 'signal missing or wrong', means: `look at ${label}, and at what drags its outputs`, given: bad },
+        { sees: 'signal right', means: 'it is good: look at what it serves', given: (state) => 1 - bad(state) },
+      ],
+    );
+  });
+}
+
+/** Two lines that may be joined: written apart, and measured against each other. */
+function shortChecks(desk: Desk): Candidate[] {
+  const { beliefs, index } = desk;
+  const leading = beliefs.states.find(({ sort }) => sort === 'short');
+  if (!leading || (beliefs.answers[leading.answer]?.share ?? 0) < 0.02) return [];
+  const lines = [...new Set(leading.reach.map((lane) => index.lineOfLane[lane] as number))];
+  const bits = [...new Set(leading.reach.map((lane): number => index.bitOf(lane)))].sort((a, b) => a - b);
+  const names = lines.map((line) => index.lineName(line));
+  const own = (given: (state: State) => number, other: number) => (state: State | null) =>
+    state ? given(state) : other;
+  const joined = own(
+    (state) =>
+      state.part === leading.part ? shows.joined.short : shows.joined[state.sort === 'short' ? 'other' : state.sort],
+    shows.joined.other,
+  );
+  const measured = weighSeen(
+    beliefs,
+    {
+      action: 'measure',
+      label: `Power off, measure from line ${names[0]} to line ${names[1] ?? '?'} with an ohmmeter. Then look for a solder bridge, and measure again with what drives the lines taken out.`,
+      sockets: [],
+      minutes: minutes.lineToLine,
+    },
+    [
+      {
+        sees: 'joined',
+        means: `a short between ${listWords(names)}: solder bridge, trace, or inside what drives them`,
+        given: joined,
+      },
+      { sees: 'apart', means: 'not the lines: look at the chips', given: (state) => 1 - joined(state) },
+    ],
+  );
+  if (bits.length !== 2 || writtenApart(desk, bits)) return [measured];
+  const together = own((state) => shows.together[state.sort], shows.together.other);
+  const values = bits.map((bit) => valueWords(desk, bit));
+  const written = weighSeen(
+    beliefs,
+    {
+      action: 'pattern',
+      label: `Write ${listWords(values)} alone and read each back.`,
+      sockets: [],
+      minutes: minutes.pattern,
+    },
+    [
+      {
+        sees: `bits ${listWords(bits.map(String))} always read alike`,
+        means: `the lines ${listWords(names)} are joined`,
+        given: together,
+      },
+      {
+        sees: 'each bit fails by itself',
+        means: 'no short: two chips, or the line of one',
+        given: (state) => 1 - together(state),
+      },
+    ],
+  );
+  return [written, measured];
+}
+
+/** The readings already show the two bits written differently. */
+function writtenApart({ index, runs }: Desk, bits: readonly number[]): boolean {
+  const differ = (value: number | undefined, places: readonly number[]) =>
+    value !== undefined && new Set(places.map((place) => Math.floor(value / 2 ** place) % 2)).size > 1;
+  const carried = index.document.addressMap.windows.flatMap(({ lanes }) => lanes ?? []);
+  const places = bits.map((bit) => carried.find((step) => step.includes(bit))?.indexOf(bit) ?? bit);
+  return runs.some((run) =>
+    run.evidence.some((each) => {
+      if (each.kind === 'readings')
+        return each.lines.some(({ written }) => differ(written, each.shows === 'word' ? bits : places));
+      return each.kind === 'log' && each.values.some(({ written }) => differ(written, bits));
+    }),
+  );
+}
+
+/** A value with just this bit, as the board writes numbers. */
+function valueWords({ index }: Desk, bit: number): string {
+  const radix = { hexadecimal: 16, octal: 8, decimal: 10 }[index.document.addressMap.notation];
+  const width = radix === 10 ? 1 : ((1n << BigInt(index.bitCount)) - 1n).toString(radix).length;
+  return (1n << BigInt(bit)).toString(radix).toUpperCase().padStart(width, '0');
+}
+
+/** Chips that may hold a line or a strobe, taken out one after the other. */
+function pullChecks(desk: Desk): Candidate[] {
+  const { beliefs, index } = desk;
+  const shares = new Map<SocketIndex, number>();
+  for (const { sort, part, share } of beliefs.states) {
+    if (sort !== 'holder' || part.socket === null) continue;
+    shares.set(part.socket, (shares.get(part.socket) ?? 0) + share);
+  }
+  const order = [...shares]
+    .filter(([, share]) => share >= 0.01)
+    .sort((a, b) => b[1] - a[1])
+    .slice(0, 12);
+  const held = order.reduce((total, [, share]) => total + share, 0);
+  if (order.length < 2 || held < 0.05) return [];
+  const sockets = order.map(([socket]) => socket);
+  const labels = sockets.map((socket) => labelOf(index, socket));
+  // Pulled until one helps, or to the end.
+  const pulls = order.reduce((total, [, share], n) => total + share * (n + 1), (1 - held) * order.length);
+  const freed = (socket: SocketIndex) => (state: State | null) =>
+    state?.sort === 'holder' && state.part.socket === socket
+      ? shows.freed * (1 - state.kind.miss ** Math.max(1, state.lanes.length))
+      : shows.freedByChance / sockets.length;
+  const none = (state: State | null) => Math.max(0, 1 - sockets.reduce((sum, socket) => sum + freed(socket)(state), 0));
+  return [
+    weighSeen(
+      beliefs,
+      {
+        action: 'pull-in-turn',
+        label: `Power off, take out ${listWords(labels)} one at a time, and run again each time.`,
+        sockets: labels,
+        minutes: (minutes.pullStart + minutes.pullEach * pulls) * (effort(index, sockets) > 1 ? solderedFactor : 1),
+      },
+      [
+        ...sockets.map((socket, n) => ({
+          sees: `the others come back with ${labels[n]} out`,
+          means: `the chip of ${labels[n]} holds the line`,
+          given: freed(socket),
+        })),
+        { sees: 'no change with any of them out', means: otherWords(desk), given: none },
+      ],
+    ),
+  ];
+}
+
+/** What is left when no chip holds the line. */
+function otherWords({ beliefs }: Desk): string {
+  const left = beliefs.answers
+    .filter(({ part }) => part?.kind === 'shared-part')
+    .sort((a, b) => b.share - a.share)
+    .slice(0, 2);
+  return left.length === 0
+    ? 'look at the line and what drives it'
+    : `look at ${left.map(({ part }) => part?.label).join(' and ')}`;
+}
+
+/** Behind a wrong picture: is the memory wrong too, or only what draws it? */
+function readBack(desk: Desk): Candidate[] {
+  const { beliefs, index, runs } = desk;
+  const marks = runs.flatMap((run) => run.evidence.flatMap((each) => (each.kind === 'picture' ? each.marks : [])));
+  const planes = [...new Set(marks.flatMap((mark) => mark.planes ?? []))];
+  const video = (part: Part | null) =>
+    index.document.sharedParts.some((each) => each.role === 'shift-register' && each.label === part?.sharedPart);
+  if (marks.length === 0 || !beliefs.answers.some(({ part }) => video(part))) return [];
+  const wrong = (state: State | null) => {
+    if (!state) return shows.memoryWrong.other;
+    return video(state.part) ? shows.memoryWrongBehindVideo : shows.memoryWrong[state.sort];
+  };
+  const names = beliefs.answers.flatMap(({ part }) => (part?.sharedPart && video(part) ? [part.sharedPart] : []));
+  return [
+    weighSeen(
+      beliefs,
+      {
+        action: 'pattern',
+        label: `Write the ${planes.length > 0 ? `${listWords(planes)} ` : ''}bytes of the wrong dots with the processor, and read them back.`,
+        sockets: [],
+        minutes: minutes.pattern,
+      },
+      [
+        {
+          sees: 'they read back right',
+          means: `the picture side: look at ${listWords(names)} and what follows it`,
+          given: (state) => 1 - wrong(state),
+        },
+        { sees: 'they read back wrong', means: 'the memory side: the chips and their line', given: wrong },
+      ],
+    ),
+  ];
+}
+
+/** The supply at a socket, where it could be what fails. */
+export function railsCheck(desk: Desk): Candidate[] {
+  const { beliefs, index } = desk;
+  const everything = new Set<Lane>([...index.lanes] as Lane[]);
+  const out = (state: State | null) => {
+    if (!state) return shows.railOut.other;
+    const { part, reach, sort } = state;
+    const role = index.document.sharedParts.find((each) => each.label === part.sharedPart)?.role;
+    if (role === 'supply') return shows.railOut.supply;
+    const unnamed = part.kind === 'shared-part' && part.sharedPart === null && reach.length === everything.size;
+    return unnamed ? shows.railOutForAll : shows.railOut[sort];
+  };
+  const likely = beliefs.states.reduce((sum, state) => sum + state.share * out(state), 0);
+  if (likely < 0.03) return [];
+  return [
+    weighSeen(beliefs, { action: 'rails', label: railsLabel(desk), sockets: [], minutes: minutes.rails }, [
+      { sees: 'a rail out of its limits', means: 'put the supply right before any chip is moved', given: out },
+      { sees: 'all rails right', means: 'look at what is shared next', given: (state) => 1 - out(state) },
+    ]),
+  ];
+}
+
+/** "Measure −5 V at pin 1, +12 V at pin 8 and +5 V at pin 9 of a socket before any chip is moved." */
+export function railsLabel({ index }: Pick<Desk, 'index'>): string {
+  const rails = railsWords(index, 0 as SocketIndex);
+  return rails === null
+    ? 'Measure the supply at the pins of a socket before any chip is moved.'
+    : `Measure ${rails} of a socket before any chip is moved.`;
+}
