@@ -23,6 +23,8 @@ export interface Cause {
   readonly mode: FaultMode;
   /** Which channel, data pin or line it is, in words; null where the part has but one. */
   readonly where: string | null;
+  /** For address lines: the bits of the word number inside the chip that go through it. */
+  readonly addressBits?: readonly number[];
   readonly kinds: readonly Kind[];
 }
 

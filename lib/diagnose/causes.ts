@@ -2,21 +2,37 @@ import type { Lane, SocketIndex } from '../brand';
 import type { LayoutIndex } from '../layout/layout-index';
 import type { Priors } from './priors';
 import { twoKinds, type Builder, type Cause, type Kind, type Part } from './cause-types';
+import type { Hints } from './hints';
 import { Scopes, type Scope } from './scopes';
-import { sharedParts, shortParts, unlistedParts } from './shared-causes';
+import { addressLineParts, sharedParts, shortParts, unlistedParts } from './shared-causes';
 import { labelOf, type Chip, type Timeline } from './timeline';
+import { isDestroyed } from './wrong-part';
 
 const firstRuns = new WeakMap<LayoutIndex, { priors: Priors; parts: readonly Part[] }>();
 
-/** Every cause of the model for this layout, as the chips lay in each run. */
-export function listParts(index: LayoutIndex, timeline: Timeline, priors: Priors): readonly Part[] {
+/** Every cause of the model for this layout, as the chips lay in each run, and those that the readings point at. */
+export function listParts(
+  index: LayoutIndex,
+  timeline: Timeline,
+  { priors, hints }: { priors: Priors; hints: Hints },
+): readonly Part[] {
   // Nearly every question is about one run on an untouched board: its causes are listed once a layout.
   const untouched = timeline.runCount === 1 && timeline.handled.size === 0;
   const before = untouched ? firstRuns.get(index) : undefined;
-  if (before?.priors === priors) return before.parts;
-  const parts = listAfresh({ index, timeline, priors, scopes: new Scopes(index), everyRun: new Map() });
+  const scopes = scopesOf(index);
+  const builder: Builder = { index, timeline, priors, scopes, everyRun: new Map() };
+  const parts = before?.priors === priors ? before.parts : listAfresh(builder);
   if (untouched) firstRuns.set(index, { priors, parts });
-  return parts;
+  const more = [...(hints.addressLines ? addressLineParts(builder) : []), ...shortParts(builder, hints.joinedLines)];
+  return more.length > 0 ? [...parts, ...more] : parts;
+}
+
+const scopesByLayout = new WeakMap<LayoutIndex, Scopes>();
+
+function scopesOf(index: LayoutIndex): Scopes {
+  let scopes = scopesByLayout.get(index);
+  if (!scopes) scopesByLayout.set(index, (scopes = new Scopes(index)));
+  return scopes;
 }
 
 function listAfresh(builder: Builder): readonly Part[] {
@@ -26,8 +42,16 @@ function listAfresh(builder: Builder): readonly Part[] {
     ...index.document.sockets.map((_, socket) => positionPart(builder, socket as SocketIndex)),
     ...sharedParts(builder),
     ...unlistedParts(builder),
-    ...shortParts(builder),
+    ...shortParts(builder, neighbours(index)),
   ];
+}
+
+/** Data lines of one set that follow each other by number. */
+function neighbours(index: LayoutIndex): [number, number][] {
+  return Array.from({ length: Math.max(0, index.lineCount - 1) }, (_, line): [number, number] => [
+    line,
+    line + 1,
+  ]).filter(([, other]) => other % index.bitCount !== 0);
 }
 
 /** The lanes behind each data pin of a socket's chip. */
@@ -42,7 +66,7 @@ function pinScopes({ index, scopes }: Builder, socket: SocketIndex): Map<number,
     if (!list) lanes.set(held.pin, [lane]);
     else if (!list.includes(lane)) list.push(lane);
   }
-  return new Map([...lanes].map(([pin, list]) => [pin, scopes.of(list)]));
+  return new Map([...lanes].map(([pin, list]) => [pin, scopes.inSocket(socket, list)]));
 }
 
 function chipPart(builder: Builder, chip: Chip): Part {
@@ -66,6 +90,10 @@ function chipPart(builder: Builder, chip: Chip): Part {
   const several = pins.length > 1;
   const causes: Cause[] = [];
   const whole = priors.chipDead * share * (several ? 1 - priors.oneDataPinShare : 1);
+  if (isDestroyed(index, chip)) {
+    const own = moving((at) => scopes.ofSocket(at));
+    causes.push({ mode: 'wrong-part', where: null, kinds: twoKinds(builder, priors.wrongPart, own) });
+  }
   causes.push({
     mode: 'dead',
     where: null,

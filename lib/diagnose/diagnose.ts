@@ -3,17 +3,23 @@ import type { Lane } from '../brand';
 import type { LayoutIndex } from '../layout/layout-index';
 import { cautionsFor } from './cautions';
 import { listParts } from './causes';
+import { buildAddressMap, type AddressMap } from '../place/address';
 import { compiledFormats } from './compiled-formats';
+import { hintsOf } from './hints';
 import { weighAll } from './mixture';
-import { nextChecks } from './next-check';
+import { nextChecks } from './check/next-checks';
 import { exactWithin } from './noisy-or';
-import { observe, type RunObservation } from './observations';
+import { observe, type RunObservation } from './observe/observations';
 import type { Posterior } from './posterior';
 import { priors as defaultPriors, type Priors } from './priors';
+import { openQuestions } from './questions';
+import { railReading } from './rails';
 import { tell } from './sentences';
+import { listSignatures } from './signature-words';
+import { supplyVerdict, railSuspects } from './supply';
 import { listPlaces, listSuspects, type Findings } from './suspects';
 import { followChips } from './timeline';
-import { decide, laneNames, type Weighed } from './verdict';
+import { decide, laneNames, openMeaning, type Weighed } from './verdict';
 
 /** A failing lane of which the model's causes explain less than this is told as unexplained. */
 const explainedFrom = 0.5;
@@ -31,36 +37,41 @@ export function diagnose(index: LayoutIndex, runs: readonly Run[], priors: Prior
     index,
     runs.map((run) => run.changes),
   );
-  const observations = observe(index, runs, compiledFormats(index));
-  const parts = listParts(index, timeline, priors);
-  const { posterior, best, shares } = weighAll(parts, observations.interpretations, priors);
+  const observations = observe({ index, map: addressMapOf(index) }, runs, compiledFormats(index));
+  const { interpretations, signs } = observations;
+  const parts = listParts(index, timeline, { priors, hints: hintsOf(index, interpretations) });
+  const { posterior, best, signals, shares } = weighAll(parts, interpretations, { index, priors, signs });
+  const rails = observations.measurements.flatMap((each) => railReading(index, each) ?? []);
   const findings: Findings = {
     index,
     parts,
     posterior,
     runs: best.runs,
-    everFailing: runs.map(
-      (_, r) => new Set(observations.interpretations.flatMap((each) => [...(each.runs[r]?.failing ?? [])])),
-    ),
+    everFailing: runs.map((_, r) => new Set(interpretations.flatMap((each) => [...(each.runs[r]?.failing ?? [])]))),
     said: observations.evidence.flatMap((piece, i) =>
       piece.ok ? [{ run: piece.run, text: piece.text, failing: observations.failingOf[i] ?? [] }] : [],
     ),
   };
   const lastRun = findLast(best.runs, (run) => run.failing.size + run.passed.size > 0);
   const anyFailed = best.runs.some((run) => run.failing.size > 0);
+  const supply = supplyVerdict(index, { rails, signs, runs: best.runs });
+  const ranks = anyFailed && supply === null;
   const weighed: Weighed = {
     findings,
-    suspects: anyFailed ? listSuspects(findings) : [],
-    places: anyFailed ? listPlaces(findings) : [],
+    signals,
+    signs,
+    rails,
+    suspects: ranks ? listSuspects(findings) : railSuspects(index, rails),
+    places: ranks ? listPlaces(findings) : [],
     lastRun,
-    interpretations: observations.interpretations,
+    interpretations,
     unreadable: observations.evidence.length > 0 && observations.evidence.every((piece) => !piece.ok),
     unexplained: anyFailed ? unexplainedLanes(findings, explainedFrom * Math.max(...shares)) : [],
   };
-  const verdict = decide(weighed);
+  const verdict = supply ?? decide(weighed);
   const last = lastRun === null ? undefined : best.runs[lastRun];
   const possible = new Set(
-    observations.interpretations.flatMap((each) => (lastRun === null ? [] : [...(each.runs[lastRun]?.failing ?? [])])),
+    interpretations.flatMap((each) => (lastRun === null ? [] : [...(each.runs[lastRun]?.failing ?? [])])),
   );
   const untested = last
     ? ([...index.lanes] as Lane[]).filter((lane) => !last.passed.has(lane) && !possible.has(lane))
@@ -78,11 +89,13 @@ export function diagnose(index: LayoutIndex, runs: readonly Run[], priors: Prior
     suspects: [...weighed.suspects],
     places: [...weighed.places],
     groups: [...verdict.groups],
-    pairs: anyFailed ? pairsOf(findings, weighed) : [],
+    pairs: ranks ? pairsOf(findings, weighed) : [],
     unexplained: laneNames(findings, weighed.unexplained),
     untested: laneNames(findings, untested),
     lanes: laneStates(findings, last),
     evidence: [...observations.evidence],
+    signatures: listSignatures(index, signals, best.runs),
+    questions: openQuestions(index, interpretations, { shares, settles: openMeaning(weighed)?.check ?? '' }),
     nextChecks: nextChecks({ weighed, verdict, runs, priors }),
     cautions: cautionsFor(index, {
       outcome: verdict.outcome,
@@ -92,6 +105,14 @@ export function diagnose(index: LayoutIndex, runs: readonly Run[], priors: Prior
     exact: leftOut <= exactWithin,
     leftOut,
   };
+}
+
+const addressMaps = new WeakMap<LayoutIndex, AddressMap>();
+
+function addressMapOf(index: LayoutIndex): AddressMap {
+  let map = addressMaps.get(index);
+  if (!map) addressMaps.set(index, (map = buildAddressMap(index)));
+  return map;
 }
 
 function findLast<T>(list: readonly T[], wanted: (item: T) => boolean): number | null {

@@ -30,8 +30,8 @@ export interface HiddenVariable {
 export interface NoisyOrModel {
   readonly variables: readonly HiddenVariable[];
   readonly positives: number;
-  /** Probability that a positive observation comes from nothing in the model. */
-  readonly leak: number;
+  /** Probability that a positive observation comes from nothing in the model: one for all, or one for each. */
+  readonly leak: number | Float64Array;
 }
 
 export interface NoisyOrAnswer {
@@ -82,7 +82,11 @@ function inferMerged(model: NoisyOrModel): NoisyOrAnswer {
     });
   }
   const marginals = nodes.map((node) => Float64Array.from(node.share));
-  const quiet = new Float64Array(model.positives).fill(1 - model.leak);
+  const { leak } = model;
+  const quiet = Float64Array.from(
+    { length: model.positives },
+    (_, o) => 1 - (typeof leak === 'number' ? leak : (leak[o] ?? 0)),
+  );
   const everything = {
     nodes: nodes.map((_, v) => v).filter((v) => (nodes[v] as Node).widest > 0),
     positives: Array.from({ length: model.positives }, (_, o) => o),

@@ -2,9 +2,10 @@ import { sum } from 'd3-array';
 import type { Lane } from '../brand';
 import type { Cause, Kind, Part } from './cause-types';
 import { inferNoisyOr, type HiddenVariable } from './noisy-or';
-import type { RunObservation } from './observations';
+import type { RunObservation } from './observe/observations';
 import type { Priors } from './priors';
 import type { Scope } from './scopes';
+import type { Signals } from './signals';
 
 /** Of the kinds of one cause. */
 type Probabilities = readonly number[] | Float64Array;
@@ -27,16 +28,25 @@ interface Slot {
   readonly variable: HiddenVariable;
 }
 
-/** Weighs the parts against what the runs showed, by the noisy-OR model of `priors`. */
-export function weigh(parts: readonly Part[], runs: readonly RunObservation[], priors: Priors): Posterior {
+/**
+ * Weighs the parts against what the runs showed, by the noisy-OR model of `priors`. Patterns and signs weigh the kinds
+ * that reach a failure; the others cannot be told by them.
+ */
+export function weigh(
+  parts: readonly Part[],
+  runs: readonly RunObservation[],
+  { priors, signals }: { priors: Priors; signals: Signals },
+): Posterior {
   const evidence = new Evidence(runs);
+  const elsewhere = evidence.elsewhere(priors, signals);
+  const leak = evidence.leaks(priors, signals);
   const touching: Slot[] = [];
   /** Logarithms of what each part contributes without touching any failure, and of its not being there. */
   const apart = new Float64Array(parts.length);
   const absent = new Float64Array(parts.length);
   const kinds: Probabilities[][] = parts.map((part, p) =>
     part.causes.map((cause, c) => {
-      const variable = variableOf(cause, evidence);
+      const variable = variableOf(evidence, signals, { part, cause });
       absent[p] = (absent[p] as number) + Math.log(variable.absent);
       if (variable.states.some((state) => state.touches.length > 0)) {
         touching.push({ part: p, cause: c, variable });
@@ -49,7 +59,11 @@ export function weigh(parts: readonly Part[], runs: readonly RunObservation[], p
   );
   const always = sum(apart) + evidence.negatives * Math.log(1 - priors.leak);
   const solve = (slots: readonly Slot[]) =>
-    inferNoisyOr({ variables: slots.map((slot) => slot.variable), positives: evidence.positives, leak: priors.leak });
+    inferNoisyOr({
+      variables: [...slots.map((slot) => slot.variable), ...elsewhere],
+      positives: evidence.positives,
+      leak,
+    });
   const answer = solve(touching);
   touching.forEach(({ part, cause }, i) => {
     (kinds[part] as Probabilities[])[cause] = answer.marginals[i] as Float64Array;
@@ -74,10 +88,28 @@ function totalOf(variable: HiddenVariable): number {
   return variable.absent + sum(variable.states, (state) => state.weight);
 }
 
-function variableOf(cause: Cause, evidence: Evidence): HiddenVariable {
+function variableOf(evidence: Evidence, signals: Signals, of: { part: Part; cause: Cause }): HiddenVariable {
   let prior = 0;
-  for (const kind of cause.kinds) prior += kind.prior;
-  return { absent: 1 - prior, states: cause.kinds.map((kind) => evidence.stateOf(kind)) };
+  for (const kind of of.cause.kinds) prior += kind.prior;
+  const states = of.cause.kinds.map((kind) => {
+    const state = evidence.stateOf(kind);
+    if (signals.silent || state.touches.length === 0) return state;
+    return { ...state, weight: state.weight * signals.factor(of.part, of.cause, kind) };
+  });
+  return { absent: 1 - prior, states };
+}
+
+/** Passes that a set of lanes gave: how many as a whole, and the power of the others. */
+interface Passes {
+  readonly whole: number;
+  readonly weak: readonly number[];
+}
+
+/** Probability that a fault shows on none of them. */
+function allMissed({ whole, weak }: Passes, miss: number): number {
+  let product = miss ** whole;
+  for (const power of weak) product *= 1 - (1 - miss) * power;
+  return product;
 }
 
 /** The observations, counted for each set of lanes once. */
@@ -85,35 +117,69 @@ class Evidence {
   readonly positives: number;
   readonly negatives: number;
   private readonly numberOf: ReadonlyMap<Lane, number>[];
-  private readonly counted = new Map<Scope, { passed: number[]; failing: number[][] }>();
+  private readonly counted = new Map<Scope, { passed: Passes[]; failing: number[][] }>();
   private readonly lists = new Map<string, readonly number[]>();
-  private readonly reached = new Map<Kind['scopes'], { passed: number; touches: readonly number[] }>();
+  private readonly reached = new Map<Kind['scopes'], { passed: Passes; touches: readonly number[] }>();
 
   constructor(private readonly runs: readonly RunObservation[]) {
     let next = 0;
     this.numberOf = runs.map((run) => new Map([...run.failing].map((lane) => [lane, next++])));
     this.positives = next;
-    this.negatives = sum(runs, (run) => run.passed.size);
+    this.negatives = sum(runs, (run) => run.passed.size - sum(run.power.values(), (power) => 1 - power));
   }
 
   stateOf(kind: Kind): HiddenVariable['states'][number] {
     const { passed, touches } = this.reachOf(kind.scopes);
-    return { weight: kind.prior * kind.miss ** passed, touches, miss: kind.miss };
+    return { weight: kind.prior * allMissed(passed, kind.miss), touches, miss: kind.miss };
+  }
+
+  /** The chance of each failure to come from nothing, one for all where nothing tells them apart. */
+  leaks(priors: Priors, signals: Signals): number | Float64Array {
+    if (signals.silent) return priors.leak;
+    const leaks = new Float64Array(this.positives);
+    this.numberOf.forEach((lanes, r) => {
+      for (const [lane, o] of lanes) leaks[o] = priors.leak * signals.unknown(r, lane);
+    });
+    return leaks;
+  }
+
+  /** For each lane that failed, something outside the listed parts that spoils it in every run. */
+  elsewhere(priors: Priors, signals: Signals): HiddenVariable[] {
+    const lanes = new Set(this.runs.flatMap((run) => [...run.failing]));
+    return [...lanes].map((lane) => {
+      const { passed, failing } = this.countAfresh({ lanes: [lane] });
+      const all = joined(passed);
+      const touches = this.once(failing.flat());
+      const first = this.runs.findIndex((run) => run.failing.has(lane));
+      const factor = signals.silent ? 1 : signals.unknown(first, lane);
+      const state = (share: number, miss: number) => ({
+        weight: priors.elsewhere * share * allMissed(all, miss) * factor,
+        touches,
+        miss,
+      });
+      return {
+        absent: 1 - priors.elsewhere,
+        states: [
+          state(1 - priors.intermittentShare, 1 - priors.detectionHard),
+          state(priors.intermittentShare, 1 - priors.detectionIntermittent),
+        ],
+      };
+    });
   }
 
   /** Many causes share one list of scopes, so it is counted once. */
-  private reachOf(scopes: Kind['scopes']): { passed: number; touches: readonly number[] } {
+  private reachOf(scopes: Kind['scopes']): { passed: Passes; touches: readonly number[] } {
     const before = this.reached.get(scopes);
     if (before) return before;
-    let passed = 0;
+    const passes: Passes[] = [];
     const touches: number[] = [];
     scopes.forEach((scope, r) => {
       if (!scope) return;
       const counts = this.countsOf(scope);
-      passed += counts.passed[r] ?? 0;
+      passes.push(counts.passed[r] as Passes);
       touches.push(...(counts.failing[r] ?? []));
     });
-    const reach = { passed, touches: this.once(touches) };
+    const reach = { passed: joined(passes), touches: this.once(touches) };
     this.reached.set(scopes, reach);
     return reach;
   }
@@ -121,16 +187,23 @@ class Evidence {
   private countsOf(scope: Scope) {
     const before = this.counted.get(scope);
     if (before) return before;
-    const counts = {
-      passed: this.runs.map((run) =>
-        run.passed.size === 0 ? 0 : scope.lanes.reduce((n, lane) => n + (run.passed.has(lane) ? 1 : 0), 0),
-      ),
-      failing: this.runs.map((run, r) =>
-        run.failing.size === 0 ? [] : scope.lanes.flatMap((lane) => this.numberOf[r]?.get(lane) ?? []),
-      ),
-    };
+    const counts = this.countAfresh(scope);
     this.counted.set(scope, counts);
     return counts;
+  }
+
+  private countAfresh(scope: Scope) {
+    return {
+      passed: this.runs.map((run): Passes => passesOf(run, scope)),
+      failing: this.runs.map((run, r) =>
+        run.failing.size === 0
+          ? []
+          : scope.lanes.flatMap((lane) => {
+              const o = this.numberOf[r]?.get(lane);
+              return o === undefined || !reaches(scope, lane, run.failingSegments) ? [] : [o];
+            }),
+      ),
+    };
   }
 
   /** Equal lists become one object, by which causes of the same reach are found quickly. */
@@ -142,4 +215,32 @@ class Evidence {
     this.lists.set(key, touches);
     return touches;
   }
+}
+
+/** Where single words are known, a chip of a deep bank is only touched by words that it holds. */
+function reaches(scope: Scope, lane: Lane, segments: ReadonlyMap<Lane, number>): boolean {
+  const own = scope.within?.get(lane);
+  const known = segments.get(lane);
+  return own === undefined || known === undefined || (own & known) !== 0;
+}
+
+function passesOf(run: RunObservation, scope: Scope): Passes {
+  let whole = 0;
+  const weak: number[] = [];
+  if (run.passed.size === 0 && run.rightSegments.size === 0) return { whole, weak };
+  for (const lane of scope.lanes) {
+    const own = scope.within?.get(lane);
+    const right = own === undefined ? undefined : run.rightSegments.get(lane);
+    const segmentRight = right !== undefined && own !== 0 && ((own ?? 0) & right) === own;
+    if (!run.passed.has(lane) && !segmentRight) continue;
+    const power = run.power.get(lane);
+    if (power === undefined) whole++;
+    else weak.push(power);
+  }
+  return { whole, weak };
+}
+
+function joined(passes: readonly Passes[]): Passes {
+  if (passes.length === 1) return passes[0] as Passes;
+  return { whole: sum(passes, (each) => each.whole), weak: passes.flatMap((each) => each.weak) };
 }

@@ -28,8 +28,16 @@ export const priors = {
   sharedWhole: 0.002,
   /** Two neighbouring data lines joined. */
   lineShort: 0.0005,
+  /** Two data lines joined that are not neighbours by number; weighed only where readings show them to follow each other. */
+  farShort: 0.0001,
+  /** One address line of the array; weighed beside the listed parts only where readings show an address bit to be lost. */
+  addressLine: 0.0008,
   /** A lane that reads bad though no cause of the model is there. */
   leak: 0.001,
+  /** Something else that spoils just this lane, in every run: wiring, gating, a trace beyond the position. */
+  elsewhere: 0.0008,
+  /** A chip whose socket feeds its pins wrongly is taken for destroyed. */
+  wrongPart: 0.95,
   /** One fault in five comes and goes. */
   intermittentShare: 0.2,
   /** A hard fault shows on a lane in this share of tests. */

@@ -1,9 +1,12 @@
 import { bankIndex, type Lane, type SocketIndex } from '../brand';
 import type { LayoutIndex } from '../layout/layout-index';
+import { segmentsInSocket, segmentsOf } from '../layout/segments';
 
 /** A set of lanes that a cause spoils while the chips lie as they do in one run. Equal sets are one object. */
 export interface Scope {
   readonly lanes: readonly Lane[];
+  /** Where a bank is several chips deep: the chips behind each lane that the cause reaches, as a mask. */
+  readonly within?: ReadonlyMap<Lane, number>;
 }
 
 /** Makes each set of lanes of a layout once. */
@@ -27,13 +30,26 @@ export class Scopes {
     return scope;
   }
 
+  /** Some of the lanes of one socket: its own chip behind each of them, where there are several. */
+  inSocket(socket: SocketIndex, lanes: readonly Lane[]): Scope {
+    const deep = lanes.some((lane) => segmentsOf(this.index, lane).length > 1);
+    if (!deep) return this.of(lanes);
+    const key = `${socket}: ${[...lanes].sort((a, b) => a - b).join(' ')}`;
+    const before = this.known.get(key);
+    if (before) return before;
+    const within = new Map(lanes.map((lane) => [lane, segmentsInSocket(this.index, lane, socket)]));
+    const scope = { lanes: [...lanes].sort((a, b) => a - b), within };
+    this.known.set(key, scope);
+    return scope;
+  }
+
   /** What the chip in a socket holds. */
   ofSocket(socket: SocketIndex): Scope {
     const before = this.perSocket[socket];
     if (before) return before;
     const { socketLaneStart, socketLanes } = this.index;
     const lanes = socketLanes.subarray(socketLaneStart[socket], socketLaneStart[socket + 1]);
-    const scope = this.of([...lanes] as Lane[]);
+    const scope = this.inSocket(socket, [...lanes] as Lane[]);
     this.perSocket[socket] = scope;
     return scope;
   }

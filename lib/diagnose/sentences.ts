@@ -1,7 +1,8 @@
 import type { Lane } from '../brand';
 import { sentenceCase } from '../layout/words';
 import { lanesWords, saidAsOne } from './lane-words';
-import type { Observations } from './observations';
+import type { Observations } from './observe/observations';
+import { listSignatures } from './signature-words';
 import { openMeaning, wentAway, type Verdict, type Weighed } from './verdict';
 
 export interface Told {
@@ -34,6 +35,12 @@ export function tell(told: Told): string[] {
     );
     return [...sentences, ...reasons, ...observations.notes];
   }
+  if (verdict.outcome === 'supply') {
+    const bad = weighed.suspects.flatMap((suspect) => suspect.reasons);
+    const after =
+      'Switch off, take the chips out, put the supply right and measure again at the sockets. Then test all chips again: some may be hurt.';
+    return [...sentences, ...bad, after, ...observations.notes];
+  }
   const gone = wentAway(weighed);
   const shown = gone ? lastFailing(weighed) : lastRun;
   const run = findings.runs[shown];
@@ -61,6 +68,8 @@ export function tell(told: Told): string[] {
       `${words} ${saidAsOne(findings.index, untested) ? 'was' : 'were'} not tested${silence ? `: ${silence}` : ''}.`,
     );
   }
+  for (const { words } of listSignatures(findings.index, weighed.signals, findings.runs).slice(0, 3))
+    sentences.push(words);
   const [first] = places;
   if (verdict.outcome === 'place' && first && verdict.sockets.length === 1 && first.chip + first.contact > 0) {
     const more =

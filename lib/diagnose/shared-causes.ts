@@ -12,8 +12,14 @@ export function sharedParts(builder: Builder): Part[] {
     const served = servedLanes(index, part);
     if (served.length === 0) return [];
     const channels = channelsOf(index, part);
+    const bits = part.role === 'multiplexer' ? part.serves.addressBits : undefined;
     const causes: Cause[] = [
-      { mode: 'whole', where: null, kinds: twoKinds(builder, priors.sharedWhole, scopes.of(served)) },
+      {
+        mode: 'whole',
+        where: null,
+        kinds: twoKinds(builder, priors.sharedWhole, scopes.of(served)),
+        ...(bits ? { addressBits: bits } : {}),
+      },
     ];
     if (channels.length > 1) {
       for (const channel of channels) {
@@ -21,6 +27,7 @@ export function sharedParts(builder: Builder): Part[] {
           mode: 'channel',
           where: channel.name,
           kinds: twoKinds(builder, priors.sharedChannel, scopes.of(channel.lanes)),
+          ...(channel.addressBit === undefined ? {} : { addressBits: [channel.addressBit] }),
         });
       }
     }
@@ -75,25 +82,48 @@ export function unlistedParts(builder: Builder): Part[] {
   return parts;
 }
 
-/** Shorts between neighbouring data lines of one set. */
-export function shortParts(builder: Builder): Part[] {
+/**
+ * Each address input of the chips: what brings it there serves row and column one after the other. Listed only where
+ * the readings show that address bits are lost, and where no shared part is known to carry them alone.
+ */
+export function addressLineParts(builder: Builder): Part[] {
   const { index, priors, scopes } = builder;
-  const parts: Part[] = [];
-  for (let line = 0; line + 1 < index.lineCount; line++) {
-    if ((line + 1) % index.bitCount === 0) continue;
-    const one = scopes.ofLine(line).lanes;
-    const other = scopes.ofLine(line + 1).lanes;
-    if (one.length === 0 || other.length === 0) continue;
-    const kinds = twoKinds(builder, priors.lineShort, scopes.of([...one, ...other]));
-    parts.push({
-      kind: 'short',
-      id: `short:${line}-${line + 1}`,
-      label: `short between data lines ${index.lineName(line)} and ${index.lineName(line + 1)}`,
+  const { multiplexing } = index.document;
+  if (!multiplexing) return [];
+  const inputs = Math.max(multiplexing.row.length, multiplexing.column.length);
+  return Array.from({ length: inputs }, (_, n): Part => {
+    const addressBits = [multiplexing.row[n], multiplexing.column[n]].filter((bit) => bit !== undefined);
+    const kinds = twoKinds(builder, priors.addressLine, scopes.all());
+    return {
+      kind: 'shared-part',
+      id: `unlisted:address:${n}`,
+      label: `address line ${n} of the chips (trace, resistor, multiplexer output)`,
       socket: null,
       cameFrom: null,
       sharedPart: null,
-      causes: [{ mode: 'short', where: null, kinds }],
-    });
-  }
-  return parts;
+      causes: [{ mode: 'channel', where: null, kinds, addressBits }],
+    };
+  });
+}
+
+/** Shorts between data lines of one set: neighbours by number, or those that readings point at. */
+export function shortParts(builder: Builder, pairs: readonly (readonly [number, number])[]): Part[] {
+  const { index, priors, scopes } = builder;
+  return pairs.flatMap(([line, other]): Part[] => {
+    const lanes = [...scopes.ofLine(line).lanes, ...scopes.ofLine(other).lanes];
+    if (scopes.ofLine(line).lanes.length === 0 || scopes.ofLine(other).lanes.length === 0) return [];
+    const neighbours = other === line + 1;
+    const kinds = twoKinds(builder, neighbours ? priors.lineShort : priors.farShort, scopes.of(lanes));
+    return [
+      {
+        kind: 'short',
+        id: `short:${line}-${other}`,
+        label: `short between data lines ${index.lineName(line)} and ${index.lineName(other)}`,
+        socket: null,
+        cameFrom: null,
+        sharedPart: null,
+        causes: [{ mode: 'short', where: null, kinds }],
+      },
+    ];
+  });
 }

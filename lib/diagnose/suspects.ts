@@ -5,7 +5,7 @@ import type { LayoutIndex } from '../layout/layout-index';
 import { sentenceCase } from '../layout/words';
 import type { Cause, Part } from './cause-types';
 import { lanesWords } from './lane-words';
-import type { RunObservation } from './observations';
+import type { RunObservation } from './observe/observations';
 import { probabilityOf, type Posterior } from './posterior';
 import { labelOf } from './timeline';
 
@@ -127,6 +127,10 @@ export function modeWords(mode: FaultMode, where: string | null): string {
       return 'as a whole';
     case 'short':
       return 'the two lines joined';
+    case 'wrong-part':
+      return 'not made for this socket';
+    case 'supply':
+      return 'out of its limits';
   }
 }
 
@@ -166,6 +170,7 @@ const kindWords: Partial<Record<FaultMode, string>> = {
   'holds-line': 'A chip that never lets go of its data line spoils the bit in every bank on that line.',
   'holds-strobe': 'A chip that holds the strobe of its bank spoils all bits of the bank.',
   'holds-address': 'A chip that holds an address line spoils every lane.',
+  'wrong-part': 'The supply pins of this socket break a chip of the family that was fitted.',
   fitting: 'It was handled just before: look for a folded leg or a chip turned round.',
 };
 

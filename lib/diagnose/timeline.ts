@@ -11,6 +11,8 @@ export interface Chip {
   /** The run before which it was fitted; 0 for those found on the board. */
   readonly since: number;
   readonly quality: 'found' | 'known-good' | 'untested';
+  /** The family that was fitted, where it was said to be another than the socket's. */
+  readonly family: string | null;
   /** The socket that holds it in each run, null while it is not on the board. */
   readonly socketInRun: readonly (SocketIndex | null)[];
 }
@@ -39,7 +41,10 @@ export function followChips(index: LayoutIndex, changesPerRun: readonly (readonl
   const holds: number[] = [];
   for (let s = 0; s < socketCount; s++) {
     const at = s as SocketIndex;
-    chips.push({ chip: { id: `chip:${labelOf(index, at)}`, cameFrom: at, since: 0, quality: 'found' }, places: [] });
+    chips.push({
+      chip: { id: `chip:${labelOf(index, at)}`, cameFrom: at, since: 0, quality: 'found', family: null },
+      places: [],
+    });
     holds.push(s);
   }
 
@@ -79,7 +84,13 @@ export function followChips(index: LayoutIndex, changesPerRun: readonly (readonl
         const nth = (fittedIn.get(socket) ?? 1) + 1;
         fittedIn.set(socket, nth);
         chips.push({
-          chip: { id: `chip:${change.socket}#${nth}`, cameFrom: socket, since: run, quality: change.with },
+          chip: {
+            id: `chip:${change.socket}#${nth}`,
+            cameFrom: socket,
+            since: run,
+            quality: change.with,
+            family: change.family ?? null,
+          },
           places: new Array<SocketIndex | null>(run).fill(null),
         });
         holds[socket] = chips.length - 1;

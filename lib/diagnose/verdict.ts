@@ -1,9 +1,11 @@
 import { sum } from 'd3-array';
-import type { Diagnosis, LaneName, Place, Suspect, SuspectGroup } from '@/shared';
+import type { Diagnosis, LaneName, Place, Sign, Suspect, SuspectGroup } from '@/shared';
 import type { Lane } from '../brand';
 import { bankWords, listWords, sentenceCase } from '../layout/words';
 import { lanesWords, saidAsOne } from './lane-words';
-import type { Interpretation } from './observations';
+import type { Interpretation } from './observe/observations';
+import type { RailReading } from './rails';
+import type { Signals } from './signals';
 import type { Findings } from './suspects';
 
 /** What the evidence as a whole comes to. */
@@ -21,6 +23,9 @@ export interface Verdict {
 
 export interface Weighed {
   readonly findings: Findings;
+  readonly signals: Signals;
+  readonly signs: readonly Sign[];
+  readonly rails: readonly RailReading[];
   readonly suspects: readonly Suspect[];
   readonly places: readonly Place[];
   /** The last run that showed anything, null where none did. */
@@ -60,7 +65,11 @@ export function decide(weighed: Weighed): Verdict {
   const { findings, lastRun, places, suspects, unexplained } = weighed;
   const nothing = { probability: null, groups: [], sockets: [] };
   if (lastRun === null) {
-    const headline = weighed.unreadable ? 'The report cannot be read.' : 'Enter what the board reported.';
+    const headline = weighed.unreadable
+      ? 'The report cannot be read.'
+      : weighed.signs.length > 0
+        ? 'No chip can be named: nothing names a place yet.'
+        : 'Enter what the board reported.';
     return { outcome: 'no-evidence', headline, sure: 'no reading', ...nothing };
   }
   const failing = new Set(findings.runs.flatMap((run) => [...run.failing]));
@@ -102,6 +111,8 @@ function placeVerdict(weighed: Weighed, leading: readonly Place[]): Verdict {
 function onePlace({ suspects }: Weighed, place: Place): string {
   if (place.contact > place.chip) return `Look at socket ${place.socket} first: contacts, solder, trace.`;
   const chip = suspects.find((suspect) => suspect.kind === 'chip' && suspect.socket === place.socket);
+  if (chip?.modes[0]?.mode === 'wrong-part')
+    return `Power off. The chip just fitted in ${place.socket} is not made for this socket: treat it as destroyed.`;
   if (chip?.cameFrom) return `Pull the chip now in ${place.socket}: it came from ${chip.cameFrom}.`;
   if (chip?.id.includes('#')) return `Pull the chip just fitted in ${place.socket}.`;
   return `Pull ${place.socket} first.`;

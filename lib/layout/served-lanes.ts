@@ -6,6 +6,8 @@ import type { LayoutIndex } from './layout-index';
 export interface Channel {
   /** In words: "bit 3", "bank A", "address bit 5". */
   readonly name: string;
+  /** For the channels of an address: which bit of the word number goes through it. */
+  readonly addressBit?: number;
   readonly lanes: readonly Lane[];
 }
 
@@ -63,7 +65,7 @@ export function channelsOf(index: LayoutIndex, part: SharedPart): readonly Chann
   const served = servedLanes(index, part);
   if (kind === 'address-bit') {
     // A lost address bit spoils words of every lane that the part serves.
-    return (part.serves.addressBits ?? []).map((bit) => ({ name: `address bit ${bit}`, lanes: served }));
+    return (part.serves.addressBits ?? []).map((bit) => ({ name: `address bit ${bit}`, addressBit: bit, lanes: served }));
   }
   const groups = new Map<number, Lane[]>();
   for (const at of served) {

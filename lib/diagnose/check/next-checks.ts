@@ -1,27 +1,22 @@
-import type { NextCheck, Run } from '@/shared';
-import type { Priors } from '../priors';
-import { wentAway, type Verdict, type Weighed } from '../verdict';
-import { asNextCheck, type Candidate } from './candidate';
+import type { NextCheck } from '@/shared';
+import { wentAway } from '../verdict';
+import { asNextCheck } from './candidate';
+import { candidates, deskFor, type CheckInput } from './candidates';
 import { effort, type Desk } from './desk';
-import { deadChecks, provenPlace, refitCheck, runAgain, soakCheck, supplyChecks, wrongPartWords } from './first-rules';
-import { meaningFor } from './meanings';
-import { measureCheck, placeChecks, replaceCheck } from './place-checks';
-import { reporterFor } from './report-words';
-import { railsCheck, sharedChecks } from './shared-checks';
-import { believe, placesOf } from './states';
-import { settleMeaning, testWhole } from './whole-checks';
-
-interface CheckInput {
-  readonly weighed: Weighed;
-  readonly verdict: Verdict;
-  readonly runs: readonly Run[];
-  readonly priors: Priors;
-}
+import {
+  deadChecks,
+  provenPlace,
+  refitCheck,
+  runAgain,
+  soakCheck,
+  supplyChecks,
+  wrongPartWords,
+} from './first-rules';
+import { measureCheck, replaceCheck } from './place-checks';
+import { settleMeaning } from './whole-checks';
 
 /** No more than this many checks are listed. */
 const mostListed = 5;
-/** Places whose checks are weighed. */
-const mostPlaces = 2;
 /** From here on a chip is replaced without another check: a repair that helps is the proof. */
 const provenFrom = 0.95;
 /** A check that tells less than this is not listed. */
@@ -36,16 +31,15 @@ const leastBits = 0.005;
  * is made for a candidate: what it would show follows from the states that are already weighed.
  */
 export function nextChecks(input: CheckInput): NextCheck[] {
-  const { weighed, verdict, runs, priors } = input;
+  const { weighed, verdict } = input;
   const { index } = weighed.findings;
   if (verdict.outcome === 'supply') return supplyChecks(weighed);
   if (verdict.outcome === 'no-evidence')
     return weighed.signs.some(({ sign }) => sign === 'dead') ? deadChecks(index) : [];
   if (verdict.outcome === 'not-shown') return [];
-  const beliefs = believe(weighed);
-  if (!beliefs) return [runAgain()];
-  const meaning = meaningFor(beliefs);
-  const desk: Desk = { index, weighed, verdict, runs, priors, beliefs, meaning, report: reporterFor(index, runs) };
+  const desk = deskFor(input);
+  if (!desk) return [runAgain()];
+  const { beliefs } = desk;
   const first = comesFirst(desk);
   const ranked = candidates(desk)
     .filter(({ bits }) => bits >= leastBits)
@@ -73,21 +67,6 @@ function comesFirst(desk: Desk): NextCheck[] {
     return [asNextCheck(beliefs, replaceCheck(desk, socket))];
   if (place.contact > place.chip) return [asNextCheck(beliefs, measureCheck(desk, socket))];
   return [];
-}
-
-function candidates(desk: Desk): Candidate[] {
-  const { verdict, beliefs } = desk;
-  const whole = testWhole(desk);
-  const shared = [...sharedChecks(desk), ...railsCheck(desk)];
-  // What many chips share is looked at before a chip is moved.
-  const chips =
-    verdict.outcome === 'shared'
-      ? []
-      : placesOf(beliefs)
-          .slice(0, mostPlaces)
-          .flatMap((place) => placeChecks(desk, place));
-  const seen = new Set<string>();
-  return [...(whole ? [whole] : []), ...shared, ...chips].filter(({ label }) => !seen.has(label) && seen.add(label));
 }
 
 /** A test of the whole is cheap and comes with what follows it. */

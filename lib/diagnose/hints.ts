@@ -1,0 +1,38 @@
+import type { LayoutIndex } from '../layout/layout-index';
+import { fixedBits, shapesThatFit } from './shapes';
+import { linePairs, looksJoined } from './line-pairs';
+import type { Interpretation } from './observe/observations';
+import { chipSize } from './signals';
+
+/** Causes that are worth listing only because the readings point at them. */
+export interface Hints {
+  readonly addressLines: boolean;
+  /** Pairs of data lines, no neighbours by number, that read as joined. */
+  readonly joinedLines: readonly (readonly [number, number])[];
+}
+
+/** Nothing points beyond the usual causes. */
+export const noHints: Hints = { addressLines: false, joinedLines: [] };
+
+/** What the readings, in any of the ways to understand them, point at. */
+export function hintsOf(index: LayoutIndex, interpretations: readonly Interpretation[]): Hints {
+  let addressLines = false;
+  const joined = new Map<string, readonly [number, number]>();
+  for (const { runs } of interpretations) {
+    if (!runs.some((run) => run.seen.size > 0 || run.aliased.size > 0)) continue;
+    for (const pair of linePairs(index, runs)) {
+      const [one, other] = pair.lines;
+      if (looksJoined(pair) && other !== one + 1) joined.set(pair.lines.join(' '), pair.lines);
+    }
+    for (const run of runs) {
+      if (run.aliased.size > 0) addressLines = true;
+      const [lane] = run.failing;
+      const seen = lane === undefined ? undefined : run.seen.get(lane);
+      if (lane === undefined || !seen || run.failing.size < 4) continue;
+      const size = chipSize(index, lane);
+      const shapes = shapesThatFit(seen, size, run.whole);
+      if (shapes?.length === 1 && shapes[0] === 'block' && fixedBits(seen, size.words).length > 0) addressLines = true;
+    }
+  }
+  return addressLines || joined.size > 0 ? { addressLines, joinedLines: [...joined.values()] } : noHints;
+}

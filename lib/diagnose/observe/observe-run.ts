@@ -1,0 +1,172 @@
+import type { Run } from '@/shared';
+import type { Lane } from '../../brand';
+import type { LayoutIndex } from '../../layout/layout-index';
+import { segmentsOf } from '../../layout/segments';
+import { emptySeen, type LaneSeen } from '../../readings/tally';
+import type { RunObservation } from './observations';
+import type { Choice, Piece } from './piece';
+
+interface Chosen {
+  readonly piece: Piece;
+  readonly choice: Choice;
+}
+
+const nothing = new Map<Lane, never>();
+
+/** What one run showed, all its evidence taken together. */
+export function observeRun(index: LayoutIndex, run: Run, chosen: readonly Chosen[]): RunObservation {
+  const failing = new Set<Lane>();
+  const passed = new Set<Lane>();
+  const outright = new Set<Lane>();
+  let listed = false;
+  for (const { piece, choice } of chosen) {
+    for (const lane of choice.failing) failing.add(lane);
+    for (const lane of choice.passed) (piece.passesOutright ? outright : passed).add(lane);
+    const lists = piece.after === 'lists-lanes' || piece.after === 'lists-banks';
+    if (run.complete && lists) listed = true;
+  }
+  if (listed) for (const lane of index.lanes) passed.add(lane as Lane);
+  // Failing in one code and passed by the silence of another is a failure; only an outright pass speaks against it.
+  for (const lane of failing) passed.delete(lane);
+  for (const lane of outright) passed.add(lane);
+  const tallied = chosen.some(({ choice }) => choice.tally !== null || choice.aliased.length > 0);
+  if (!tallied) {
+    return {
+      failing,
+      passed,
+      seen: nothing,
+      power: nothing,
+      failingSegments: nothing,
+      rightSegments: nothing,
+      values: [],
+      aliased: nothing,
+      whole: false,
+    };
+  }
+  return { failing, passed, ...details(index, { chosen, failing, passed, outright, listed }) };
+}
+
+interface Parts {
+  readonly chosen: readonly Chosen[];
+  readonly failing: ReadonlySet<Lane>;
+  readonly passed: ReadonlySet<Lane>;
+  readonly outright: ReadonlySet<Lane>;
+  readonly listed: boolean;
+}
+
+function details(index: LayoutIndex, { chosen, failing, passed, outright, listed }: Parts) {
+  const seen = new Map<Lane, LaneSeen>();
+  const whole = chosen.some(({ choice }) => choice.tally?.whole);
+  const byReadings = new Set<Lane>();
+  const otherwise = new Set<Lane>(outright);
+  const aliased = new Map<Lane, readonly number[]>();
+  for (const { piece, choice } of chosen) {
+    if (choice.aliased.length > 0) for (const lane of choice.failing) aliased.set(lane, choice.aliased);
+    for (const [lane, own] of choice.tally?.lanes ?? []) {
+      seen.set(lane, merged(seen.get(lane), own));
+      byReadings.add(lane);
+    }
+    if (choice.tally === null && !piece.passesOutright) for (const lane of choice.passed) otherwise.add(lane);
+  }
+  return {
+    seen,
+    whole,
+    values: chosen.flatMap(({ choice }) => choice.tally?.values ?? []),
+    aliased,
+    power: listed || whole ? nothing : powers(seen, { passed, outright, byReadings, otherwise }),
+    ...segments(index, seen, { failing, whole: whole || listed }),
+  };
+}
+
+/** A pass is worth what was tried; one polarity shows fewer faults than both, few words fewer than many (estimates). */
+const onePolarity = 0.4;
+const bothPolarities = 0.6;
+const perDoubling = 0.03;
+const mostByWords = 0.3;
+
+function powerOf({ rightZeros, rightOnes }: LaneSeen): number {
+  const base = rightZeros > 0 && rightOnes > 0 ? bothPolarities : onePolarity;
+  return base + Math.min(mostByWords, perDoubling * Math.log2(Math.max(1, rightZeros + rightOnes)));
+}
+
+function powers(
+  seen: ReadonlyMap<Lane, LaneSeen>,
+  sets: {
+    passed: ReadonlySet<Lane>;
+    outright: ReadonlySet<Lane>;
+    byReadings: ReadonlySet<Lane>;
+    otherwise: ReadonlySet<Lane>;
+  },
+): Map<Lane, number> {
+  const power = new Map<Lane, number>();
+  let ones = false;
+  let zeros = false;
+  for (const own of seen.values()) {
+    if (own.rightOnes + own.readsZero > 0) ones = true;
+    if (own.rightZeros + own.readsOne > 0) zeros = true;
+  }
+  for (const lane of sets.passed) {
+    const own = seen.get(lane);
+    if (own && sets.byReadings.has(lane) && !sets.otherwise.has(lane)) power.set(lane, powerOf(own));
+    // "Nothing failed there" beside single readings is as good as the values that those readings tried.
+    else if (sets.outright.has(lane)) power.set(lane, (ones && zeros ? bothPolarities : onePolarity) + mostByWords);
+  }
+  return power;
+}
+
+function merged(before: LaneSeen | undefined, own: LaneSeen): LaneSeen {
+  if (!before) return own;
+  if (before.words === 0) return { ...own, ...added(before, own) };
+  if (own.words === 0) return { ...before, ...added(before, own) };
+  const row = before.row !== null && before.row === own.row ? own.row : null;
+  const column = before.column !== null && before.column === own.column ? own.column : null;
+  return {
+    ...own,
+    ...added(before, own),
+    words: before.words + own.words,
+    outOf: before.outOf === null || own.outOf === null ? null : Math.max(before.outOf, own.outOf),
+    rows: row === null ? Math.max(before.rows + own.rows, 2) * Math.sign(before.rows) : 1,
+    columns: column === null ? Math.max(before.columns + own.columns, 2) * Math.sign(before.columns) : 1,
+    row,
+    column,
+    ones: both(before.ones, own.ones),
+    zeros: both(before.zeros, own.zeros),
+  };
+}
+
+function added(before: LaneSeen, own: LaneSeen) {
+  return {
+    readsOne: before.readsOne + own.readsOne,
+    readsZero: before.readsZero + own.readsZero,
+    rightZeros: before.rightZeros + own.rightZeros,
+    rightOnes: before.rightOnes + own.rightOnes,
+    alone: before.alone + own.alone,
+    failingSegments: before.failingSegments | own.failingSegments,
+    rightSegments: before.rightSegments | own.rightSegments,
+  };
+}
+
+/** Bitwise and of numbers below 2^40, which the operator of the language does not reach. */
+function both(a: number, b: number): number {
+  const high = 2 ** 20;
+  return (Math.floor(a / high) & Math.floor(b / high)) * high + ((a % high) & (b % high));
+}
+
+/** Which chips behind a failing lane hold a failing word, where the bank is several chips deep. */
+function segments(
+  index: LayoutIndex,
+  seen: ReadonlyMap<Lane, LaneSeen>,
+  { failing, whole }: { failing: ReadonlySet<Lane>; whole: boolean },
+) {
+  const failingSegments = new Map<Lane, number>();
+  const rightSegments = new Map<Lane, number>();
+  for (const [lane, own] of seen) {
+    if (!failing.has(lane) || own.failingSegments === 0) continue;
+    const count = segmentsOf(index, lane).length;
+    if (count < 2) continue;
+    failingSegments.set(lane, own.failingSegments);
+    const rest = whole ? 2 ** count - 1 : own.rightSegments;
+    rightSegments.set(lane, rest & ~own.failingSegments);
+  }
+  return { failingSegments, rightSegments };
+}
