@@ -64,3 +64,16 @@ export {
 } from './statistics/socket-rates';
 export { leastGroup, showGroups, type NamedGroup, type ShownGroups } from './statistics/small-groups';
 export { lanesOfMarks, type LanesOfMarks, type MarkedLane } from './screen/lanes-of-marks';
+export {
+  classifySyndrome,
+  highestSyndrome,
+  syndromeOf,
+  validateCode,
+  type CodeProblem,
+  type ErrorCode,
+  type SyndromeMeaning,
+} from './ecc/code';
+export { pictureOfChip, type FailingPicture } from './screen/picture-of-chip';
+export { faultWords, markWords, pictureWords, placeOfMarkWords } from './screen/mark-words';
+export { colourChoices, colourName, fullColour } from './screen/colours';
+export { glassSize, markInMemory, markOnGlass } from './screen/turn';

@@ -26,8 +26,10 @@ export const pictureMark = z.strictObject({
     .max(8192)
     .optional()
     .describe('The span comes again every so many pixels to the right.'),
+  untilX: pixel.optional().describe('The last column that the repeats reach. Left out: up to the edge.'),
   y: span,
   everyY: z.number().int().min(1).max(8192).optional().describe('The span comes again every so many lines down.'),
+  untilY: pixel.optional().describe('The last line that the repeats reach. Left out: down to the edge.'),
 });
 
 /** Faults marked on the picture. */

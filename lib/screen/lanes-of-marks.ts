@@ -2,7 +2,9 @@ import type { Picture, PictureMark } from '@/shared';
 import { lane, type Lane } from '../brand';
 import type { LayoutIndex } from '../layout/layout-index';
 import { listWords } from '../layout/words';
+import { covers, placesOf } from './extent';
 import { lineOf, screenOf, type LinePattern, type Screen } from './screen';
+import { columnsOf, linesOf } from './turn';
 
 /** A lane that the marks of a picture show as failing. */
 export interface MarkedLane {
@@ -32,12 +34,6 @@ interface ReadMark {
 
 /** The bits in which a mark is noted for a pixel, so that several marks on one pixel keep what each says. */
 const noted = { missing: 1, lit: 2, wrong: 4 } as const;
-
-/** True where a span that comes again every so often covers a column or a line. */
-export function covers([from, to]: readonly [number, number], every: number | undefined, at: number): boolean {
-  if (at < from) return false;
-  return every === undefined ? at <= to : (at - from) % every <= to - from;
-}
 
 /**
  * The lanes that the marks of a picture show as failing, and those that it shows to be right. A lit dot is taken to
@@ -157,10 +153,11 @@ function* alikeLines({ screen, plane, marks, problems }: Asked): Generator<Alike
 
 /** Each line of different words with the marks that it carries, a 1 for each; lines that repeat another are joined to it. */
 function markedLines({ map, lineOffsets }: Screen, marks: readonly PictureMark[]): Iterable<[number, string]> {
+  const extents = marks.map(linesOf);
   const firstAt = new Map<number, number>();
   const carried = new Map<number, string>();
   for (let line = 0; line < map.height; line++) {
-    const here = marks.map(({ y, everyY }) => (covers(y, everyY, line) ? '1' : '0')).join('');
+    const here = extents.map((extent) => (covers(extent, line) ? '1' : '0')).join('');
     const first = firstAt.get(lineOffsets[line]!);
     if (first === undefined) {
       firstAt.set(lineOffsets[line]!, line);
@@ -173,20 +170,12 @@ function markedLines({ map, lineOffsets }: Screen, marks: readonly PictureMark[]
   return carried;
 }
 
-function markUp(pixels: Uint8Array, note: number): void {
-  for (let at = 0; at < pixels.length; at++) pixels[at]! |= note;
-}
-
 function markedPixels({ map }: Screen, marks: readonly PictureMark[], marked: string): Uint8Array | null {
   if (!marked.includes('1')) return null;
   const pixels = new Uint8Array(map.width);
-  marks.forEach(({ x, everyX, looks }, at) => {
+  marks.forEach((mark, at) => {
     if (marked[at] !== '1') return;
-    const every = everyX ?? map.width;
-    const wide = every <= x[1] - x[0] + 1 ? map.width : x[1] - x[0] + 1;
-    for (let first = x[0]; first < map.width; first += wide === map.width ? map.width : every) {
-      markUp(pixels.subarray(first, first + wide), noted[looks]);
-    }
+    for (const column of placesOf(columnsOf(mark), map.width)) pixels[column]! |= noted[mark.looks];
   });
   return pixels;
 }

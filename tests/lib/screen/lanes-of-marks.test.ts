@@ -90,8 +90,10 @@ describe('faults marked on the picture', () => {
         planes: fc.constantFrom(['first'], undefined),
         x: span(20),
         everyX: fc.constantFrom(undefined, 1, 3, 8),
+        untilX: fc.constantFrom(undefined, 4, 17),
         y: span(12),
         everyY: fc.constantFrom(undefined, 2, 4, 5),
+        untilY: fc.constantFrom(undefined, 6),
       },
       { requiredKeys: ['looks', 'x', 'y'] },
     ) as fc.Arbitrary<PictureMark>;
@@ -169,7 +171,13 @@ function byEveryPixel(document: LayoutDocument, marks: readonly PictureMark[]) {
   const { width, height, planes } = document.screenMap!;
   const shown = new Map<number, Set<number>>();
   const bad = new Map<number, Set<number>>();
-  const inSpan = ([from, to]: [number, number], every: number | undefined, at: number) => {
+  const inSpan = (of: { span: [number, number]; every?: number; until?: number }, at: number) => {
+    const {
+      span: [from, to],
+      every,
+      until,
+    } = of;
+    if (every !== undefined && until !== undefined && at > until) return false;
     for (let shift = 0; shift <= at; shift += every ?? at + 1) if (at - shift >= from && at - shift <= to) return true;
     return false;
   };
@@ -183,7 +191,9 @@ function byEveryPixel(document: LayoutDocument, marks: readonly PictureMark[]) {
         add(shown, lane, word);
         const covered = marks.some(
           (each) =>
-            (each.planes?.includes(name) ?? true) && inSpan(each.x, each.everyX, x) && inSpan(each.y, each.everyY, y),
+            (each.planes?.includes(name) ?? true) &&
+            inSpan({ span: each.x, every: each.everyX, until: each.untilX }, x) &&
+            inSpan({ span: each.y, every: each.everyY, until: each.untilY }, y),
         );
         if (covered) add(bad, lane, word);
       }
