@@ -2,12 +2,13 @@ import { useLocalSearchParams, useRouter } from 'expo-router';
 import { useCallback, useEffect, useMemo, useRef } from 'react';
 import { rememberLookup } from '@/components/features/lookup/device-boards';
 import type { Run } from '@/shared';
-import { longestLink, workspaceLink, writeLink } from './workspace-link';
+import { keptEvidence, workspaceLink } from './link/kept-evidence';
+import { fitLink, leftBehind, longestLink } from './link/workspace-link';
 import { readStep, writeStep, type Step } from './workspace-step';
 
 /** The part of the link that says what is being typed. */
 export interface Draft {
-  /** The tab in which it is typed: the id of a report format, or one of the two that every board has. */
+  /** The tab in which it is typed: see entry/entry-tabs.ts. */
   readonly tab: string | null;
   readonly text: string;
 }
@@ -20,14 +21,16 @@ export interface Workspace {
   readonly problems: readonly string[];
   readonly step: Step;
   readonly draft: Draft;
+  /** Names of the evidence that is too large for the link and stays on this device. */
+  readonly leftBehind: readonly string[];
   /** How the sketch is turned, as text of the link. */
   readonly view: string | null;
   /** Changes whenever something other than what is being typed has changed. */
   readonly revision: string;
   /** Takes new runs over and goes to a step. A place of its own in the browser's history. False: the link would be too long. */
-  readonly commit: (runs: readonly Run[], step?: Step) => boolean;
-  /** Goes to a step without changing anything. */
-  readonly goTo: (step: Step) => void;
+  readonly commit: (runs: readonly Run[], step?: Step, draft?: Draft) => boolean;
+  /** Goes to a step without changing anything. `draft`: what is typed there at first. */
+  readonly goTo: (step: Step, draft?: Draft) => void;
   /** Keeps what is being typed. No place of its own in the history. */
   readonly keepDraft: (draft: Draft) => void;
   readonly keepView: (view: string | null) => void;
@@ -55,13 +58,20 @@ export function useWorkspace(): Workspace {
   }, [slug, r, problems]);
 
   const go = useCallback(
-    (next: { runs: readonly Run[]; step: Step }) => {
+    (next: { runs: readonly Run[]; step: Step; draft?: Draft }) => {
       clearTimeout(timer.current);
-      const link = writeLink(next.runs);
+      const link = fitLink(next.runs, keptEvidence);
       if (link.length > longestLink) return false;
       router.push({
         pathname: '/boards/[slug]/diagnose',
-        params: withoutEmpty({ slug, r: link, e: writeStep(next.step, next.runs), f, v }),
+        params: withoutEmpty({
+          slug,
+          r: link,
+          e: writeStep(next.step, next.runs),
+          f: next.draft === undefined ? f : (next.draft.tab ?? undefined),
+          d: next.draft?.text,
+          v,
+        }),
       });
       // The same page with another step begins at its top.
       requestAnimationFrame(() => window.scrollTo(0, 0));
@@ -69,8 +79,11 @@ export function useWorkspace(): Workspace {
     },
     [router, slug, f, v],
   );
-  const commit = useCallback((next: readonly Run[], to: Step = { at: 'answer' }) => go({ runs: next, step: to }), [go]);
-  const goTo = useCallback((to: Step) => void go({ runs, step: to }), [go, runs]);
+  const commit = useCallback(
+    (next: readonly Run[], to: Step = { at: 'answer' }, begun?: Draft) => go({ runs: next, step: to, draft: begun }),
+    [go],
+  );
+  const goTo = useCallback((to: Step, begun?: Draft) => void go({ runs, step: to, draft: begun }), [go, runs]);
   const keepDraft = useCallback(
     (draft: Draft) => {
       clearTimeout(timer.current);
@@ -87,12 +100,14 @@ export function useWorkspace(): Workspace {
   );
   const keepView = useCallback((view: string | null) => router.setParams({ v: view ?? undefined }), [router]);
   const draft = useMemo(() => ({ tab: f ?? null, text: d }), [f, d]);
+  const left = useMemo(() => leftBehind(r), [r]);
   return {
     slug,
     runs,
     problems,
     step,
     draft,
+    leftBehind: left,
     view: v ?? null,
     revision: `${r}|${e}`,
     commit,

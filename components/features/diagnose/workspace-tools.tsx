@@ -14,7 +14,7 @@ export function WorkspaceTools({ model, onPrint }: { model: WorkspaceModel; onPr
   const { starred } = useDeviceBoards();
   const { slug } = workspace;
   const star = starred.some((one) => one.slug === slug);
-  const share = useShareLink(`${board.name}, rev ${board.revision}: ${diagnosis.headline}`);
+  const share = useShareLink(`${board.name}, rev ${board.revision}: ${diagnosis.headline}`, workspace.leftBehind);
   if (workspace.runs.length === 0 || workspace.step.at !== 'answer') return null;
   return (
     <View style={styles.tools}>

@@ -1,7 +1,7 @@
 import type { Evidence, LaneName } from '@/shared';
 import type { Bench } from '../bench';
 import { laneName, lanesOf } from '../marks';
-import { readLink, writeLink } from '../workspace-link';
+import { readLink, writeLink } from '../link/workspace-link';
 
 /** Evidence that names failing bits outright. */
 export type LanesEvidence = Extract<Evidence, { kind: 'lanes' }>;
