@@ -1,7 +1,9 @@
 import { lanesWords, type BitIndex, type LayoutIndex } from '@/lib';
-import { sentenceCase } from '@/lib/layout/words';
-import type { Change, Evidence, LaneName, Run } from '@/shared';
+import { addressWords, listWords, sentenceCase } from '@/lib/layout/words';
+import type { Change, Evidence, LaneName, LogEvidence, PlainEvidence, Reading, Readings, Run } from '@/shared';
 import type { Bench } from './bench';
+import { signWords } from './sign-words';
+import { voltWords } from './volt-words';
 
 /** A piece of evidence as it is shown in a list: what stands large, and what explains it. */
 export interface EvidenceWords {
@@ -12,15 +14,20 @@ export interface EvidenceWords {
 }
 
 /** Evidence in words. */
-export function evidenceWords(seen: Evidence, { index, formatName }: Bench): EvidenceWords {
+export function evidenceWords(seen: Evidence, bench: Bench): EvidenceWords {
+  if (seen.kind !== 'either') return plainWords(seen, bench);
+  const [first] = seen.ways;
+  if (first === undefined) return { text: 'Nothing', note: '', code: false };
+  const words = plainWords(first.evidence, bench);
+  return { ...words, note: `${words.note}; either ${seen.ways.map(({ takes }) => takes).join(', or ')}` };
+}
+
+function plainWords(seen: PlainEvidence, { index, formatName }: Bench): EvidenceWords {
   switch (seen.kind) {
     case 'code': {
       const name = formatName(seen.format) ?? 'a format that this board does not have';
-      return {
-        text: seen.text,
-        note: /^.[a-z ]/.test(name) ? name.charAt(0).toLowerCase() + name.slice(1) : name,
-        code: true,
-      };
+      const note = /^.[a-z ]/.test(name) ? name.charAt(0).toLowerCase() + name.slice(1) : name;
+      return { text: seen.text, note: `${note}${doubtWords(seen.doubts)}`, code: true };
     }
     case 'lanes':
       return { text: lanesOrNone(index, seen.failing), note: passedWords(seen.passed), code: false };
@@ -36,7 +43,75 @@ export function evidenceWords(seen: Evidence, { index, formatName }: Bench): Evi
         note: 'no failure reported',
         code: false,
       };
+    case 'readings':
+      return readingsWords(index, seen);
+    case 'log':
+      return { text: seen.name, note: logNote(seen), code: false };
+    case 'picture':
+      return {
+        text: seen.marks.length === 1 ? 'One mark on the picture' : `${seen.marks.length} marks on the picture`,
+        note: seen.rest === 'right' ? 'the rest of it is right' : 'the rest of it was not looked at',
+        code: false,
+      };
+    case 'sign':
+      return {
+        text: `${signWords[seen.sign].label}${seen.socket === undefined ? '' : `: ${seen.socket}`}`,
+        note: 'a sign',
+        code: false,
+      };
+    case 'measurement':
+      return { text: `${voltWords(seen.volts)} at pin ${seen.pin} of ${seen.socket}`, note: 'measured', code: false };
+    case 'alias': {
+      const [one, other] = seen.addresses.map((each) => addressWords(index.document.addressMap, each));
+      return {
+        text: `${one} = ${other}`,
+        note: `two addresses of one cell, ${seen.bits === undefined ? 'in all bits' : `in bit ${listWords(seen.bits.map(String))}`}`,
+        code: true,
+      };
+    }
   }
+}
+
+function doubtWords(doubts: Extract<Evidence, { kind: 'code' }>['doubts'] = []): string {
+  const open = doubts.map((doubt) => (doubt === 'first' ? 'whether it counts from 0 or 1' : 'which end is bit 0'));
+  return open.length === 0 ? '' : `; not known: ${[...new Set(open)].join(', ')}`;
+}
+
+const radixes = { hexadecimal: 16, octal: 8, decimal: 10 } as const;
+
+/** "4C1A FF F7": a reading in the notation of the board, in the order address, written, read. */
+export function readingText({ document: { addressMap } }: LayoutIndex, line: Reading): string {
+  const value = (each: number) => each.toString(radixes[addressMap.notation]).toUpperCase();
+  const at = addressWords(addressMap, line.address);
+  const run = line.to === undefined ? at : `${at} to ${addressWords(addressMap, line.to)}`;
+  if (line.read === undefined) return `${run} mask ${value(line.mask ?? 0)}`;
+  return `${run} ${value(line.written ?? 0)} ${value(line.read)}`;
+}
+
+function readingsWords(index: LayoutIndex, { lines, rest, waited }: Readings): EvidenceWords {
+  const [first] = lines;
+  const also = [
+    rest === 'passed' ? 'all else passed' : '',
+    waited === undefined ? '' : `read after ${waited} s`,
+  ].filter((words) => words !== '');
+  const what = first?.read === undefined ? 'address, failing bits' : 'address, written, read';
+  const note = lines.length === 1 ? what : `${what}, and ${lines.length - 1} more`;
+  return {
+    text: first === undefined ? 'No reading' : readingText(index, first),
+    note: [note, ...also].join('; '),
+    code: true,
+  };
+}
+
+const counted = (count: number) => count.toLocaleString('en').replaceAll(',', '\u202f');
+
+function logNote({ lines, readings, unread, outside, rest }: LogEvidence): string {
+  return [
+    `log, ${counted(readings)} readings in ${counted(lines)} lines`,
+    ...(unread > 0 ? [`${counted(unread)} lines not read`] : []),
+    ...(outside > 0 ? [`${counted(outside)} outside the memory`] : []),
+    ...(rest === 'passed' ? ['all else passed'] : []),
+  ].join('; ');
 }
 
 /** "Bits 4 to 7 of every bank": failing lanes. A lane that the board does not have is left to the answer to refuse. */
@@ -64,10 +139,10 @@ export function changeWords(done: Change): string {
   switch (done.kind) {
     case 'swap':
       return `${done.sockets[0]} and ${done.sockets[1]} swapped`;
-    case 'replace':
-      return done.with === 'known-good'
-        ? `known good chip fitted in ${done.socket}`
-        : `another, untested chip fitted in ${done.socket}`;
+    case 'replace': {
+      const fitted = done.with === 'known-good' ? 'known good chip' : 'another, untested chip';
+      return `${fitted}${done.family === undefined ? '' : ` of family ${done.family}`} fitted in ${done.socket}`;
+    }
     case 'reseat':
       return `${done.socket} reseated`;
   }

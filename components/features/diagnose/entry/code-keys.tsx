@@ -3,19 +3,26 @@ import { makeStyles, sticky } from '@/components/theme';
 import { Button } from '@/components/ui/button';
 import { Keypad } from './keypad';
 import { erase, press } from './typed-code';
-import { noBits } from './failing-bits';
+import { aliasTab, signTab, supplyTab } from './entry-tabs';
 import type { Entry } from './use-entry';
+
+/** What the way on is called where it leads to no chip by itself. */
+const ways: Readonly<Record<string, string>> = {
+  [signTab]: 'Use this sign',
+  [supplyTab]: 'Use this value',
+  [aliasTab]: 'Use this pair',
+};
 
 /** The keys under the thumb: those of the format, erase, and the way to the answer. */
 export function CodeKeys({ entry, atFoot }: { entry: Entry; atFoot: boolean }) {
   const styles = useStyles();
-  const { format, code, ready } = entry;
+  const { compiled, code, ready, tab } = entry;
   const listing = entry.lists && !entry.editing;
-  const empty = code === null ? entry.bits.failing.length === 0 : code.text === '';
+  const empty = entry.text === '';
   return (
     <View style={[styles.keys, atFoot && styles.atFoot]}>
-      {format !== null && code !== null ? (
-        <Keypad keys={code.prefix.keys} onKey={(key) => entry.setCode(press(format.compiled, code.text, key))} />
+      {compiled !== null && code !== null ? (
+        <Keypad keys={code.prefix.keys} onKey={(key) => entry.setCode(press(compiled, code.text, key))} />
       ) : null}
       <View style={styles.row}>
         <View style={styles.cell}>
@@ -24,21 +31,26 @@ export function CodeKeys({ entry, atFoot }: { entry: Entry; atFoot: boolean }) {
             label={code === null ? 'Clear' : 'Erase'}
             disabled={empty}
             onPress={() => {
-              if (format !== null && code !== null) entry.setCode(erase(format.compiled, code.text));
-              else entry.setBits(noBits);
+              if (compiled !== null && code !== null) entry.setCode(erase(compiled, code.text));
+              else entry.setText('');
             }}
           />
         </View>
         {listing ? (
           <View style={styles.cell}>
-            <Button wide label="Next line" disabled={ready === null} onPress={() => entry.submit('more')} />
+            <Button
+              wide
+              label={tab === supplyTab ? 'Next pin' : 'Next line'}
+              disabled={ready === null}
+              onPress={() => entry.submit('more')}
+            />
           </View>
         ) : null}
         <View style={styles.cell}>
           <Button
             wide
             kind="primary"
-            label={entry.editing ? 'Keep' : 'Find the chip'}
+            label={entry.editing ? 'Keep' : (ways[tab] ?? 'Find the chip')}
             disabled={ready === null}
             onPress={() => entry.submit('answer')}
           />

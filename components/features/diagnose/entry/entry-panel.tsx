@@ -1,4 +1,4 @@
-import { useId, useState, type ReactNode } from 'react';
+import type { ReactNode } from 'react';
 import { ScrollView, View } from 'react-native';
 import { makeStyles } from '@/components/theme';
 import { Button } from '@/components/ui/button';
@@ -8,14 +8,11 @@ import type { WorkspaceModel } from '../use-workspace-model';
 import { runTitle } from '../evidence-words';
 import type { Workspace } from '../use-workspace';
 import { awaitsReport, runInHand } from '../workspace-runs';
-import { BitsEntry } from './bits-entry';
-import { CodeDisplay } from './code-display';
+import { CodeEntry } from './code-entry';
 import { CodeKeys } from './code-keys';
 import { EnteredList } from './entered-list';
-import { NotSure } from './not-sure';
-import { PassEntry } from './pass-entry';
-import { ReadingNote, saysMore } from './reading-note';
-import { bitsTab, passTab } from './use-entry';
+import { isOther, otherTab, stripTabs } from './entry-tabs';
+import { hasOwnWay, KindEntry } from './kind-entry';
 
 type EntryPanelProps = {
   model: WorkspaceModel;
@@ -25,20 +22,17 @@ type EntryPanelProps = {
   keysAtFoot?: boolean;
 };
 
-/** What did the board report? The format, the code, and the keys that the format can take. */
+/** What did the board report? The format and its code with the keys that it can take, or another kind of evidence. */
 export function EntryPanel({ model, between, keysAtFoot = false }: EntryPanelProps) {
   const styles = useStyles();
   const { bench, workspace, entry } = model;
-  const noteId = useId();
-  const [unsure, setUnsure] = useState(false);
-  const { format, code } = entry;
-  const tabs = [
-    ...bench.formats.map(({ definition }) => ({ value: definition.id, label: definition.name })),
-    { value: bitsTab, label: 'Failing bits' },
-    { value: passTab, label: 'All passed' },
-  ];
   const choice = (
-    <SegmentedControl label="How it was reported" options={tabs} value={entry.tab} onChange={entry.chooseTab} />
+    <SegmentedControl
+      label="How it was reported"
+      options={stripTabs(bench)}
+      value={isOther(bench, entry.tab) ? otherTab : entry.tab}
+      onChange={entry.chooseTab}
+    />
   );
   return (
     <View style={styles.panel}>
@@ -51,38 +45,13 @@ export function EntryPanel({ model, between, keysAtFoot = false }: EntryPanelPro
         ) : (
           choice
         )}
-        {format !== null && code !== null ? (
-          <View>
-            <CodeDisplay
-              format={format.compiled}
-              code={code}
-              onChange={entry.setCode}
-              onSubmit={() => entry.submit(entry.lists && !entry.editing ? 'more' : 'answer')}
-              describedBy={noteId}
-            />
-            <View style={styles.expects}>
-              <View style={styles.words}>
-                <ReadingNote id={noteId} bench={bench} entry={entry} />
-                {saysMore(entry) ? null : (
-                  <Text variant="small" tone="soft">
-                    {code.prefix.expects}
-                  </Text>
-                )}
-              </View>
-              <Button kind="quiet" label="Not sure?" aria-haspopup="dialog" onPress={() => setUnsure(true)} />
-            </View>
-            <NotSure open={unsure} onClose={() => setUnsure(false)} format={format} entry={entry} />
-          </View>
-        ) : null}
-        {entry.tab === bitsTab ? (
-          <BitsEntry document={bench.document} bits={entry.bits} onChange={entry.setBits} />
-        ) : null}
-        {entry.tab === passTab ? <PassEntry document={bench.document} onPass={entry.pass} /> : null}
+        <CodeEntry bench={bench} entry={entry} />
+        <KindEntry bench={bench} entry={entry} />
         <EnteredList model={model} />
         {workspace.runs.length > 0 ? <EditActions model={model} /> : null}
       </View>
       {between}
-      {entry.tab === passTab ? null : <CodeKeys entry={entry} atFoot={keysAtFoot} />}
+      {hasOwnWay(entry.tab) ? null : <CodeKeys entry={entry} atFoot={keysAtFoot} />}
     </View>
   );
 }
@@ -129,7 +98,5 @@ const useStyles = makeStyles((t) => ({
   panel: { gap: t.space.lg, flexGrow: 1 },
   top: { gap: t.space.md },
   tabs: { paddingVertical: t.space.hair },
-  expects: { flexDirection: 'row', alignItems: 'center', justifyContent: 'space-between', gap: t.space.sm },
-  words: { flexShrink: 1, paddingVertical: t.space.xs },
   row: { flexDirection: 'row', flexWrap: 'wrap', gap: t.space.sm },
 }));

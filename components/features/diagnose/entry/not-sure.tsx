@@ -1,13 +1,17 @@
+import { useMemo } from 'react';
 import { View } from 'react-native';
 import { makeStyles } from '@/components/theme';
 import { Button } from '@/components/ui/button';
+import { Chip } from '@/components/ui/chip';
 import { Dialog } from '@/components/ui/dialog';
 import { Field } from '@/components/ui/field';
 import { Text } from '@/components/ui/text';
-import type { BenchFormat } from '../bench';
-import { bitsTab, type Entry } from './use-entry';
+import type { Bench, BenchFormat } from '../bench';
+import { doubtsOf, doubtWords, type Doubt } from './doubts';
+import { bitsTab, otherTab } from './entry-tabs';
+import type { Entry } from './use-entry';
 
-type NotSureProps = { open: boolean; onClose: () => void; format: BenchFormat; entry: Entry };
+type NotSureProps = { open: boolean; onClose: () => void; bench: Bench; format: BenchFormat; entry: Entry };
 
 const after = {
   stops: 'The test stops at the first failure, so what comes after it was not tested.',
@@ -16,7 +20,7 @@ const after = {
 } as const;
 
 /** Help with a code: where it is seen, what it looks like, what nobody knows of it, and the ways round it. */
-export function NotSure({ open, onClose, format, entry }: NotSureProps) {
+export function NotSure({ open, onClose, bench, format, entry }: NotSureProps) {
   const styles = useStyles();
   const { definition } = format;
   return (
@@ -36,6 +40,7 @@ export function NotSure({ open, onClose, format, entry }: NotSureProps) {
           </Text>
         </View>
       )}
+      {open ? <Doubts {...{ bench, format, entry }} /> : null}
       <View style={styles.part}>
         <Text variant="strong">It is a long code, or you have a keyboard</Text>
         <Field
@@ -53,15 +58,53 @@ export function NotSure({ open, onClose, format, entry }: NotSureProps) {
         <Text variant="small" tone="soft">
           If you know which bits fail, from a scope or from another test, mark them instead.
         </Text>
-        <Button
-          label="Mark failing bits"
-          onPress={() => {
-            entry.chooseTab(bitsTab);
-            onClose();
-          }}
-        />
+        <View style={styles.row}>
+          <Button
+            label="Mark failing bits"
+            onPress={() => {
+              entry.chooseTab(bitsTab);
+              onClose();
+            }}
+          />
+          <Button
+            label="Say something else"
+            onPress={() => {
+              entry.chooseTab(otherTab);
+              onClose();
+            }}
+          />
+        </View>
       </View>
     </Dialog>
+  );
+}
+
+/** What the layout takes for granted of this machine, to be left open where the technician does not. */
+function Doubts({ bench, format: { definition }, entry }: Pick<NotSureProps, 'bench' | 'format' | 'entry'>) {
+  const styles = useStyles();
+  const offered = useMemo(() => doubtsOf(definition, bench.index), [definition, bench]);
+  const toggle = (doubt: Doubt) =>
+    entry.setDoubts(
+      entry.doubts.includes(doubt) ? entry.doubts.filter((one) => one !== doubt) : [...entry.doubts, doubt],
+    );
+  if (offered.length === 0) return null;
+  return (
+    <View style={styles.part}>
+      <Text variant="strong">Not sure how this machine counts?</Text>
+      <Text variant="small" tone="soft">
+        The layout says how. If yours may differ, leave it open: every meaning is then weighed.
+      </Text>
+      <View role="group" aria-label="Left open" style={styles.row}>
+        {offered.map((doubt) => (
+          <Chip
+            key={doubt}
+            label={doubtWords[doubt]}
+            selected={entry.doubts.includes(doubt)}
+            onPress={() => toggle(doubt)}
+          />
+        ))}
+      </View>
+    </View>
   );
 }
 
@@ -75,4 +118,7 @@ function Part({ title, text }: { title: string; text: string }) {
   );
 }
 
-const useStyles = makeStyles((t) => ({ part: { gap: t.space.xs, alignItems: 'stretch' } }));
+const useStyles = makeStyles((t) => ({
+  part: { gap: t.space.xs, alignItems: 'stretch' },
+  row: { flexDirection: 'row', flexWrap: 'wrap', gap: t.space.sm },
+}));

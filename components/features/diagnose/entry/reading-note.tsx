@@ -23,12 +23,12 @@ export function saysMore({ code, refused }: Entry): boolean {
 }
 
 function Words({ bench, entry }: { bench: Bench; entry: Entry }) {
-  const { code, format, refused } = entry;
+  const { code, compiled, refused } = entry;
   if (refused !== null) return <Problem text={refused} />;
-  if (code === null || format === null || code.text === '') return null;
+  if (code === null || compiled === null || code.text === '') return null;
   if (code.prefix.reason !== null) return <Problem text={code.prefix.reason} />;
   if (!code.prefix.complete) return null;
-  const read = format.compiled.read(code.text + code.ghost);
+  const read = compiled.read(code.text + code.ghost);
   if (!read.ok) return <Problem text={read.reason} />;
   const meanings = read.readings.map(({ failing, takes }) => ({
     words: sentenceCase(
