@@ -2,15 +2,19 @@ import { useCallback, useEffect, useMemo, useState } from 'react';
 import type { PickTarget, SketchMarks, SketchView } from '@/components/board/sketch-types';
 import { useAnnouncer } from '@/components/ui/announcer';
 import { diagnose } from '@/lib';
-import type { Change, Diagnosis, Run } from '@/shared';
+import type { Change, Diagnosis, NextCheck, Run } from '@/shared';
+import { outcomeEvidence } from './answer/outcome-evidence';
+import { settle } from './answer/settle';
 import type { Bench } from './bench';
 import { toggleSocket } from './entry/failing-bits';
-import { bitsTab, useEntry, type Entry } from './entry/use-entry';
+import { bitsTab, signTab, supplyTab } from './entry/entry-tabs';
+import { readSign, readSupply, writeSign, writeSupply } from './entry/small-drafts';
+import { useEntry, type Entry } from './entry/use-entry';
 import { answerMarks, chosenMarks, possibleMarks } from './marks';
 import { changesOf, chosenSockets, noChange, pickSocket, type ChangeDraft } from './runs/change-draft';
 import { readView, writeView } from './sketch-view-link';
 import type { Workspace } from './use-workspace';
-import { beginRun, dropRun, setComplete } from './workspace-runs';
+import { awaitsReport, beginRun, dropRun, putEvidence, setComplete } from './workspace-runs';
 
 /** Everything that the columns of the workspace show and do. */
 export interface WorkspaceModel {
@@ -31,6 +35,13 @@ export interface WorkspaceModel {
   readonly beginChange: (draft?: ChangeDraft) => void;
   readonly finishChange: () => void;
   readonly begin: (changes: readonly Change[]) => void;
+  /** Opens the entry of one kind of evidence, with what is known of it already. */
+  readonly enter: (tab: string, text?: string) => void;
+  /** A check was made that changed this, and the board reported one of the outcomes that were foretold. */
+  readonly saw: (changes: readonly Change[], outcome: NextCheck['outcomes'][number]) => void;
+  /** The runs with an answer to an open question taken for true; null where it changes nothing. */
+  readonly settled: (answer: string) => Run[] | null;
+  readonly settleBy: (answer: string) => void;
   readonly takeBack: (run: number) => void;
   readonly markWhole: (run: number, complete: boolean) => void;
 }
@@ -64,11 +75,17 @@ export function useWorkspaceModel(bench: Bench, workspace: Workspace): Workspace
     },
     [runs, commit, toast],
   );
-  const begin = (changes: readonly Change[]) => {
-    const next =
-      changes.length === 0 ? [...runs, { changes: [], evidence: [], complete: true }] : beginRun(runs, changes);
-    commit(next, { at: 'entry', place: null });
+  const begin = (changes: readonly Change[]) => commit(begun(runs, changes), { at: 'entry', place: null });
+  const saw: WorkspaceModel['saw'] = (changes, outcome) => {
+    const seen = outcomeEvidence(bench, runs, outcome);
+    // What is told in words cannot be entered by itself: the report is typed.
+    if (seen.length === 0) return void begin(changes);
+    takeOver(
+      seen.reduce((all, one) => putEvidence(all, one, null), begun(runs, changes)),
+      `Entered: ${outcome.sees}.`,
+    );
   };
+  const settled = (answer: string) => settle(bench, runs, answer);
   return {
     bench,
     workspace,
@@ -81,7 +98,7 @@ export function useWorkspaceModel(bench: Bench, workspace: Workspace): Workspace
     onPick: ({ kind, label }) => {
       if (kind !== 'socket') return;
       if (changing) setChange(pickSocket(change, label));
-      else if (typing && entry.tab === bitsTab) entry.setBits(toggleSocket(bench, entry.bits, label));
+      else if (typing && takesSocket(bench, entry, label)) return;
       else open(label);
     },
     opened,
@@ -98,9 +115,39 @@ export function useWorkspaceModel(bench: Bench, workspace: Workspace): Workspace
       setChange(noChange);
     },
     begin,
+    saw,
+    settled,
+    settleBy: (answer) => {
+      const next = settled(answer);
+      if (next !== null) takeOver(next, `Taken for true: ${answer}.`);
+    },
+    enter: (tab, text = '') => workspace.goTo({ at: 'entry', place: null }, { tab, text }),
     takeBack: (run) => takeOver(dropRun(runs, run), `Run ${run + 1} was taken back.`),
     markWhole: (run, complete) => void commit(setComplete(runs, { run, complete }), step),
   };
+}
+
+/** The runs with a new one begun after something was done; one that still waits goes on. */
+function begun(runs: readonly Run[], changes: readonly Change[]): Run[] {
+  if (changes.length > 0) return beginRun(runs, changes);
+  return awaitsReport(runs) ? [...runs] : [...runs, { changes: [], evidence: [], complete: true }];
+}
+
+/** Gives a socket that was tapped to what is being entered; false where that has no use for one. */
+function takesSocket(bench: Bench, { tab, text, bits, setBits, setText }: Entry, socket: string): boolean {
+  switch (tab) {
+    case bitsTab:
+      setBits(toggleSocket(bench, bits, socket));
+      return true;
+    case signTab:
+      setText(writeSign({ ...readSign(text), socket }));
+      return true;
+    case supplyTab:
+      setText(writeSupply({ ...readSupply(text), socket }));
+      return true;
+    default:
+      return false;
+  }
 }
 
 type Picking = { changing: boolean; change: ChangeDraft; opened: string | null };

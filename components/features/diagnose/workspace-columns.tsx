@@ -8,6 +8,7 @@ import { AnswerCard } from './answer/answer-card';
 import { Cautions } from './answer/cautions';
 import { Expectations } from './answer/expectations';
 import { NextChecks } from './answer/next-checks';
+import { Questions } from './answer/questions';
 import { SuspectList } from './answer/suspect-list';
 import { EntryPanel } from './entry/entry-panel';
 import { ReportStrip } from './runs/report-strip';
@@ -60,7 +61,7 @@ function OneColumn({ model, onPrint }: ColumnsProps) {
   return (
     <View style={styles.answer}>
       <ReportStrip model={model} />
-      <AnswerCard diagnosis={model.diagnosis} />
+      <AnswerCard bench={model.bench} runs={model.workspace.runs} diagnosis={model.diagnosis} />
       <View style={styles.column}>
         <Sketch model={model} compact={!tools} />
         <Button
@@ -70,6 +71,7 @@ function OneColumn({ model, onPrint }: ColumnsProps) {
           onPress={() => setTools(!tools)}
           style={styles.start}
         />
+        <Open model={model} />
         <Checks model={model} />
         <SuspectList diagnosis={model.diagnosis} onShow={model.open} />
         <Runs model={model} />
@@ -103,7 +105,8 @@ function SideBySide({ model, onPrint }: ColumnsProps) {
             As it stands before the report of this run:
           </Text>
         ) : null}
-        <AnswerCard diagnosis={model.diagnosis} />
+        <AnswerCard bench={model.bench} runs={model.workspace.runs} diagnosis={model.diagnosis} />
+        <Open model={model} />
         <Checks model={model} />
         <SuspectList diagnosis={model.diagnosis} onShow={model.open} />
         <Cautions cautions={model.diagnosis.cautions} />
@@ -161,10 +164,29 @@ function Sketch({ model, compact = false }: { model: WorkspaceModel; compact?: b
 }
 
 function Checks({ model }: { model: WorkspaceModel }) {
-  const { bench, workspace } = model;
+  const { bench, workspace, saw } = model;
   if (workspace.step.at === 'change') return null;
-  if (awaitsReport(workspace.runs)) return <Expectations bench={bench} runs={workspace.runs} />;
-  return <NextChecks diagnosis={model.diagnosis} onDone={model.begin} onOther={() => model.beginChange()} />;
+  if (awaitsReport(workspace.runs)) {
+    return <Expectations bench={bench} runs={workspace.runs} onSaw={(outcome) => saw([], outcome)} />;
+  }
+  return (
+    <NextChecks
+      diagnosis={model.diagnosis}
+      onDone={(done, outcome) => {
+        if ('enter' in done) model.enter(done.enter.tab, done.enter.text);
+        else if (outcome === undefined) model.begin(done.changes);
+        else saw(done.changes, outcome);
+      }}
+      onOther={() => model.beginChange()}
+    />
+  );
+}
+
+/** What is open in the evidence, and the answers to choose from. */
+function Open({ model: { diagnosis, settled, settleBy } }: { model: WorkspaceModel }) {
+  return (
+    <Questions questions={diagnosis.questions} settles={(answer) => settled(answer) !== null} onAnswer={settleBy} />
+  );
 }
 
 function ChangeStep({ model }: { model: WorkspaceModel }) {

@@ -2,11 +2,15 @@ import { View } from 'react-native';
 import { makeStyles } from '@/components/theme';
 import { Sheet, type SheetProps } from '@/components/ui/sheet';
 import { Text } from '@/components/ui/text';
-import type { Diagnosis } from '@/shared';
+import type { Diagnosis, Run } from '@/shared';
+import type { Bench } from '../bench';
 import { GroupMembers } from './group-members';
 import { Headline } from './headline';
+import { measuredSupplies } from './measured';
+import { Signatures } from './signatures';
 
 const bars: Record<Diagnosis['outcome'], SheetProps['bar']> = {
+  supply: 'mark',
   place: 'pencil',
   group: 'pencil',
   shared: 'mark',
@@ -17,6 +21,7 @@ const bars: Record<Diagnosis['outcome'], SheetProps['bar']> = {
 
 /** Words over the headline that say what kind of answer it is, where the headline alone may be misread. */
 const kinds: Partial<Record<Diagnosis['outcome'], string>> = {
+  supply: 'The supply comes before any chip',
   group: 'Cannot be told apart yet',
   shared: 'A part that many chips share',
   unexplained: 'No cause fits',
@@ -28,8 +33,10 @@ const unbroken = (text: string) => text.replace(/ %/g, '\u00a0%');
 /** Sentences of an answer that stand at once; the rest follows under it. */
 const atOnce = 4;
 
+type AnswerCardProps = { bench: Bench; runs: readonly Run[]; diagnosis: Diagnosis };
+
 /** The answer: what to do, how sure that is, and why. */
-export function AnswerCard({ diagnosis }: { diagnosis: Diagnosis }) {
+export function AnswerCard({ bench, runs, diagnosis }: AnswerCardProps) {
   const styles = useStyles();
   const kind = kinds[diagnosis.outcome];
   const first = unbroken(diagnosis.sentences.slice(0, atOnce).join(' '));
@@ -52,6 +59,8 @@ export function AnswerCard({ diagnosis }: { diagnosis: Diagnosis }) {
           ))}
         </View>
       )}
+      <Signatures index={bench.index} diagnosis={diagnosis} />
+      {diagnosis.outcome === 'supply' ? <Supplies bench={bench} runs={runs} /> : null}
       <Unread diagnosis={diagnosis} />
       {diagnosis.groups.map((group) => (
         <GroupMembers
@@ -72,6 +81,25 @@ export function AnswerCard({ diagnosis }: { diagnosis: Diagnosis }) {
         </Text>
       )}
     </Sheet>
+  );
+}
+
+/** What was measured, where the supply is the answer: the pin and the value stand large. */
+function Supplies({ bench, runs }: Pick<AnswerCardProps, 'bench' | 'runs'>) {
+  const styles = useStyles();
+  const measured = measuredSupplies(bench, runs);
+  if (measured.length === 0) return null;
+  return (
+    <View role="list" aria-label="Measured supplies" style={styles.more}>
+      {measured.map(({ text, verdict, bad }) => (
+        <View key={text} role="listitem">
+          <Text variant={bad ? 'code' : 'codeSmall'} tone={bad ? 'answer' : 'ink'}>
+            {text}
+          </Text>
+          {verdict === '' ? null : <Text variant="small">{verdict}</Text>}
+        </View>
+      ))}
+    </View>
   );
 }
 

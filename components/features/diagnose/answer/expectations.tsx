@@ -7,8 +7,14 @@ import type { Bench } from '../bench';
 import { doneOf } from './done-of';
 import { OutcomeList } from './outcome-list';
 
+type ExpectationsProps = {
+  bench: Bench;
+  runs: readonly Run[];
+  onSaw: (outcome: NextCheck['outcomes'][number]) => void;
+};
+
 /** While a run waits for its report: what the board may show, and what each case means. */
-export function Expectations({ bench, runs }: { bench: Bench; runs: readonly Run[] }) {
+export function Expectations({ bench, runs, onSaw }: ExpectationsProps) {
   const check = useMemo(() => checkBefore(bench, runs), [bench, runs]);
   return (
     <Sheet kind="boxed" gap="sm" label="What to expect">
@@ -20,7 +26,7 @@ export function Expectations({ bench, runs }: { bench: Bench; runs: readonly Run
           Nothing reported is a report too: choose “All passed”.
         </Text>
       ) : (
-        <OutcomeList outcomes={check.outcomes} />
+        <OutcomeList outcomes={check.outcomes} onSaw={onSaw} />
       )}
     </Sheet>
   );
@@ -28,7 +34,11 @@ export function Expectations({ bench, runs }: { bench: Bench; runs: readonly Run
 
 /** The check whose making began the run that waits; null where something else was done. */
 function checkBefore({ index }: Bench, runs: readonly Run[]): NextCheck | null {
-  const done = JSON.stringify(runs.at(-1)?.changes);
+  const changes = JSON.stringify(runs.at(-1)?.changes);
   const checks = diagnose(index, runs.slice(0, -1)).nextChecks;
-  return checks.find((check) => check.outcomes.length > 0 && JSON.stringify(doneOf(check)?.changes) === done) ?? null;
+  const began = (check: NextCheck) => {
+    const done = doneOf(check);
+    return done !== null && 'changes' in done && JSON.stringify(done.changes) === changes;
+  };
+  return checks.find((check) => check.outcomes.length > 0 && began(check)) ?? null;
 }

@@ -4,14 +4,17 @@ import { makeStyles } from '@/components/theme';
 import { Button } from '@/components/ui/button';
 import { Sheet } from '@/components/ui/sheet';
 import { Text } from '@/components/ui/text';
-import type { Change, Diagnosis, NextCheck } from '@/shared';
-import { doneOf } from './done-of';
+import type { Diagnosis, NextCheck } from '@/shared';
+import { doneOf, type Done } from './done-of';
 import { OutcomeList } from './outcome-list';
+import { minutesWords, worthWords } from './worth-words';
+
+type Outcome = NextCheck['outcomes'][number];
 
 type NextChecksProps = {
   diagnosis: Diagnosis;
-  /** The check was made: begins a run with what it changed. */
-  onDone: (changes: readonly Change[]) => void;
+  /** The check was made. outcome: and this is what it showed. */
+  onDone: (done: Done, outcome?: Outcome) => void;
   /** Something else was done. */
   onOther: () => void;
 };
@@ -25,13 +28,19 @@ export function NextChecks({ diagnosis, onDone, onOther }: NextChecksProps) {
   if (outcome === 'no-evidence') return null;
   return (
     <View style={styles.all}>
-      {shown.map((check) => (
-        <Check key={`${check.action}${check.label}`} check={check} onDone={onDone} />
+      {shown.map((check, at) => (
+        <Check
+          key={`${check.action}${check.label}`}
+          {...{ check, onDone }}
+          first={at === 0}
+          worth={worthWords(check, nextChecks)}
+        />
       ))}
       <View style={styles.row}>
         {nextChecks.length > 1 ? (
           <Button
             label={open ? 'The best check only' : `Other checks (${nextChecks.length - 1})`}
+            aria-expanded={open}
             onPress={() => setOpen(!open)}
           />
         ) : null}
@@ -41,36 +50,38 @@ export function NextChecks({ diagnosis, onDone, onOther }: NextChecksProps) {
   );
 }
 
-function Check({ check, onDone }: { check: NextCheck; onDone: (changes: readonly Change[]) => void }) {
-  const styles = useStyles();
+type CheckProps = Pick<NextChecksProps, 'onDone'> & { check: NextCheck; first: boolean; worth: string };
+
+function Check({ check, first, worth, onDone }: CheckProps) {
   const done = doneOf(check);
   // The first sentence says what to do; what follows explains it.
-  const [first = '', rest = ''] = check.label.split(/(?<=\.) (.*)/s);
+  const [what = '', rest = ''] = check.label.split(/(?<=\.) (.*)/s);
+  const changes = done !== null && 'changes' in done;
   return (
-    <Sheet kind="boxed" gap="sm" label="Next check">
-      <View style={styles.head}>
-        <Text variant="subheading" level={2} style={styles.label}>
-          {`Next: ${first.charAt(0).toLowerCase()}${first.slice(1)}`}
+    <Sheet kind={first ? 'boxed' : 'paper'} gap="sm" label={first ? 'Next check' : 'Another check'}>
+      <View>
+        <Text variant="subheading" level={2}>
+          {first ? `Next: ${what.charAt(0).toLowerCase()}${what.slice(1)}` : what}
         </Text>
-        <Text variant="small" tone="soft" style={styles.fixed}>
-          {minutesWords(check.minutes)}
+        <Text variant="small" tone="soft">
+          {[minutesWords(check.minutes), worth].filter((words) => words !== '').join(', ')}
         </Text>
       </View>
       {rest === '' ? null : <Text variant="small">{rest}</Text>}
-      <OutcomeList outcomes={check.outcomes} />
-      {done === null ? null : <Button kind="primary" wide label={done.label} onPress={() => onDone(done.changes)} />}
+      {changes && check.outcomes.length > 0 ? (
+        <Text variant="small" tone="soft">
+          Done already? Tap what it reports.
+        </Text>
+      ) : null}
+      <OutcomeList outcomes={check.outcomes} onSaw={changes ? (outcome) => onDone(done, outcome) : undefined} />
+      {done === null ? null : (
+        <Button kind={first ? 'primary' : 'secondary'} wide label={done.label} onPress={() => onDone(done)} />
+      )}
     </Sheet>
   );
-}
-
-function minutesWords(minutes: number): string {
-  return minutes < 120 ? `${Math.round(minutes)}\u00a0min` : `${Math.round(minutes / 60)}\u00a0h`;
 }
 
 const useStyles = makeStyles((t) => ({
   all: { gap: t.space.md },
   row: { flexDirection: 'row', flexWrap: 'wrap', gap: t.space.sm },
-  head: { flexDirection: 'row', justifyContent: 'space-between', alignItems: 'baseline', gap: t.space.md },
-  label: { flexShrink: 1 },
-  fixed: { flexShrink: 0 },
 }));

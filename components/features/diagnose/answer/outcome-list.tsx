@@ -1,29 +1,59 @@
-import { View } from 'react-native';
+import { Pressable, View } from 'react-native';
 import { makeStyles } from '@/components/theme';
 import { percentWords } from '@/components/ui/percent';
 import { Text } from '@/components/ui/text';
 import type { NextCheck } from '@/shared';
 
+type Outcome = NextCheck['outcomes'][number];
+
+type OutcomeListProps = {
+  outcomes: readonly Outcome[];
+  /** This is what happened. Left out: the list is only to be read. */
+  onSaw?: (outcome: Outcome) => void;
+};
+
 /** What the board may report after a check, what each case means, and how likely it is. */
-export function OutcomeList({ outcomes }: Pick<NextCheck, 'outcomes'>) {
+export function OutcomeList({ outcomes, onSaw }: OutcomeListProps) {
   const styles = useStyles();
   if (outcomes.length === 0) return null;
   return (
-    <View role="list" aria-label="What the board may report" style={styles.outcomes}>
-      {outcomes.map(({ sees, means, probability }) => (
-        <View key={`${sees}${means}`} role="listitem" style={styles.outcome}>
-          <View style={styles.sees}>
-            <Text variant={isWords(sees) ? 'smallStrong' : 'codeSmall'}>{sees}</Text>
-          </View>
-          <View style={styles.means}>
-            <Text variant="small">{means}</Text>
-          </View>
-          <Text variant="small" tone="soft" align="right" style={styles.percent}>
-            {percentWords(probability)}
-          </Text>
+    <View role="list" aria-label="What the board may report" style={onSaw === undefined && styles.outcomes}>
+      {outcomes.map((outcome) => (
+        <View key={`${outcome.sees}${outcome.means}`} role="listitem">
+          {onSaw === undefined ? (
+            <View style={styles.outcome}>
+              <Words outcome={outcome} />
+            </View>
+          ) : (
+            <Pressable
+              role="button"
+              aria-label={`I saw ${outcome.sees}: ${outcome.means}`}
+              onPress={() => onSaw(outcome)}
+              style={(state) => [styles.outcome, styles.pressable, (state.hovered || state.pressed) && styles.held]}
+            >
+              <Words outcome={outcome} />
+            </Pressable>
+          )}
         </View>
       ))}
     </View>
+  );
+}
+
+function Words({ outcome: { sees, means, probability } }: { outcome: Outcome }) {
+  const styles = useStyles();
+  return (
+    <>
+      <View style={styles.sees}>
+        <Text variant={isWords(sees) ? 'smallStrong' : 'codeSmall'}>{sees}</Text>
+      </View>
+      <View style={styles.means}>
+        <Text variant="small">{means}</Text>
+      </View>
+      <Text variant="small" tone="soft" align="right" style={styles.percent}>
+        {percentWords(probability)}
+      </Text>
+    </>
   );
 }
 
@@ -33,6 +63,13 @@ const isWords = (sees: string) => /^[a-z]{2,}( |$)/.test(sees);
 const useStyles = makeStyles((t) => ({
   outcomes: { gap: t.space.xs },
   outcome: { flexDirection: 'row', gap: t.space.md, alignItems: 'baseline' },
+  pressable: {
+    minHeight: t.target,
+    paddingVertical: t.space.md,
+    borderTopWidth: t.line.thin,
+    borderTopColor: t.colours.ruleStrong,
+  },
+  held: { backgroundColor: t.colours.faded },
   sees: { flexBasis: 0, flexGrow: 2, minWidth: 0 },
   means: { flexBasis: 0, flexGrow: 5, minWidth: 0 },
   percent: { flexShrink: 0, minWidth: t.target },

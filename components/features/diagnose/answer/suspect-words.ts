@@ -2,7 +2,7 @@ import type { Diagnosis, Suspect } from '@/shared';
 
 /** What stands large for a suspect: its label on the board. */
 export function suspectName({ socket, sharedPart, label, kind }: Suspect): string {
-  if (kind === 'short') return label;
+  if (kind === 'short' || kind === 'rail') return label;
   return sharedPart ?? socket ?? label;
 }
 
@@ -20,6 +20,8 @@ export function suspectKind(suspect: Suspect): string {
       return channel === null ? beside(label, suspect.sharedPart) : `${beside(label, suspect.sharedPart)}, ${channel}`;
     case 'short':
       return '';
+    case 'rail':
+      return suspect.sharedPart === null ? 'supply' : `supply, made by ${suspect.sharedPart}`;
   }
 }
 

@@ -7,6 +7,7 @@ import type { Diagnosis, Run } from '@/shared';
 import { evidenceWords, runTitle } from '../evidence-words';
 import type { Bench } from '../bench';
 import type { EvidencePlace } from '../workspace-runs';
+import { WordPlaces } from './word-places';
 
 type RunListProps = {
   bench: Bench;
@@ -65,6 +66,7 @@ function OneRun({ run, at, bench, runs, diagnosis, ...act }: RunListProps & { ru
               <Text variant="small" tone="soft">
                 {[note, ...(read?.notes ?? [])].join('; ')}
               </Text>
+              <WordPlaces index={bench.index} words={read?.words ?? []} />
               {refused === null ? null : (
                 <Text variant="smallStrong" tone="pencil">
                   {`Not used: ${refused}`}
