@@ -1,4 +1,5 @@
-import { listWords } from '../layout/words';
+import { highestSyndrome, validateCode } from '../ecc/code';
+import { listWords, sentenceCase } from '../layout/words';
 import { type FieldPart, type FormatContext, bitsOfField } from './format-context';
 import { nounOfField } from './reasons';
 import { entryNamesLane } from './values';
@@ -96,6 +97,49 @@ function bitReasons(part: FieldPart, { index }: FormatContext): FormatReason[] {
   });
 }
 
+function codeReasons(part: FieldPart, context: FormatContext): FormatReason[] {
+  const { code, field, digits } = part.field;
+  if (code === undefined) return [];
+  const pointer = `${pointerTo(part)}/code`;
+  const wrong = (message: string, at = pointer): FormatReason[] => [{ pointer: at, code: 'format-code', message }];
+  if (field !== 'syndrome') return wrong(`Only a syndrome has a code, not a ${nounOfField(part)}.`);
+  const { radix } = part;
+  if (radix === null) return wrong('A code gives numbers. Choose hexadecimal, decimal, octal or binary digits.');
+  const bits = bitsOfField(context, part, null);
+  if (code.columns.length !== bits.length)
+    return wrong(
+      `The code has ${code.columns.length} columns, but the field has ${bits.length} bits. Give one for each.`,
+      `${pointer}/columns`,
+    );
+  const top = highestSyndrome(code).toString(radix).toUpperCase();
+  const tooLong =
+    digits !== undefined && top.length > digits.max
+      ? wrong(
+          `Syndromes go up to ${top}, which is more than the ${digits.max} ${digits.max === 1 ? 'digit' : 'digits'} of the field.`,
+        )
+      : [];
+  const bitAt = (column: number) => `bit ${bits[column]}`;
+  const problems = validateCode(code).flatMap(({ column, kind, others }) => {
+    const at = `${pointer}/columns/${column}`;
+    const [one, two] = others.map(bitAt);
+    switch (kind) {
+      case 'zero':
+        return wrong(`A column of 0 says that ${bitAt(column)} is never checked.`, at);
+      case 'twice':
+        return wrong(
+          `${sentenceCase(bitAt(column))} has the same column as ${one}: the code could not tell them apart.`,
+          at,
+        );
+      case 'pair':
+        return wrong(
+          `${sentenceCase(one!)} and ${two} wrong together would look like ${bitAt(column)} alone, so two errors are not detected.`,
+          at,
+        );
+    }
+  });
+  return [...tooLong, ...problems];
+}
+
 function repeatedReasons(context: FormatContext): FormatReason[] {
   const first = new Map<FieldName, FieldPart[]>();
   return context.fields.flatMap((part): FormatReason[] => {
@@ -130,23 +174,24 @@ function meaningReasons(context: FormatContext): FormatReason[] {
   const listsBits = fields.some((part) =>
     part.field.table.some((entry) => entry.bits !== undefined || entry.bank !== undefined),
   );
+  const tellsBits = listsBits || fields.some((part) => part.field.code !== undefined);
   const reasons: FormatReason[] = [];
   const wrong = (pointer: string, code: string, message: string) => reasons.push({ pointer, code, message });
-  if (!fields.some((part) => naming.has(part.field.field)) && !listsBits) {
+  if (!fields.some((part) => naming.has(part.field.field)) && !tellsBits) {
     wrong(
       '/parts',
       'format-names-nothing',
       'No part of this code names a bank, a bit, an address or a socket. Add a field that does.',
     );
   }
-  if (has('read') && !has('written') && format.written === undefined && !has('mask') && !listsBits) {
+  if (has('read') && !has('written') && format.written === undefined && !has('mask') && !tellsBits) {
     wrong(
       '/parts',
       'format-written-missing',
       'The code shows what was read but not what was written. Add a field for it, or give the value that the test always writes.',
     );
   }
-  if (has('written') && !has('read') && !has('mask') && !listsBits) {
+  if (has('written') && !has('read') && !has('mask') && !tellsBits) {
     wrong('/parts', 'format-read-missing', 'The code shows what was written but neither what was read nor a mask.');
   }
   const namesBank = has('bank') || has('lane') || has('socket') || format.bank !== undefined || listsBits;
@@ -160,8 +205,12 @@ function meaningReasons(context: FormatContext): FormatReason[] {
   if (format.bank !== undefined && !index.bankByName.has(format.bank))
     wrong('/bank', 'unknown-bank', `There is no bank "${format.bank}".`);
   for (const part of fields) {
-    if (part.field.field === 'syndrome' && part.field.table.length === 0)
-      wrong(pointerTo(part), 'format-syndrome', 'Say in a table which bits each syndrome stands for.');
+    if (part.field.field === 'syndrome' && part.field.table.length === 0 && part.field.code === undefined)
+      wrong(
+        pointerTo(part),
+        'format-syndrome',
+        'Say in a table which bits each syndrome stands for, or give the code that it comes from.',
+      );
   }
   return reasons;
 }
@@ -172,6 +221,7 @@ export function checkFormat(context: FormatContext): FormatReason[] {
     ...notationReasons(part),
     ...tableReasons(part, context),
     ...bitReasons(part, context),
+    ...codeReasons(part, context),
   ]);
   return [...each, ...repeatedReasons(context), ...meaningReasons(context)];
 }

@@ -1,12 +1,13 @@
+import { classifySyndrome } from '../ecc/code';
 import { bitName } from '../layout/words';
 import type { SpanPlace } from '../place/address';
 import type { Convention } from './conventions';
 import { type FieldPart, type FormatContext, bitsOfField } from './format-context';
 import type { FieldMatch, Match } from './match-types';
 import type { FailingLane } from './meaning';
-import { onesOfNumber } from './numerals';
+import { numberOf, onesOfNumber } from './numerals';
 import type { FailingBits, Refusal } from './outcome';
-import { maskReason, numberReason, oneHotReason } from './reasons';
+import { maskReason, numberReason, oneHotReason, syndromeReason } from './reasons';
 import { countOf, placesOf } from './values';
 
 interface Setting {
@@ -135,11 +136,32 @@ function fromWords(context: FormatContext, match: Match, setting: Setting): Fail
   };
 }
 
-/** The failing bits that a code names, from its table, a mask, what was written and read, or the number of a bit. */
+function fromSyndrome(context: FormatContext, match: Match): FailingBits | Refusal | null {
+  const field = match.fields.find(({ part, entry }) => part.field.code !== undefined && entry === null);
+  const code = field?.part.field.code;
+  if (field === undefined || code === undefined || field.part.radix === null) return null;
+  const { part, text, start } = field;
+  const bits = bitsOfField(context, part, null);
+  const meaning = classifySyndrome(code, numberOf(text, part.radix ?? 16));
+  if (meaning.kind === 'single' || meaning.kind === 'check-bit')
+    return {
+      failing: [{ bit: bits[meaning.bit]!, reads: 'unknown' }],
+      // Only where two wrong bits would have shown as two are the others known to be right.
+      shown: code.kind === 'sec-ded' ? bits : null,
+      at: start,
+    };
+  return { reason: syndromeReason(field, meaning.kind), at: start, known: meaning.kind !== 'out-of-range' };
+}
+
+/**
+ * The failing bits that a code names, from its table, a mask, what was written and read, the number of a bit or a
+ * syndrome.
+ */
 export function failingBits(context: FormatContext, match: Match, setting: Setting): FailingBits | Refusal {
   return (
     fromTable(match) ??
     fromWords(context, match, setting) ??
-    fromBitField(context, match, setting) ?? { failing: null, shown: null, at: 0 }
+    fromBitField(context, match, setting) ??
+    fromSyndrome(context, match) ?? { failing: null, shown: null, at: 0 }
   );
 }

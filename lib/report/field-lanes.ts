@@ -1,3 +1,4 @@
+import { highestSyndrome } from '../ecc/code';
 import { decodeSpan } from '../place/address';
 import type { Convention } from './conventions';
 import { type FieldPart, type FormatContext, bitsOfField } from './format-context';
@@ -30,6 +31,8 @@ function widthOf({ context, part }: Setting, texts: readonly FieldText[]): Typed
     const top = Math.max(0, ...windows.map(({ range }) => Math.floor(range.to / 2 ** part.field.shift)));
     return { min: 1, max: Math.max(digits ?? 1, top.toString(radix ?? 16).length) };
   }
+  if (part.field.code !== undefined)
+    return { min: 1, max: highestSyndrome(part.field.code).toString(radix ?? 16).length };
   const shown = bitsOfField(context, part, null).length;
   return {
     min: 1,
@@ -123,6 +126,26 @@ function addressLanes({ context, part }: Setting, typed: string, [from, to]: [nu
   return setOf(context, { lanes: lanes.filter((at) => index.laneExists[at] === 1), speaks });
 }
 
+function syndromeLanes(setting: Setting, typed: string, [from, to]: [number, number]): LaneSet {
+  const { context, part } = setting;
+  const { code } = part.field;
+  if (code === undefined) return setOf(context, { lanes: [], speaks: false });
+  const radix = part.radix ?? 16;
+  const bits = bitsOfField(context, part, null);
+  const named = new Set<number>();
+  let speaks = false;
+  for (let after = from; after <= to; after++) {
+    const size = radix ** after;
+    const start = numberOf(typed, radix) * size;
+    const end = Math.min(start + size - 1, highestSyndrome(code));
+    const columns = code.columns.filter((column) => column >= start && column <= end);
+    for (const [at, column] of code.columns.entries()) if (column >= start && column <= end) named.add(bits[at]!);
+    // What is no bit's syndrome still says something: no error, or too many.
+    speaks ||= end - start + 1 > new Set(columns).size;
+  }
+  return setOf(context, { lanes: lanesOfBits(setting, named), speaks });
+}
+
 /** A mask that shows one byte of a wider word: which byte only the address tells. */
 function dependsOnAddress({ context, part }: Setting): boolean {
   return (
@@ -144,6 +167,8 @@ function digitLanes(setting: Setting, typed: string, range: [number, number]): L
         : setOf(context, { lanes: maskLanes(setting, typed, range), speaks: false });
     case 'address':
       return context.map.windows.length === 0 ? null : addressLanes(setting, typed, range);
+    case 'syndrome':
+      return syndromeLanes(setting, typed, range);
     case 'written':
     case 'read':
     case 'count':

@@ -113,6 +113,7 @@ export function bitsOfField(
   site: Pick<SpanPlace, 'bits'> | null,
 ): readonly number[] {
   if (part.field.bits !== undefined) return part.field.bits;
+  if (part.field.code !== undefined) return context.allBits;
   const { field } = part.field;
   const width = widthInBits(part);
   const shows = field === 'mask' || field === 'written' || field === 'read';

@@ -5,7 +5,15 @@ import { type LaneSet, intersection, isAlive } from './lane-set';
 import type { Prefix, ReadResult, ReportKey } from './meaning';
 import { type PrefixState, prefixStates } from './prefix-states';
 import { type Reader, isKnownElsewhere, mostCharacters, readText } from './read';
-import { addressReason, bankReason, maskReason, nounOfField, numberReason, rangeOfField } from './reasons';
+import {
+  addressReason,
+  bankReason,
+  maskReason,
+  nounOfField,
+  numberReason,
+  rangeOfField,
+  syndromeReason,
+} from './reasons';
 import { numberOf } from './numerals';
 import { bitsOfField } from './format-context';
 
@@ -109,6 +117,8 @@ function deadReason({ reader }: Keypad, states: readonly PrefixState[]): string 
           return numberReason(context, match, bits * context.index.bankCount);
         case 'mask':
           return maskReason(match, bits);
+        case 'syndrome':
+          return field.part.field.code === undefined ? null : syndromeReason(match, 'out-of-range');
         case 'address':
           return addressReason(context, match, numberOf(text, field.part.radix ?? 16) * 2 ** field.part.field.shift)
             .reason;

@@ -1,5 +1,6 @@
 import type { AddressWindow } from '@/shared';
 import type { BankIndex, Lane } from '../brand';
+import { type SyndromeMeaning, highestSyndrome } from '../ecc/code';
 import { bankWords, bitName, bitWords, listWords, numbersWords, rangeWords, sentenceCase } from '../layout/words';
 import type { FieldPart, FormatContext } from './format-context';
 import { bitsOfField } from './format-context';
@@ -11,7 +12,7 @@ export function sentence(text: string): string {
   return sentenceCase(/[.!?]$/.test(text) ? text : `${text}.`);
 }
 
-function fromTo(from: number, to: number): string {
+function fromTo(from: number | string, to: number | string): string {
   return from === to ? String(from) : `${from} to ${to}`;
 }
 
@@ -87,10 +88,36 @@ export function rangeOfField(context: FormatContext, part: FieldPart): string {
       const labels = context.index.document.sockets.map((socket) => socket.label);
       return labels.length > 2 ? `such as ${labels[0]}` : labels.join(' or ');
     }
-    case 'count':
     case 'syndrome':
+      return syndromeRange(part);
+    case 'count':
     case 'ignored':
       return '';
+  }
+}
+
+/** "00 to 7F": the syndromes that the code of a field has. Empty where it has none. */
+function syndromeRange({ field, radix }: FieldPart): string {
+  if (field.code === undefined || radix === null) return '';
+  const top = highestSyndrome(field.code).toString(radix).toUpperCase();
+  const least = field.digits?.min ?? (radix === 10 ? 1 : top.length);
+  return fromTo('0'.padStart(least, '0'), top.padStart(least, '0'));
+}
+
+/** Why a syndrome names no bit: "Syndrome 05 means two wrong bits; the code cannot say which." */
+export function syndromeReason(
+  { part, text }: Pick<FieldMatch, 'part' | 'text'>,
+  kind: Exclude<SyndromeMeaning['kind'], 'single' | 'check-bit'>,
+): string {
+  switch (kind) {
+    case 'none':
+      return `Syndrome ${text} means that no bit is wrong.`;
+    case 'double':
+      return `Syndrome ${text} means two wrong bits; the code cannot say which.`;
+    case 'not-correctable':
+      return `Syndrome ${text} means more wrong bits than the code can tell.`;
+    case 'out-of-range':
+      return `Syndrome ${text}: this code has ${syndromeRange(part)}.`;
   }
 }
 

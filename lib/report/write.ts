@@ -1,4 +1,5 @@
 import { type BankIndex, type Lane } from '../brand';
+import { highestSyndrome, syndromeOf } from '../ecc/code';
 import { bitName, sentenceCase } from '../layout/words';
 import { decodeAddress, encodeAddress, type WordPlace } from '../place/address';
 import type { Result } from '../result';
@@ -166,6 +167,20 @@ function writeSocket({ context }: Writer, { lanes }: Saying): Written {
   return common === undefined ? cannot('no one socket holds it') : wrote(index.document.sockets[common]!.label);
 }
 
+function writeSyndrome({ context }: Writer, part: FieldPart, { bits }: Saying): Written {
+  const { code } = part.field;
+  const { radix } = part;
+  if (code === undefined || radix === null) return cannot('the table of syndromes does not list it');
+  const [bit] = bits;
+  if (bit === undefined || bits.length > 1) return cannot('a syndrome names one wrong bit');
+  const place = bitsOfField(context, part, null).indexOf(bit);
+  if (place < 0) return cannot('the code has no column for that bit');
+  const digits = (value: number) => value.toString(radix).toUpperCase();
+  const usual = radix === 10 ? 1 : digits(highestSyndrome(code)).length;
+  const text = padded(part, digits(syndromeOf(code, [place])), usual);
+  return part.table.has(text) ? cannot(`"${text}" means something else here`) : wrote(text);
+}
+
 function writePlain(part: FieldPart): string {
   const [listed] = part.table.keys();
   if (listed !== undefined && part.radix === null) return listed;
@@ -198,7 +213,7 @@ function writeField(writer: Writer, part: FieldPart, saying: Saying): Written {
     case 'socket':
       return writeSocket(writer, saying);
     case 'syndrome':
-      return cannot('the table of syndromes does not list it');
+      return writeSyndrome(writer, part, saying);
     case 'count':
     case 'ignored':
       return wrote(writePlain(part));

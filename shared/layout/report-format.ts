@@ -45,6 +45,20 @@ export const tableEntry = z.strictObject({
   means: words(120).optional().describe('Words for a text that names no lane, such as "memory on the expansion card".'),
 });
 
+/** A code that corrects errors, so that a syndrome leads to the wrong bit by arithmetic. */
+export const fieldCode = z.strictObject({
+  kind: z
+    .enum(['hamming', 'sec-ded'])
+    .describe('hamming: corrects one wrong bit. sec-ded: corrects one and detects two.'),
+  columns: z
+    .array(z.number().int().min(0).max(0xffff))
+    .min(1)
+    .max(limits.dataBits)
+    .describe(
+      'The matrix of the code by columns: for each bit of the field, data and check bits alike, the syndrome that this bit alone gives.',
+    ),
+});
+
 export const formatField = z.strictObject({
   field: z.enum(fieldMeanings),
   notation: z
@@ -69,7 +83,7 @@ export const formatField = z.strictObject({
     .max(limits.dataBits)
     .optional()
     .describe(
-      'The bits of the word that the field counts or shows, the first or lowest first. Left out: all bits that are no check bits, or all bits where the mask is wide enough.',
+      'The bits of the word that the field counts or shows, the first or lowest first. Left out: all bits that are no check bits, or all bits where the mask is wide enough or the field has a code.',
     ),
   digits: z
     .strictObject({ min: z.number().int().min(1).max(72), max: z.number().int().min(1).max(72) })
@@ -88,6 +102,9 @@ export const formatField = z.strictObject({
     .default('bank-first')
     .describe('For a lane number: bank-first counts all bits of one bank, then the next.'),
   table: z.array(tableEntry).max(limits.tableEntries).default([]),
+  code: fieldCode
+    .optional()
+    .describe('For a syndrome in digits: the code that gives it. Lines of the table count before it.'),
 });
 
 export const formatText = z.strictObject({ text: z.string().min(1).max(60) });
