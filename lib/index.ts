@@ -84,3 +84,5 @@ export type { BoardFault } from './simulate/faults';
 export { chipFaults, drawEach, drawFault, possibleFaults } from './simulate/possible-faults';
 export type { Random, TestResult } from './simulate/self-test';
 export { wiringOf, type Wiring } from './simulate/wiring';
+export { openLogImport, type LogCounts, type LogImport } from './logs/log-import';
+export type { LaneSummary, LogSummary } from './logs/log-evidence';

@@ -52,9 +52,9 @@ export interface TestOptions {
 const passSeconds = 0.5;
 
 /**
- * Runs a March test over the board, bank by bank, once for each data background (all bits alike, then groups of 1, 2, 4
- * and more bits in turn, so that any two data lines are told apart), and lists what failed. Lanes without a fault are
- * sound and left out.
+ * Runs a March test over the board, bank by bank, and lists what failed. Lanes without a fault are sound and left out.
+ * Where data lines are joined it is run once for each data background (all bits alike, then groups of 1, 2, 4 and more
+ * bits in turn, so that any two lines are told apart): no other fault tells one background from another.
  */
 export function testBoard(
   wiring: Wiring,
@@ -87,7 +87,9 @@ function testBank(test: BankTest): FailingWord[] {
   const byLane = new Map(tested.map((each) => [each.lane, each]));
   for (const each of tested) each.join(byLane);
   const failing = new Map<string, { at: number; written: Pattern; bits: Set<number> }>();
-  const backgrounds = 1 + Math.ceil(Math.log2(Math.max(2, wiring.bits)));
+  // Only joined lines tell one background from another: without them the first has said it all.
+  const joined = lanes.some((lane) => (test.states.get(lane)?.joined.length ?? 0) > 0);
+  const backgrounds = joined ? 1 + Math.ceil(Math.log2(Math.max(2, wiring.bits))) : 1;
   for (let background = 0; background < backgrounds; background++) {
     march.elements.forEach(({ order, operations }, element) => {
       if (element > 0) for (const each of tested) each.wait(waits + passSeconds);
