@@ -19,10 +19,12 @@ function plain(check: Pick<NextCheck, 'action' | 'label' | 'minutes'> & Partial<
 
 /** The supply before anything else. */
 export function supplyChecks({ findings: { index }, rails }: Weighed): NextCheck[] {
+  const socket = 0 as SocketIndex;
   const wrong = rails.findLast((rail) => !rail.good);
   const measure = plain({
     action: 'rails',
-    label: railsLabel({ index }),
+    label: railsLabel(index, socket),
+    sockets: [labelOf(index, socket)],
     minutes: minutes.rails,
     outcomes: [
       { sees: 'a rail out of its limits', means: 'put the supply right before any chip is moved', probability: 0.6 },
@@ -36,6 +38,7 @@ export function supplyChecks({ findings: { index }, rails }: Weighed): NextCheck
     plain({
       action: 'rails',
       label: `Power off, put ${name} right, and measure it at the sockets with the chips out. Then fit them and test all of the memory: some may be hurt.`,
+      sockets: [wrong.socket],
       minutes: minutes.repairSupply,
       outcomes: [
         { sees: `${name} ${between}`, means: 'fit the chips and test all of the memory', probability: 0.8 },
@@ -47,8 +50,14 @@ export function supplyChecks({ findings: { index }, rails }: Weighed): NextCheck
 
 /** Nothing names a lane, and the board does nothing: what comes before any memory. */
 export function deadChecks(index: LayoutIndex): NextCheck[] {
+  const socket = 0 as SocketIndex;
   return [
-    plain({ action: 'rails', label: railsLabel({ index }), minutes: minutes.rails }),
+    plain({
+      action: 'rails',
+      label: railsLabel(index, socket),
+      sockets: [labelOf(index, socket)],
+      minutes: minutes.rails,
+    }),
     plain({ action: 'probe', label: 'Look at reset and clock with a scope.', minutes: minutes.probe }),
     plain({ action: 'feel', label: 'Feel for a chip that is much hotter than its neighbours.', minutes: minutes.feel }),
   ];

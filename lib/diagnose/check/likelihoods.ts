@@ -29,8 +29,8 @@ export const shows = {
   draggedPart: row(0.05, { line: 0.25, shared: 0.25, holder: 0.5, short: 0.5, other: 0.3, supply: 0.25 }),
   /** Two lines measured against each other, power off. */
   joined: row(0.02, { short: 0.95, line: 0.1, other: 0.1 }),
-  /** Two bits that always read alike when they were written differently. */
-  together: row(0.03, { short: 0.92, line: 0.08, shared: 0.08, other: 0.15 }),
+  /** Two bits that read alike when they were written differently, and right when they were written alike. */
+  together: row(0.02, { short: 0.95, line: 0.04, shared: 0.04, other: 0.1 }),
   /** A rail out of its limits at a socket, by a part that could be the supply or that serves everything. */
   railOut: row(0.01, { supply: 0.97, shared: 0.1, other: 0.05 }),
   /** The same for something unnamed that all banks share. */

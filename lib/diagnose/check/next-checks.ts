@@ -1,18 +1,11 @@
 import type { NextCheck } from '@/shared';
 import { wentAway } from '../verdict';
 import { asNextCheck } from './candidate';
-import { candidates, deskFor, type CheckInput } from './candidates';
+import { candidates, deskFor, ranked, type CheckInput } from './candidates';
 import { effort, type Desk } from './desk';
-import {
-  deadChecks,
-  provenPlace,
-  refitCheck,
-  runAgain,
-  soakCheck,
-  supplyChecks,
-  wrongPartWords,
-} from './first-rules';
+import { deadChecks, provenPlace, refitCheck, runAgain, soakCheck, supplyChecks, wrongPartWords } from './first-rules';
 import { measureCheck, replaceCheck } from './place-checks';
+import { railsCheck } from './shared-checks';
 import { settleMeaning } from './whole-checks';
 
 /** No more than this many checks are listed. */
@@ -21,6 +14,8 @@ const mostListed = 5;
 const provenFrom = 0.95;
 /** A check that tells less than this is not listed. */
 const leastBits = 0.005;
+/** An open meaning of the report is settled first where that tells at least this much. */
+const worthSettling = 0.1;
 
 /**
  * What to check next, the best first: the most expected information about the part at fault for the minutes
@@ -41,11 +36,12 @@ export function nextChecks(input: CheckInput): NextCheck[] {
   if (!desk) return [runAgain()];
   const { beliefs } = desk;
   const first = comesFirst(desk);
-  const ranked = candidates(desk)
-    .filter(({ bits }) => bits >= leastBits)
-    .sort((a, b) => b.bits / b.minutes - a.bits / a.minutes)
-    .map((candidate) => asNextCheck(beliefs, candidate));
-  const others = ranked.filter((check) => first.every((each) => each.label !== check.label));
+  // Before it is known what was reported, and right after chips were fitted wrongly, no chip is moved.
+  if (verdict.refit || first[0]?.action === 'read-again' || first[0]?.action === 'ask') return first;
+  const telling = candidates(desk).filter(({ bits }) => bits >= leastBits);
+  const others = ranked(desk, telling)
+    .map((candidate) => asNextCheck(beliefs, candidate))
+    .filter((check) => first.every((each) => each.label !== check.label));
   return followUp([...first, ...others].slice(0, mostListed));
 }
 
@@ -56,7 +52,8 @@ function comesFirst(desk: Desk): NextCheck[] {
   if (verdict.refit) return [refitCheck(verdict, desk.runs)];
   if (verdict.outcome === 'unexplained') return [runAgain()];
   const settle = settleMeaning(desk);
-  if (settle) return [asNextCheck(beliefs, settle)];
+  if (settle && settle.bits >= worthSettling) return [asNextCheck(beliefs, settle)];
+  if (verdict.outcome === 'shared' && allFail(desk)) return railsFirst(desk);
   if (verdict.outcome !== 'place') return [];
   const [place] = weighed.places;
   const socket = place ? index.socketByLabel.get(place.socket) : undefined;
@@ -67,6 +64,17 @@ function comesFirst(desk: Desk): NextCheck[] {
     return [asNextCheck(beliefs, replaceCheck(desk, socket))];
   if (place.contact > place.chip) return [asNextCheck(beliefs, measureCheck(desk, socket))];
   return [];
+}
+
+/** Every lane failed, other than in a picture, which shows that the supply is there. */
+function allFail({ beliefs, index, runs }: Desk): boolean {
+  const drawn = runs.some((run) => run.evidence.some((each) => each.kind === 'picture'));
+  return !drawn && beliefs.failing.length === index.lanes.length;
+}
+
+/** The supply before what is shared, unless it was measured. */
+function railsFirst(desk: Desk): NextCheck[] {
+  return desk.weighed.rails.length > 0 ? [] : [asNextCheck(desk.beliefs, railsCheck(desk))];
 }
 
 /** A test of the whole is cheap and comes with what follows it. */

@@ -1,20 +1,28 @@
-import type { Lane, SocketIndex } from '../../brand';
+import type { SocketIndex } from '../../brand';
+import type { LayoutIndex } from '../../layout/layout-index';
 import { listWords } from '../../layout/words';
 import type { Part } from '../cause-types';
 import { labelOf } from '../timeline';
-import { weighSeen, type Candidate } from './candidate';
+import { asNextCheck, weighSeen, type Candidate } from './candidate';
 import { minutes, solderedFactor } from './costs';
 import { effort, type Desk } from './desk';
 import { shows } from './likelihoods';
 import { railsWords } from './pin-words';
-import type { State } from './states';
+import { placesOf, type State } from './states';
 
 /** Checks of what several lanes share. */
 export function sharedChecks(desk: Desk): Candidate[] {
-  return [...partProbes(desk), ...shortChecks(desk), ...pullChecks(desk), ...readBack(desk), ...railsCheck(desk)];
+  return [...partProbes(desk), ...shortChecks(desk), ...pullChecks(desk), ...readBack(desk), ...rails(desk)];
 }
 
 const mostProbes = 4;
+
+/** Where the supply could be what fails, and was not measured. */
+function rails(desk: Desk): Candidate[] {
+  const check = railsCheck(desk);
+  const likely = asNextCheck(desk.beliefs, check).outcomes[0]?.probability ?? 0;
+  return desk.weighed.rails.length > 0 || likely < 0.03 ? [] : [check];
+}
 
 /** Each shared part that may be at fault, its outputs with a scope. */
 function partProbes(desk: Desk): Candidate[] {
@@ -140,6 +148,8 @@ function pullChecks(desk: Desk): Candidate[] {
   if (order.length < 2 || held < 0.05) return [];
   const sockets = order.map(([socket]) => socket);
   const labels = sockets.map((socket) => labelOf(index, socket));
+  const strobe = beliefs.states.find(({ sort }) => sort === 'holder')?.cause.mode === 'holds-strobe';
+  const what = strobe ? 'strobe' : 'line';
   // Pulled until one helps, or to the end.
   const pulls = order.reduce((total, [, share], n) => total + share * (n + 1), (1 - held) * order.length);
   const freed = (socket: SocketIndex) => (state: State | null) =>
@@ -159,7 +169,7 @@ function pullChecks(desk: Desk): Candidate[] {
       [
         ...sockets.map((socket, n) => ({
           sees: `the others come back with ${labels[n]} out`,
-          means: `the chip of ${labels[n]} holds the line`,
+          means: `the chip of ${labels[n]} holds the ${what}`,
           given: freed(socket),
         })),
         { sees: 'no change with any of them out', means: otherWords(desk), given: none },
@@ -213,32 +223,29 @@ function readBack(desk: Desk): Candidate[] {
   ];
 }
 
-/** The supply at a socket, where it could be what fails. */
-export function railsCheck(desk: Desk): Candidate[] {
+/** The supply at a socket. */
+export function railsCheck(desk: Desk): Candidate {
   const { beliefs, index } = desk;
-  const everything = new Set<Lane>([...index.lanes] as Lane[]);
   const out = (state: State | null) => {
     if (!state) return shows.railOut.other;
     const { part, reach, sort } = state;
     const role = index.document.sharedParts.find((each) => each.label === part.sharedPart)?.role;
     if (role === 'supply') return shows.railOut.supply;
-    const unnamed = part.kind === 'shared-part' && part.sharedPart === null && reach.length === everything.size;
-    return unnamed ? shows.railOutForAll : shows.railOut[sort];
+    return sort === 'shared' && reach.length === index.lanes.length ? shows.railOutForAll : shows.railOut[sort];
   };
-  const likely = beliefs.states.reduce((sum, state) => sum + state.share * out(state), 0);
-  if (likely < 0.03) return [];
-  return [
-    weighSeen(beliefs, { action: 'rails', label: railsLabel(desk), sockets: [], minutes: minutes.rails }, [
+  const socket = (placesOf(beliefs)[0]?.socket ?? 0) as SocketIndex;
+  return weighSeen(
+    beliefs,
+    { action: 'rails', label: railsLabel(index, socket), sockets: [labelOf(index, socket)], minutes: minutes.rails },
+    [
       { sees: 'a rail out of its limits', means: 'put the supply right before any chip is moved', given: out },
       { sees: 'all rails right', means: 'look at what is shared next', given: (state) => 1 - out(state) },
-    ]),
-  ];
+    ],
+  );
 }
 
-/** "Measure −5 V at pin 1, +12 V at pin 8 and +5 V at pin 9 of a socket before any chip is moved." */
-export function railsLabel({ index }: Pick<Desk, 'index'>): string {
-  const rails = railsWords(index, 0 as SocketIndex);
-  return rails === null
-    ? 'Measure the supply at the pins of a socket before any chip is moved.'
-    : `Measure ${rails} of a socket before any chip is moved.`;
+/** "Measure -5 V at pin 1, +12 V at pin 8 and +5 V at pin 9 of U10 before any chip is moved." */
+export function railsLabel(index: LayoutIndex, socket: SocketIndex): string {
+  const rails = railsWords(index, socket) ?? 'the supply';
+  return `Measure ${rails} of ${labelOf(index, socket)} before any chip is moved.`;
 }
