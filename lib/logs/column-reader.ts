@@ -1,6 +1,13 @@
 import type { Column, ColumnPattern, LogNotation } from './line-pattern';
 import { type LineReader, type Outcome, marks, outcomes, slots } from './line-reader';
-import { codeOf, numberOfLimbs, readNumber, separator } from './numbers';
+import { codeOf as codeOfByte, type Span, numberOfLimbs, readNumber, separator } from './numbers';
+
+// Bundlers turn what is imported into look-ups in another module; this file is run for every byte of a log.
+const codeOf = codeOfByte;
+const between = separator;
+const { blank, read: isRead, unread: isUnread } = outcomes;
+const { address: addressMark, written: writtenMark, read: readMark, mask: maskMark } = marks;
+const pairMarks = writtenMark | readMark;
 
 const roles = { none: 0, address: 1, written: 2, read: 3, mask: 4, register: 5, to: 6, step: 7 } as const;
 type Role = (typeof roles)[keyof typeof roles];
@@ -18,10 +25,6 @@ const mostColumns = 64;
 const lineEnd = 254;
 const highest = 2 ** 40 - 1;
 
-/** Words that join the two ends of a run, and those before the distance of its addresses. */
-const joiningWords = ['to', 'thru', 'through', 'until'];
-const stepWords = ['step', 'every'];
-
 interface Label {
   readonly codes: readonly number[];
   readonly hash: number;
@@ -32,6 +35,11 @@ function labelOf(word: string, role: Role): Label {
   const codes = Array.from(word, (letter) => codeOf[letter.charCodeAt(0)] ?? separator);
   return { codes, hash: codes.reduce((hash, code) => (Math.imul(hash, 37) + code) | 0, 0), role };
 }
+
+/** Words that join the two ends of a run, and those before the distance of its addresses. */
+const joiningWords = ['to', 'thru', 'through', 'until'].map((word) => labelOf(word, roles.to));
+const stepWords = ['step', 'every'].map((word) => labelOf(word, roles.step));
+const [letterT, letterU] = [29, 30];
 
 function roleColumns(pattern: ColumnPattern): (readonly [Role, Column])[] {
   const { address, written, read, mask, register } = pattern;
@@ -59,6 +67,7 @@ export class ColumnReader implements LineReader {
   private readonly codes = codeOf.slice();
   private readonly roleAt = new Uint8Array(mostColumns + 1);
   private readonly labels: readonly Label[];
+  private readonly labelStart = new Uint8Array(lineEnd);
   private readonly all: number;
   private readonly bitsOf = new Uint8Array(8);
   private readonly mostDigits = new Uint8Array(8);
@@ -79,8 +88,10 @@ export class ColumnReader implements LineReader {
     let all = 0;
     for (const [role, column] of columns) {
       all |= markOf[role]!;
-      if (typeof column === 'string') labels.push(labelOf(column, role));
-      else if (column >= 1 && column <= mostColumns) this.roleAt[column] = role;
+      if (typeof column === 'string') {
+        labels.push(labelOf(column, role));
+        this.labelStart[labels.at(-1)!.codes[0] ?? 0] = 1;
+      } else if (column >= 1 && column <= mostColumns) this.roleAt[column] = role;
     }
     this.all = all;
     this.freeDash = labels.length > 0;
@@ -98,12 +109,12 @@ export class ColumnReader implements LineReader {
   line(bytes: Uint8Array, at: number): Outcome {
     const outcome = this.follow(bytes, at, 'runs');
     // A dash that made a run may have stood between two columns.
-    if (outcome === outcomes.unread && this.to >= 0 && !this.freeDash) return this.follow(bytes, at, 'columns only');
+    if (outcome === isUnread && this.to >= 0 && !this.freeDash) return this.follow(bytes, at, 'columns only');
     return outcome;
   }
 
   private follow(bytes: Uint8Array, at: number, dashes: 'runs' | 'columns only'): Outcome {
-    const { codes, roleAt, labels, all } = this;
+    const { codes, roleAt, labels, labelStart, all } = this;
     this.has = 0;
     this.to = -1;
     this.step = 1;
@@ -116,12 +127,12 @@ export class ColumnReader implements LineReader {
     for (;;) {
       const gap = p;
       let code = codes[bytes[p]!]!;
-      while (code === separator) code = codes[bytes[++p]!]!;
+      while (code === between) code = codes[bytes[++p]!]!;
       if (code === lineEnd) break;
       const start = p;
       if (afterAddress) {
         afterAddress = false;
-        if (dashes === 'runs') {
+        if (dashes === 'runs' && (code === letterT || code === letterU || hasDash(bytes, gap, start))) {
           const end = this.runEnd(bytes, gap, start);
           if (end > 0) {
             p = end;
@@ -143,7 +154,7 @@ export class ColumnReader implements LineReader {
           code = codes[bytes[++p]!]!;
         } while (code < lineEnd);
         if (bad === 0 && p - start <= this.mostDigits[role]!) this.keepShort(role, value, p - start);
-        else if (!this.keepLong(bytes, [start, p], role)) {
+        else if (!this.keepLong({ bytes, from: start, to: p }, role)) {
           if (fixed) return this.leave(bytes, p);
           role = roles.none;
         }
@@ -156,19 +167,25 @@ export class ColumnReader implements LineReader {
         p = start;
         code = codes[bytes[p]!]!;
       }
+      // Few words begin like a label.
+      if (labelStart[code] === 0 && this.to < 0) {
+        do code = codes[bytes[++p]!]!;
+        while (code < lineEnd);
+        continue;
+      }
       let hash = 0;
       do {
         hash = (Math.imul(hash, 37) + code) | 0;
         code = codes[bytes[++p]!]!;
       } while (code < lineEnd);
       for (let n = 0; n < labels.length; n++) {
-        if (labels[n]!.hash === hash && this.isLabel(bytes, [start, p], labels[n]!)) {
+        if (labels[n]!.hash === hash && isLabel(bytes, start, labels[n]!) && labels[n]!.codes.length === p - start) {
           pending = labels[n]!.role;
           break;
         }
       }
       if (pending === roles.none && (labels.length > 0 || this.to >= 0)) pending = this.rareWord(bytes, start, p);
-      afterAddress = pending === roles.address && (this.has & marks.address) !== 0;
+      afterAddress = pending === roles.address && (this.has & addressMark) !== 0;
       if (afterAddress) pending = roles.none;
     }
     return this.leave(bytes, p, column);
@@ -179,11 +196,10 @@ export class ColumnReader implements LineReader {
     let p = at;
     while (this.codes[bytes[p]!] !== lineEnd) p++;
     this.next = p + 1;
-    if (column === 0) return outcomes.blank;
+    if (column === 0) return blank;
     const { has } = this;
-    const pair = marks.written | marks.read;
-    const whole = (has & marks.address) !== 0 && ((has & pair) === pair || (has & marks.mask) !== 0);
-    return whole && this.tooGreat === roles.none ? outcomes.read : outcomes.unread;
+    const whole = (has & addressMark) !== 0 && ((has & pairMarks) === pairMarks || (has & maskMark) !== 0);
+    return whole && this.tooGreat === roles.none ? isRead : isUnread;
   }
 
   private keepShort(role: Role, value: number, digits: number): void {
@@ -204,8 +220,8 @@ export class ColumnReader implements LineReader {
   }
 
   /** Numbers with marks of their base, decimal ones and those of more than 32 bits. */
-  private keepLong(bytes: Uint8Array, [from, to]: [number, number], role: Role): boolean {
-    const digits = readNumber({ bytes, from, to }, this.radixOf[role]!, { limbs: this.number, at: 0 });
+  private keepLong(span: Span, role: Role): boolean {
+    const digits = readNumber(span, this.radixOf[role]!, { limbs: this.number, at: 0 });
     if (digits === 0) return false;
     const mark = markOf[role]!;
     if ((this.has & mark) !== 0) return true;
@@ -231,9 +247,9 @@ export class ColumnReader implements LineReader {
     let from = start;
     let to = this.wordEnd(bytes, from);
     let freely = this.freeDash;
-    if (joiningWords.some((word) => this.isWord(bytes, [from, to], word))) {
+    if (joiningWords.some((word) => word.codes.length === to - from && isLabel(bytes, from, word))) {
       from = to;
-      while (this.codes[bytes[from]!] === separator) from++;
+      while (this.codes[bytes[from]!] === between) from++;
       to = this.wordEnd(bytes, from);
       freely = true;
     } else if (!hasDash(bytes, gap, start)) return 0;
@@ -252,24 +268,16 @@ export class ColumnReader implements LineReader {
     return p;
   }
 
-  private isLabel(bytes: Uint8Array, [from, to]: [number, number], { codes }: Label): boolean {
-    if (to - from !== codes.length) return false;
-    for (let n = 0; n < codes.length; n++) if (codeOf[bytes[from + n]!] !== codes[n]) return false;
-    return true;
-  }
-
-  private isWord(bytes: Uint8Array, span: [number, number], word: string): boolean {
-    return span[1] - span[0] === word.length && this.isLabel(bytes, span, labelOf(word, roles.none));
-  }
-
   /** A word before the step of a run, or a label with its number at once, such as W00. */
   private rareWord(bytes: Uint8Array, from: number, to: number): Role {
-    if (this.to >= 0 && stepWords.some((word) => this.isWord(bytes, [from, to], word))) return roles.step;
+    const size = to - from;
+    if (this.to >= 0 && stepWords.some((word) => word.codes.length === size && isLabel(bytes, from, word)))
+      return roles.step;
     for (const label of this.labels) {
       const cut = from + label.codes.length;
-      if (cut >= to || !this.isLabel(bytes, [from, cut], label)) continue;
-      if (!looksLikeNumber(bytes, cut, to) || !this.keepLong(bytes, [cut, to], label.role)) continue;
-      return label.role === roles.address ? roles.address : roles.none;
+      if (cut >= to || !isLabel(bytes, from, label) || !looksLikeNumber(bytes, cut, to)) continue;
+      if (this.keepLong({ bytes, from: cut, to }, label.role))
+        return label.role === roles.address ? label.role : roles.none;
     }
     return roles.none;
   }
@@ -284,6 +292,12 @@ export class ColumnReader implements LineReader {
     const notation = role === roles.address ? pattern.notation : (pattern.values ?? pattern.notation);
     return `There is no ${nouns[role]} (${notation} number, ${where}).`;
   }
+}
+
+/** Whether the word at a place begins with the letters of a label. */
+function isLabel(bytes: Uint8Array, from: number, { codes }: Label): boolean {
+  for (let n = 0; n < codes.length; n++) if (codeOf[bytes[from + n]!] !== codes[n]) return false;
+  return true;
 }
 
 /** A hyphen, a tilde, two dots, or a dash of UTF-8. */

@@ -169,13 +169,11 @@ function labelledShapes(fields: Fields, columns: readonly number[]): LineShape[]
     fields.address === undefined
       ? []
       : [{ columns: { address: fields.address, ...values, ...register }, told: 'words', passedOver: 0 }];
-  const placed = columns
-    .slice(0, mostBareColumns)
-    .map((address, at): LineShape => ({
-      columns: { address, ...values, ...register },
-      told: 'words',
-      passedOver: at + 3 * labelled.length,
-    }));
+  const placed = columns.slice(0, mostBareColumns).map((address, at): LineShape => ({
+    columns: { address, ...values, ...register },
+    told: 'words',
+    passedOver: at + 3 * labelled.length,
+  }));
   return [...labelled, ...placed];
 }
 
