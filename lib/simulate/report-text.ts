@@ -86,10 +86,27 @@ function field(speaker: Speaker, part: FormatField): Said {
     case 'count':
       return '1'.padStart(part.digits?.min ?? 1, '0');
     case 'syndrome':
-      return null;
+      return syndrome(speaker, part);
     case 'ignored':
       return part.table[0]?.text ?? '0'.repeat(part.digits?.min ?? 1);
   }
+}
+
+/** What the check equations of the machine's own code say of the failing bits, one equation after the other. */
+function syndrome({ bits, wiring }: Speaker, part: FormatField): Said {
+  const radix = radixOf[part.notation];
+  if (part.code === undefined || radix === undefined) return null;
+  const { columns } = part.code;
+  const covered = part.bits ?? Array.from({ length: wiring.bits }, (_, bit) => bit);
+  if (!bits.every((bit) => covered.includes(bit))) return null;
+  let value = 0;
+  for (let row = 1; columns.some((column) => column >= row); row *= 2) {
+    const wrong = bits.filter((bit) => Math.floor((columns[covered.indexOf(bit)] ?? 0) / row) % 2 === 1);
+    if (wrong.length % 2 === 1) value += row;
+  }
+  const highest = Math.max(...columns).toString(radix).length;
+  const text = fitted(part, value.toString(radix).toUpperCase(), radix === 10 ? 1 : highest);
+  return text !== null && part.table.some((entry) => entry.text === text) ? null : text;
 }
 
 /** Bits that a field counts where it does not say: those that are no check bits. */

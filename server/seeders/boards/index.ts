@@ -1,4 +1,5 @@
 import type { LayoutDocumentInput } from '@/shared';
+import { brathvikHs3 } from './brathvik-hs3';
 import { corvaneSix } from './corvane-six';
 import { ferrowHy128 } from './ferrow-hy128';
 import { hallebroSx40 } from './hallebro-sx40';
@@ -32,4 +33,5 @@ export const demoBoards: readonly DemoBoard[] = [
   { slug: 'rimstad-ct-7-rev-3', document: rimstadCt7 },
   { slug: 'wrayburn-gr-5-2b', document: wrayburnGr5 },
   { slug: 'corvane-six-a1', document: corvaneSix },
+  { slug: 'brathvik-hs-3-rev-f', document: brathvikHs3 },
 ];
