@@ -60,7 +60,7 @@ export function AnswerCard({ bench, runs, diagnosis }: AnswerCardProps) {
         </View>
       )}
       <Signatures index={bench.index} diagnosis={diagnosis} />
-      {diagnosis.outcome === 'supply' ? <Supplies bench={bench} runs={runs} /> : null}
+      {diagnosis.outcome === 'supply' ? <Supplies {...{ bench, runs, diagnosis }} /> : null}
       <Unread diagnosis={diagnosis} />
       {diagnosis.groups.map((group) => (
         <GroupMembers
@@ -85,18 +85,18 @@ export function AnswerCard({ bench, runs, diagnosis }: AnswerCardProps) {
 }
 
 /** What was measured, where the supply is the answer: the pin and the value stand large. */
-function Supplies({ bench, runs }: Pick<AnswerCardProps, 'bench' | 'runs'>) {
+function Supplies({ bench, runs, diagnosis }: AnswerCardProps) {
   const styles = useStyles();
   const measured = measuredSupplies(bench, runs);
   if (measured.length === 0) return null;
   return (
     <View role="list" aria-label="Measured supplies" style={styles.more}>
-      {measured.map(({ text, verdict, bad }) => (
+      {measured.map(({ text, verdict, bad, place }) => (
         <View key={text} role="listitem">
           <Text variant={bad ? 'code' : 'codeSmall'} tone={bad ? 'answer' : 'ink'}>
             {text}
           </Text>
-          {verdict === '' ? null : <Text variant="small">{verdict}</Text>}
+          {verdict === '' || isSaid(diagnosis, place) ? null : <Text variant="small">{verdict}</Text>}
         </View>
       ))}
     </View>

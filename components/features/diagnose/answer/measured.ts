@@ -5,6 +5,9 @@ import { voltWords } from '../volt-words';
 
 /** A supply as it was measured last at a pin, in words. */
 export interface Measured {
+  readonly pin: number;
+  /** "Pin 8 of U31". */
+  readonly place: string;
   readonly text: string;
   readonly verdict: string;
   readonly bad: boolean;
@@ -19,6 +22,8 @@ export function measuredSupplies(bench: Bench, runs: readonly Run[]): Measured[]
     const { words, bad } = pin === undefined ? { words: '', bad: false } : verdictOf(pin, seen.volts);
     const name = pin === undefined ? '' : `, ${pin.name}`;
     last.set(`${seen.socket} ${seen.pin}`, {
+      pin: seen.pin,
+      place: `Pin ${seen.pin} of ${seen.socket}`,
       text: `${seen.socket} pin ${seen.pin}${name}: ${voltWords(seen.volts)}`,
       verdict: words,
       bad,

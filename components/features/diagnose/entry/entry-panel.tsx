@@ -46,7 +46,11 @@ export function EntryPanel({ model, between, keysAtFoot = false }: EntryPanelPro
           choice
         )}
         <CodeEntry bench={bench} entry={entry} />
-        <KindEntry bench={bench} entry={entry} />
+        <KindEntry
+          bench={bench}
+          entry={entry}
+          onClose={() => (entry.editing ? workspace.goTo({ at: 'answer' }) : entry.chooseTab(otherTab))}
+        />
         <EnteredList model={model} />
         {workspace.runs.length > 0 ? <EditActions model={model} /> : null}
       </View>

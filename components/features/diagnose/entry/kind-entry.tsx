@@ -3,6 +3,7 @@ import { makeStyles } from '@/components/theme';
 import { Button } from '@/components/ui/button';
 import { Text } from '@/components/ui/text';
 import type { Bench } from '../bench';
+import { PictureEntry } from '../picture/picture-entry';
 import { AliasEntry } from './alias-entry';
 import { BitsEntry } from './bits-entry';
 import { ActionList } from './choice-list';
@@ -27,8 +28,15 @@ import { SignEntry } from './sign-entry';
 import { SupplyEntry } from './supply-entry';
 import type { Entry } from './use-entry';
 
+type KindEntryProps = {
+  bench: Bench;
+  entry: Entry;
+  /** Back from a kind that has its own way out. */
+  onClose: () => void;
+};
+
 /** What is entered in a tab that is no report format, under its name where the strip does not say it. */
-export function KindEntry({ bench, entry }: { bench: Bench; entry: Entry }) {
+export function KindEntry({ bench, entry, onClose }: KindEntryProps) {
   const styles = useStyles();
   const { tab } = entry;
   const kind = isOther(bench, tab) ? otherKinds(bench).find((one) => one.tab === tab) : undefined;
@@ -43,7 +51,7 @@ export function KindEntry({ bench, entry }: { bench: Bench; entry: Entry }) {
           <Button kind="quiet" label="Another kind" onPress={() => entry.chooseTab(otherTab)} />
         </View>
       )}
-      <Body bench={bench} entry={entry} />
+      <Body bench={bench} entry={entry} onClose={onClose} />
       {entry.refused === null ? null : (
         <Text variant="smallStrong" tone="pencil">
           {entry.refused}
@@ -53,7 +61,7 @@ export function KindEntry({ bench, entry }: { bench: Bench; entry: Entry }) {
   );
 }
 
-function Body({ bench, entry }: { bench: Bench; entry: Entry }) {
+function Body({ bench, entry, onClose }: KindEntryProps) {
   const { text, setText } = entry;
   switch (entry.tab) {
     case bitsTab:
@@ -74,8 +82,16 @@ function Body({ bench, entry }: { bench: Bench; entry: Entry }) {
       return entry.before?.kind === 'either' ? (
         <EitherEntry bench={bench} seen={entry.before} onChoose={entry.add} />
       ) : null;
-    case logTab:
     case pictureTab:
+      return (
+        <PictureEntry
+          index={bench.index}
+          before={entry.before?.kind === 'picture' ? entry.before : undefined}
+          onEvidence={entry.add}
+          onClose={onClose}
+        />
+      );
+    case logTab:
       return null;
     default:
       return (

@@ -52,9 +52,14 @@ export function draftOfReadings(index: LayoutIndex, { lines, rest, unit, waited 
   };
 }
 
+/** More characters than this are not read at every key; some eight thousand lines. They are a log. */
+const longestTyped = 100_000;
+
 /** What typed readings come to. */
 export interface TypedReadings {
   readonly parsed: ParsedReadings;
+  /** There is more text than is read here. */
+  readonly cut: boolean;
   /** The ways that remain, each with what it takes; one of them without words where nothing is open. */
   readonly ways: readonly { readonly takes: string; readonly evidence: PlainEvidence }[];
   readonly evidence: Evidence | null;
@@ -67,7 +72,8 @@ export interface TypedReadings {
 
 /** Reads the draft, with what was said of all of it put in the place of what the text lets open. */
 export function readTyped(index: LayoutIndex, draft: ReadingsDraft): TypedReadings {
-  const parsed = parse(index, draft);
+  const cut = draft.text.length > longestTyped;
+  const parsed = parse(index, cut ? { ...draft, text: wholeLines(draft.text) } : draft);
   const found = parsed.evidence;
   const waited = readSeconds(draft.waited);
   const plain = found === null ? [] : found.kind === 'either' ? found.ways : [{ takes: '', evidence: found }];
@@ -82,6 +88,7 @@ export function readTyped(index: LayoutIndex, draft: ReadingsDraft): TypedReadin
   const shown = (chosen ?? ways[0])?.evidence;
   return {
     parsed,
+    cut,
     ways,
     evidence: evidenceOf(chosen === undefined ? ways : [chosen]),
     rest: draft.rest ?? (shown?.kind === 'readings' ? shown.rest : 'unknown'),
@@ -89,6 +96,8 @@ export function readTyped(index: LayoutIndex, draft: ReadingsDraft): TypedReadin
     waited,
   };
 }
+
+const wholeLines = (text: string) => text.slice(0, text.lastIndexOf('\n', longestTyped) + 1 || longestTyped);
 
 function parse(index: LayoutIndex, { text, unit }: ReadingsDraft): ParsedReadings {
   const parsed = parseReadings(index, text);

@@ -59,7 +59,7 @@ function example({ document: { addressMap, memory } }: Bench): string {
 }
 
 /** How many lines were read, and what was taken for granted. */
-function Said({ typed: { parsed, ways } }: { typed: TypedReadings }) {
+function Said({ typed: { parsed, ways, cut } }: { typed: TypedReadings }) {
   const styles = useStyles();
   if (parsed.lines === 0) return <View role="status" />;
   const [first] = ways;
@@ -73,6 +73,11 @@ function Said({ typed: { parsed, ways } }: { typed: TypedReadings }) {
             ? 'Everything passed.'
             : `${count} ${count === 1 ? 'reading' : 'readings'}.`}
       </Text>
+      {cut ? (
+        <Text variant="smallStrong" tone="pencil">
+          This is more than is read here: take it in as a log, under “Something else”.
+        </Text>
+      ) : null}
       {parsed.notes.map((note) => (
         <Text key={note} variant="small" tone="soft">
           {note}

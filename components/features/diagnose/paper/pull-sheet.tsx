@@ -6,11 +6,14 @@ import { createDomElement } from '@/components/ui/dom-element';
 import { percentWords } from '@/components/ui/percent';
 import { Text } from '@/components/ui/text';
 import { Wordmark } from '@/components/features/shell/wordmark';
+import { addressWords } from '@/lib/layout/words';
 import type { Diagnosis, Run } from '@/shared';
 import { stated } from '../stated';
 import { leadingSuspects, suspectKind, suspectName } from '../answer/suspect-words';
 import type { Bench } from '../bench';
+import { measuredSupplies } from '../answer/measured';
 import { evidenceWords, runTitle } from '../evidence-words';
+import { placeWords } from '../runs/word-places';
 import { pullSteps } from './pull-steps';
 
 type PullSheetProps = {
@@ -24,13 +27,19 @@ type PullSheetProps = {
 /** Suspects, and pieces of evidence of a run, that fit on one page. */
 const mostSuspects = 4;
 const mostEvidence = 8;
+/** Patterns, decoded places of one piece of evidence, and measured supplies that fit. */
+const mostPatterns = 2;
+const mostPlaces = 3;
+const mostSupplies = 6;
 /** Suspects below this probability are left to the screen. */
 const leastPrinted = 0.01;
 
 /** One page for the bench: what was reported, what to pull, how sure, the steps, and blanks to fill in by hand. */
 export function PullSheet({ bench, runs, diagnosis, marks, view }: PullSheetProps) {
   const styles = useStyles();
-  const { board, rails } = bench.document;
+  const { board } = bench.document;
+  const said = diagnosis.sentences.slice(0, 4);
+  const patterns = diagnosis.signatures.slice(0, mostPatterns).map(({ words }) => words);
   return (
     <View aria-hidden dataSet={{ paper: 'pull-sheet' }} style={styles.page}>
       {createDomElement('style', { children: paperRules })}
@@ -52,7 +61,7 @@ export function PullSheet({ bench, runs, diagnosis, marks, view }: PullSheetProp
         </Text>
         <Text variant="small">
           {diagnosis.probability === null ? '' : `${percentWords(stated(diagnosis.probability))}. `}
-          {diagnosis.sentences.slice(0, 4).join(' ')}
+          {[...said, ...patterns.filter((words) => !said.join(' ').includes(words))].join(' ')}
         </Text>
       </View>
       <View style={styles.columns}>
@@ -67,8 +76,9 @@ export function PullSheet({ bench, runs, diagnosis, marks, view }: PullSheetProp
           />
         </View>
         <View style={styles.right}>
-          <Reported bench={bench} runs={runs} />
+          <Reported bench={bench} runs={runs} diagnosis={diagnosis} />
           <Suspects diagnosis={diagnosis} />
+          <Open diagnosis={diagnosis} />
         </View>
       </View>
       <View style={styles.columns}>
@@ -89,10 +99,7 @@ export function PullSheet({ bench, runs, diagnosis, marks, view }: PullSheetProp
           <Text variant="smallStrong" level={3}>
             Measured at the socket
           </Text>
-          {rails.slice(0, 6).map(({ name, pins }) => (
-            <Blank key={name} label={`${name}, pin ${pins.join(' and ')}`} />
-          ))}
-          {rails.length === 0 ? <Blank label="Supply" /> : null}
+          <MeasuredOnPaper bench={bench} runs={runs} />
         </View>
       </View>
       <View style={styles.cautions}>
@@ -115,7 +122,9 @@ const paperRules = `
 
 const ignore = () => undefined;
 
-function Reported({ bench, runs }: { bench: Bench; runs: readonly Run[] }) {
+function Reported({ bench, runs, diagnosis }: Pick<PullSheetProps, 'bench' | 'runs' | 'diagnosis'>) {
+  const placesOf = (run: number, index: number) =>
+    diagnosis.evidence.find((one) => one.run === run && one.index === index)?.words ?? [];
   return (
     <View>
       <Text variant="smallStrong" level={3}>
@@ -127,10 +136,19 @@ function Reported({ bench, runs }: { bench: Bench; runs: readonly Run[] }) {
           {run.evidence.slice(0, mostEvidence).map((seen, index) => {
             const { text, note } = evidenceWords(seen, bench);
             return (
-              <Text key={index} variant="codeSmall">
-                {text}
-                <Text variant="fine">{`  ${note}`}</Text>
-              </Text>
+              <View key={index}>
+                <Text variant="codeSmall">
+                  {text}
+                  <Text variant="fine">{`  ${note}`}</Text>
+                </Text>
+                {placesOf(at, index)
+                  .slice(0, mostPlaces)
+                  .map((place, nth) => (
+                    <Text key={nth} variant="fine">
+                      {`${addressWords(bench.document.addressMap, place.address)}: ${placeWords(bench.index, place)}`}
+                    </Text>
+                  ))}
+              </View>
             );
           })}
           {run.evidence.length > mostEvidence ? (
@@ -161,6 +179,48 @@ function Suspects({ diagnosis }: { diagnosis: Diagnosis }) {
         </View>
       ))}
     </View>
+  );
+}
+
+/** What nobody knows yet, with boxes to tick once it is known. */
+function Open({ diagnosis: { questions } }: { diagnosis: Diagnosis }) {
+  const styles = useStyles();
+  return questions.map(({ ask, answers }) => (
+    <View key={ask} style={styles.suspects}>
+      <Text variant="smallStrong" level={3}>
+        {ask}
+      </Text>
+      {answers.slice(0, mostSuspects).map(({ words, share }) => (
+        <View key={words} style={styles.step}>
+          <View style={styles.box} />
+          <Text variant="small" style={styles.words}>
+            {words}
+          </Text>
+          <Text variant="small">{percentWords(stated(share))}</Text>
+        </View>
+      ))}
+    </View>
+  ));
+}
+
+/** What was measured, and blanks for the rails that were not. */
+function MeasuredOnPaper({ bench, runs }: Pick<PullSheetProps, 'bench' | 'runs'>) {
+  const { rails } = bench.document;
+  const measured = measuredSupplies(bench, runs).slice(0, mostSupplies);
+  const done = new Set(measured.map(({ pin }) => pin));
+  const blanks = rails.filter(({ pins }) => !pins.some((pin) => done.has(pin)));
+  return (
+    <>
+      {measured.map(({ text, verdict }) => (
+        <Text key={text} variant="fine">
+          {`${text}. ${verdict}`.trim()}
+        </Text>
+      ))}
+      {blanks.slice(0, mostSupplies - measured.length).map(({ name, pins }) => (
+        <Blank key={name} label={`${name}, pin ${pins.join(' and ')}`} />
+      ))}
+      {rails.length === 0 && measured.length === 0 ? <Blank label="Supply" /> : null}
+    </>
   );
 }
 
