@@ -112,6 +112,37 @@ describe.each(sizes)('the main job $name', (size) => {
     expect(await barriers()).toEqual([]);
   });
 
+  it('takes readings as they are typed, then a supply that stands before every chip', async () => {
+    await open(size, 'dark');
+    await page.goto(`${address}${board}/diagnose`);
+    await page.getByRole('radio', { name: 'Readings' }).click();
+    await page.getByLabel(/^Address, what was written/).fill('4C1A FF F7\nnothing here\n4C1B FF F7');
+    await page
+      .getByText(/^Bit 3 of bank B; row \d+, column \d+\.$/)
+      .first()
+      .waitFor();
+    await page.getByText(/Line 2 not read/).waitFor();
+    expect(await barriers()).toEqual([]);
+    expect(await sideways()).toBeLessThanOrEqual(0);
+    await key('Find the chip').click();
+    await page.getByText(/4C1A Bank B, bit 3, row/).waitFor();
+    expect(await barriers()).toEqual([]);
+
+    await key('It reported more').click();
+    await page.getByRole('radio', { name: 'Something else' }).click();
+    await page.getByRole('button', { name: /^The supply\./ }).click();
+    await page.getByLabel('Socket', { exact: true }).fill('U31');
+    await page.getByRole('radio', { name: /^Pin 9: \+5 V/ }).click();
+    await page.getByLabel('Volts measured').fill('4,2');
+    await page.getByText(/^Too low: pin 9/).waitFor();
+    expect(await barriers()).toEqual([]);
+    expect(await sideways()).toBeLessThanOrEqual(0);
+    await key('Use this value').click();
+    await page.getByRole('heading', { name: /supply right first/ }).waitFor();
+    expect(await barriers()).toEqual([]);
+    expect(page.url()).toMatch(/r\.-\.4C1AwFFrF7\.4C1BwFFrF7~u\.U31\.9\.4-2/);
+  });
+
   it.each(['light', 'dark'] as const)('has no barrier on any page that a guest can open, %s', async (scheme) => {
     await open(size, scheme);
     const paths = [

@@ -88,6 +88,32 @@ describe('after the answer', () => {
     expect(screen.queryByText('Something else was done')).toBeNull();
   });
 
+  it('takes the outcome of the swap by one tap, and takes it back again', async () => {
+    const { user } = showWorkspace(loom, { r: '1~c.lamp.C5' });
+    await user.click(control(/^I saw C4: /));
+    expect(address.params.r).toMatch(/^1~c\.lamp\.C5~n~s\.U31\.U\d\d~c\.lamp\.C4$/);
+    expect(headline()).toContain('came from U31');
+    await user.click(control('Undo'));
+    expect(address.params.r).toBe('1~c.lamp.C5');
+  });
+
+  it('puts the supply right before any chip, and asks for the volts where they are wanted', async () => {
+    const { user } = showWorkspace(loom, { r: '1~c.lamp.C5~u.U31.8.4-2' });
+    expect(headline()).toMatch(/supply right first/);
+    expect(answer().getByText('The supply comes before any chip')).toBeInTheDocument();
+    expect(answer().getByText(/^U31 pin 8, .*: 4\.2\sV$/)).toBeInTheDocument();
+    await user.click(control('Enter the volts'));
+    expect(screen.getByRole('heading', { name: 'The supply' })).toBeInTheDocument();
+  });
+
+  it('asks how the machine counts, and takes an answer for true', async () => {
+    const { user } = showWorkspace(loom, { r: '1~q.order.lamp.C5' });
+    expect(screen.getByText('Which end is bit 0 on this machine?')).toBeInTheDocument();
+    await user.click(control('It is so: bit 0 is the lowest'));
+    expect(address.params.r).toBe('1~c.lamp.C5');
+    expect(headline()).toBe('Pull U31 first.');
+  });
+
   it('follows the chip: it is named by where it is now', () => {
     showWorkspace(loom, { r: '1~c.lamp.C5~n~s.U31.U23~c.lamp.B5' });
     expect(headline()).toContain('U23');
