@@ -11,5 +11,6 @@ export { PeopleScreen } from './admin/people-screen';
 export { BoardScreen } from './boards/board-screen';
 export { ContributeScreen } from './contribute/contribute-screen';
 export { DiagnoseScreen } from './diagnose/diagnose-screen';
+export { PartsScreen } from './parts/parts-screen';
 export { ReviewListScreen } from './review/review-list-screen';
 export { ReviewScreen } from './review/review-screen';

@@ -3,7 +3,10 @@ import { pinList } from './pin-list';
 
 const K = 1024;
 
-/** Dynamic RAM families, the oldest first. Pins, supplies and refresh from the source that each names. */
+/**
+ * Dynamic RAM families, the oldest first. Pins, supplies and refresh from the source that each names;
+ * access times are the usual ones (common practice, no source).
+ */
 export const dynamicFamilies: readonly ChipFamily[] = [
   {
     id: 'dynamic-4k-1-three-rail',
@@ -15,6 +18,7 @@ export const dynamicFamilies: readonly ChipFamily[] = [
     pins: pinList('-5V D /W /RAS A0 A2 A1 +12V +5V A5 A4 A3 /CS Q /CAS 0V'),
     rows: 64,
     refreshMs: 2,
+    gradesNs: [150, 200, 250, 300],
     stackable: true,
     source:
       'From memory; compare with the data sheet of the chip at hand. The older kind has 22 pins and is another family.',
@@ -29,6 +33,7 @@ export const dynamicFamilies: readonly ChipFamily[] = [
     pins: pinList('-5V D /W /RAS A0 A2 A1 +12V +5V A5 A4 A3 A6 Q /CAS 0V'),
     rows: 128,
     refreshMs: 2,
+    gradesNs: [150, 200, 250, 300],
     stackable: true,
     source:
       'Pins: museo8bits.com wiki, "4116 DRAM"; c64-wiki.com, "RAM"; osiweb.org, 4116to4164.txt. Type numbers: from memory.',
@@ -43,6 +48,7 @@ export const dynamicFamilies: readonly ChipFamily[] = [
     pins: pinList('NC D /W /RAS A0 A2 A1 +5V A7 A5 A4 A3 A6 Q /CAS 0V'),
     rows: 256,
     refreshMs: 4,
+    gradesNs: [100, 120, 150, 200],
     stackable: true,
     source:
       'Pins: osiweb.org, 4116to4164.txt; minuszerodegrees.net, 4164_128row. Some makers ask for 128 rows in 2 ms and some use pin 1 for refresh: see dynamic-64k-1-128-row. Type numbers: from memory.',
@@ -57,6 +63,7 @@ export const dynamicFamilies: readonly ChipFamily[] = [
     pins: pinList('NC D /W /RAS A0 A2 A1 +5V A7 A5 A4 A3 A6 Q /CAS 0V'),
     rows: 128,
     refreshMs: 2,
+    gradesNs: [150, 200],
     stackable: true,
     source: 'Pins: osiweb.org, 4116to4164.txt. Rows: minuszerodegrees.net, 4164_128row. Type numbers: from memory.',
   },
@@ -70,6 +77,7 @@ export const dynamicFamilies: readonly ChipFamily[] = [
     pins: pinList('A8 D /W /RAS A0 A2 A1 +5V A7 A5 A4 A3 A6 Q /CAS 0V'),
     rows: 256,
     refreshMs: 4,
+    gradesNs: [80, 100, 120, 150],
     stackable: true,
     source: 'From memory; the pins but 1 are those of the 64K part.',
   },
@@ -83,6 +91,7 @@ export const dynamicFamilies: readonly ChipFamily[] = [
     pins: pinList('D /W /RAS NC A0 A1 A2 A3 +5V A4 A5 A6 A7 A8 A9 /CAS Q 0V'),
     rows: 512,
     refreshMs: 8,
+    gradesNs: [70, 80, 100, 120],
     stackable: true,
     source: 'From memory; compare with the data sheet of the chip at hand.',
   },
@@ -96,6 +105,7 @@ export const dynamicFamilies: readonly ChipFamily[] = [
     pins: pinList('/OE D0 D1 /W /RAS A6 A5 A4 +5V A7 A3 A2 A1 A0 D2 /CAS D3 0V'),
     rows: 256,
     refreshMs: 4,
+    gradesNs: [120, 150, 200],
     stackable: true,
     source: 'From memory; compare with the data sheet of the chip at hand.',
   },
@@ -109,6 +119,7 @@ export const dynamicFamilies: readonly ChipFamily[] = [
     pins: pinList('/OE D0 D1 /W /RAS A6 A5 A4 +5V A7 A3 A2 A1 A0 D2 /CAS D3 0V'),
     rows: 256,
     refreshMs: 4,
+    gradesNs: [80, 100, 120, 150],
     stackable: true,
     source: 'From memory; compare with the data sheet of the chip at hand.',
   },
@@ -122,6 +133,7 @@ export const dynamicFamilies: readonly ChipFamily[] = [
     pins: pinList('D0 D1 /W /RAS NC A0 A1 A2 A3 +5V A4 A5 A6 A7 A8 /OE /CAS D2 D3 0V'),
     rows: 512,
     refreshMs: 8,
+    gradesNs: [70, 80, 100, 120],
     stackable: true,
     source: 'From memory; compare with the data sheet of the chip at hand.',
   },

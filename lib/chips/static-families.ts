@@ -3,7 +3,10 @@ import { pinList } from './pin-list';
 
 const K = 1024;
 
-/** Static RAM families, all on +5 V, the smallest first. Pins from the source that each names. */
+/**
+ * Static RAM families, all on +5 V, the smallest first. Pins from the source that each names; access times are
+ * the usual ones (common practice, no source).
+ */
 export const staticFamilies: readonly ChipFamily[] = [
   {
     id: 'static-1k-1',
@@ -13,6 +16,7 @@ export const staticFamilies: readonly ChipFamily[] = [
     words: K,
     width: 1,
     pins: pinList('A6 A5 /W A1 A2 A3 A4 A0 0V +5V D Q /CS A9 A8 A7'),
+    gradesNs: [250, 350, 450, 650],
     stackable: true,
     source: 'From memory; compare with the data sheet of the chip at hand.',
   },
@@ -24,6 +28,7 @@ export const staticFamilies: readonly ChipFamily[] = [
     words: K,
     width: 4,
     pins: pinList('A6 A5 A4 A3 A0 A1 A2 /CS 0V /W D3 D2 D1 D0 A9 A8 A7 +5V'),
+    gradesNs: [200, 300, 450],
     stackable: true,
     source: 'Pins: c64-wiki.com, "RAM". Its data pins are numbered from 1 there.',
   },
@@ -35,6 +40,7 @@ export const staticFamilies: readonly ChipFamily[] = [
     words: 2 * K,
     width: 8,
     pins: pinList('A7 A6 A5 A4 A3 A2 A1 A0 D0 D1 D2 0V D3 D4 D5 D6 D7 /CS A10 /OE /W A9 A8 +5V'),
+    gradesNs: [100, 120, 150, 200],
     stackable: true,
     source: 'From memory; compare with the data sheet of the chip at hand.',
   },
@@ -46,6 +52,7 @@ export const staticFamilies: readonly ChipFamily[] = [
     words: 8 * K,
     width: 8,
     pins: pinList('NC A12 A7 A6 A5 A4 A3 A2 A1 A0 D0 D1 D2 0V D3 D4 D5 D6 D7 /CS A10 /OE A11 A9 A8 CS2 /W +5V'),
+    gradesNs: [70, 100, 120, 150],
     stackable: true,
     source: 'From memory; compare with the data sheet of the chip at hand.',
   },
@@ -57,6 +64,7 @@ export const staticFamilies: readonly ChipFamily[] = [
     words: 32 * K,
     width: 8,
     pins: pinList('A14 A12 A7 A6 A5 A4 A3 A2 A1 A0 D0 D1 D2 0V D3 D4 D5 D6 D7 /CS A10 /OE A11 A9 A8 A13 /W +5V'),
+    gradesNs: [55, 70, 85, 100, 120],
     stackable: true,
     source: 'Pins: Debian package kicad-symbols 6.0.10, Memory_RAM.kicad_sym, KM62256CLP.',
   },
@@ -70,6 +78,7 @@ export const staticFamilies: readonly ChipFamily[] = [
     pins: pinList(
       'NC A16 A14 A12 A7 A6 A5 A4 A3 A2 A1 A0 D0 D1 D2 0V D3 D4 D5 D6 D7 /CS A10 /OE A11 A9 A8 A13 /W CS2 A15 +5V',
     ),
+    gradesNs: [55, 70, 85, 100],
     stackable: true,
     source: 'Pins: Debian package kicad-symbols 6.0.10, Memory_RAM.kicad_sym, 628128_DIP32_SSOP32.',
   },

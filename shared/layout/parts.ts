@@ -40,6 +40,11 @@ export const chipFamily = z.strictObject({
   pins: z.array(chipPin).max(64).default([]),
   rows: z.number().int().min(1).optional().describe('Rows that a refresh must reach.'),
   refreshMs: z.number().positive().optional(),
+  gradesNs: z
+    .array(z.number().positive().max(10_000))
+    .max(16)
+    .optional()
+    .describe('Access times in nanoseconds with which the family was usually sold, the fastest first.'),
   stackable: z
     .boolean()
     .default(false)

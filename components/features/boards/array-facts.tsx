@@ -1,5 +1,6 @@
 import { View } from 'react-native';
 import { makeStyles } from '@/components/theme';
+import { Link } from '@/components/ui/link';
 import { Text } from '@/components/ui/text';
 import { addressWords, listWords, numbersWords } from '@/lib/layout/words';
 import type { AddressWindow, Bank, LayoutDocument } from '@/shared';
@@ -24,6 +25,9 @@ export function ArrayFacts({ document }: { document: LayoutDocument }) {
             value: name,
           }))}
         />
+        <Link href="/parts" variant="smallStrong" standalone>
+          RAM chips: will another fit?
+        </Link>
       </View>
       <Rails document={document} />
       <Inputs document={document} />

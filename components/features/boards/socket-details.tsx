@@ -4,8 +4,10 @@ import type { PickTarget } from '@/components/board/sketch-types';
 import { heldWords, partWordings } from '@/components/board/words';
 import type { Bench } from '@/components/features/diagnose/bench';
 import { lanesOf } from '@/components/features/diagnose/marks';
+import { partsLink } from '@/components/features/parts/parts-link';
 import { makeStyles, useBreakpoint } from '@/components/theme';
 import { Button } from '@/components/ui/button';
+import { Link } from '@/components/ui/link';
 import { Text } from '@/components/ui/text';
 import { servedLanes } from '@/lib';
 import { sentenceCase } from '@/lib/layout/words';
@@ -46,6 +48,9 @@ export function SocketDetails({ bench, label, onPick }: SocketDetailsProps) {
       <View style={styles.part}>
         <Text variant="subheading">Chip</Text>
         <DetailLines label="Chip" lines={chipLines({ bench, socket, family })} />
+        <Link href={partsLink({ socket: socket.family })} variant="smallStrong" standalone>
+          Will another chip fit?
+        </Link>
       </View>
       <Served bench={bench} at={at} onPick={onPick} />
     </View>

@@ -1,5 +1,6 @@
 import { View } from 'react-native';
 import { makeStyles } from '@/components/theme';
+import { Link } from '@/components/ui/link';
 import { Page } from '@/components/ui/page';
 import { Rule } from '@/components/ui/rule';
 import { Text } from '@/components/ui/text';
@@ -22,6 +23,11 @@ export function CautionsScreen() {
             <View style={styles.words}>
               <Text variant="heading">{title}</Text>
               <Text>{body}</Text>
+              {id === 'wrong-rail' || id === 'negative-rail' ? (
+                <Link href="/parts" variant="smallStrong" standalone aria-label={`RAM chips: will it fit? (${title})`}>
+                  RAM chips: will it fit?
+                </Link>
+              ) : null}
             </View>
           </View>
         ))}

@@ -195,9 +195,9 @@ function ChangeStep({ model }: { model: WorkspaceModel }) {
     <View style={styles.step}>
       <Text variant="title">What was done?</Text>
       <ChangePanel
+        bench={model.bench}
         draft={model.change}
         onDraft={model.setChange}
-        isSocket={(label) => model.bench.index.socketByLabel.has(label)}
         onDone={model.finishChange}
         onCancel={() => model.workspace.goTo({ at: 'answer' })}
       />

@@ -4,7 +4,7 @@ import { Link } from '@/components/ui/link';
 import { Text } from '@/components/ui/text';
 import { ThemeSwitch } from './theme-switch';
 
-/** The foot of every page: the cautions in one line, and the theme. */
+/** The foot of every page: the cautions in one line, the way to the chips, and the theme. */
 export function Footer() {
   const styles = useStyles();
   const phone = useBreakpoint() === 'phone';
@@ -16,6 +16,9 @@ export function Footer() {
         </Text>
         <Link href="/learn/cautions" variant="smallStrong" standalone>
           All cautions
+        </Link>
+        <Link href="/parts" variant="smallStrong" standalone>
+          RAM chips
         </Link>
       </View>
       <ThemeSwitch />

@@ -4,6 +4,8 @@ import type { Change } from '@/shared';
 export interface ChangeDraft {
   readonly kind: 'swap' | 'known-good' | 'untested' | 'reseat' | 'again';
   readonly sockets: readonly [string, string];
+  /** The family of a chip that was fitted, where it is not that of its socket. */
+  readonly family?: string;
 }
 
 /** The things that can be done between two runs, and how many sockets each needs. */
@@ -70,7 +72,14 @@ export function changesOf(draft: ChangeDraft): Change[] {
       return [{ kind: 'swap', sockets: [one, other] }];
     case 'known-good':
     case 'untested':
-      return [{ kind: 'replace', socket: one, with: draft.kind }];
+      return [
+        {
+          kind: 'replace',
+          socket: one,
+          with: draft.kind,
+          ...(draft.family === undefined ? {} : { family: draft.family }),
+        },
+      ];
     case 'reseat':
       return [{ kind: 'reseat', socket: one }];
     case 'again':

@@ -4,21 +4,23 @@ import { Button } from '@/components/ui/button';
 import { Field } from '@/components/ui/field';
 import { SegmentedControl } from '@/components/ui/segmented-control';
 import { Text } from '@/components/ui/text';
+import type { Bench } from '../bench';
 import { changeProblem, changeTabs, type ChangeDraft } from './change-draft';
+import { FittedFamily } from './fitted-family';
 
 type ChangePanelProps = {
+  bench: Bench;
   draft: ChangeDraft;
   onDraft: (draft: ChangeDraft) => void;
-  isSocket: (label: string) => boolean;
   onDone: () => void;
   onCancel: () => void;
 };
 
 /** What was done to the board before the next run. Sockets are tapped on the sketch or written. */
-export function ChangePanel({ draft, onDraft, isSocket, onDone, onCancel }: ChangePanelProps) {
+export function ChangePanel({ bench, draft, onDraft, onDone, onCancel }: ChangePanelProps) {
   const styles = useStyles();
   const tab = changeTabs.find(({ value }) => value === draft.kind) ?? changeTabs[0];
-  const problem = changeProblem(draft, isSocket);
+  const problem = changeProblem(draft, (label) => bench.index.socketByLabel.has(label));
   const set = (at: 0 | 1, text: string) =>
     onDraft({ ...draft, sockets: at === 0 ? [text, draft.sockets[1]] : [draft.sockets[0], text] });
   return (
@@ -49,6 +51,14 @@ export function ChangePanel({ draft, onDraft, isSocket, onDone, onCancel }: Chan
           ) : null}
         </View>
       )}
+      {draft.kind === 'known-good' || draft.kind === 'untested' ? (
+        <FittedFamily
+          bench={bench}
+          socket={draft.sockets[0].trim()}
+          family={draft.family}
+          onFamily={(family) => onDraft({ ...draft, family })}
+        />
+      ) : null}
       <View role="status">
         {problem === null || problem.quiet ? null : (
           <Text variant="smallStrong" tone="pencil">
