@@ -44,7 +44,7 @@ export {
 export { tallyReadings } from './readings/tally';
 export { eitherReadings, parseReadings, type ParsedReadings, type UnreadLine } from './logs/parse-readings';
 export { findLinePatterns } from './logs/find-pattern';
-export { patternWords, type Column, type LinePattern } from './logs/line-pattern';
+export { isFormatPattern, patternWords, type Column, type ColumnPattern, type LinePattern } from './logs/line-pattern';
 export {
   brierScore,
   expectedCalibrationError,
@@ -86,3 +86,5 @@ export type { Random, TestResult } from './simulate/self-test';
 export { wiringOf, type Wiring } from './simulate/wiring';
 export { openLogImport, type LogCounts, type LogImport } from './logs/log-import';
 export type { LaneSummary, LogSummary } from './logs/log-evidence';
+export { sampleOfLog } from './logs/log-sample';
+export { wordsOfLine } from './logs/line-words';
