@@ -67,20 +67,21 @@ export function colourFault(map: ScreenMap, planes: readonly number[]): ColourFa
   };
 }
 
-/** One thing that white can show as, and the planes that are then dark. */
+/** One colour that a place can show in place of what is drawn, and the planes that are then wrong. */
 export interface ColourChoice {
   readonly shows: string;
-  readonly missing: readonly number[];
+  readonly planes: readonly number[];
 }
 
 /** More planes than this are not combined with one another. */
 const mostCombined = 4;
 
 /**
- * Every colour that the full colour can show as when planes are dark, with those planes, the fewest first. Where two
- * sets of planes give one colour, such as two planes of grey, only the first is there.
+ * missing: every colour that the full colour can show as when planes are dark. lit: every colour that black can show
+ * as when planes are lit. Each with those planes, the fewest first; where two sets of planes give one colour, such as
+ * two planes of grey, only the first is there.
  */
-export function colourChoices(map: ScreenMap): ColourChoice[] {
+export function colourChoices(map: ScreenMap, looks: 'missing' | 'lit'): ColourChoice[] {
   const all = everyPlane(map);
   const sets =
     all.length > mostCombined
@@ -88,13 +89,12 @@ export function colourChoices(map: ScreenMap): ColourChoice[] {
       : Array.from({ length: 2 ** all.length - 1 }, (_, n) =>
           all.filter((at) => Math.floor((n + 1) / 2 ** at) % 2 === 1),
         );
+  const usual = looks === 'lit' ? colourName(map, []) : fullColour(map);
   const choices = new Map<string, ColourChoice>();
-  for (const missing of sets.sort((a, b) => a.length - b.length)) {
-    const shows = colourName(
-      map,
-      all.filter((at) => !missing.includes(at)),
-    );
-    if (shows !== fullColour(map) && !choices.has(shows)) choices.set(shows, { shows, missing });
+  for (const planes of sets.sort((a, b) => a.length - b.length)) {
+    const lit = looks === 'lit' ? planes : all.filter((at) => !planes.includes(at));
+    const shows = colourName(map, lit);
+    if (shows !== usual && !choices.has(shows)) choices.set(shows, { shows, planes });
   }
   return [...choices.values()];
 }

@@ -55,10 +55,11 @@ export function planesOfMark(map: ScreenMap, { planes }: Pick<PictureMark, 'plan
 /** What is wrong at a mark: "magenta in place of white", "dots of the plane type wrong". */
 function looksWords(map: ScreenMap, mark: Pick<PictureMark, 'looks' | 'planes'>): string {
   const planes = planesOfMark(map, mark);
+  if (planes.length === 0) return 'wrong';
   const { missing, lit } = colourFault(map, planes);
   if (mark.looks === 'missing') return missing;
   if (mark.looks === 'lit') return lit;
-  if (map.planes.length === 1 || planes.length === 0) return 'wrong';
+  if (map.planes.length === 1) return 'wrong';
   if (planes.length === map.planes.length) return 'wrong in every plane';
   return `wrong in ${listWords(planes.map((at) => map.planes[at]!.name))}`;
 }

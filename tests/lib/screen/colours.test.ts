@@ -44,8 +44,16 @@ describe('the colours of a picture', () => {
     expect(colourFault(map, [1]).missing).toBe('bright magenta in place of bright white');
   });
 
-  it('of a chosen colour name the planes that are dark, the fewest first', () => {
-    expect(colourChoices(mapWith('green', 'red', 'blue')).map(({ shows, missing }) => [shows, ...missing])).toEqual([
+  it('of a chosen colour name the planes that are wrong, the fewest first', () => {
+    const choices = (looks: 'missing' | 'lit') =>
+      colourChoices(mapWith('green', 'red', 'blue'), looks).map(({ shows, planes }) => [shows, ...planes]);
+    expect(choices('lit').slice(0, 4)).toEqual([
+      ['green', 0],
+      ['red', 1],
+      ['blue', 2],
+      ['yellow', 0, 1],
+    ]);
+    expect(choices('missing')).toEqual([
       ['magenta', 0],
       ['cyan', 1],
       ['yellow', 2],

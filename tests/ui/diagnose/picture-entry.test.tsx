@@ -36,9 +36,9 @@ function show(document: LayoutDocument, before?: Picture) {
 }
 
 const glass = () => screen.getByRole('img', { name: /^The screen\./ });
-/** A drag over the sketch, in shares of its width and height. The sketch is 358 by 268.5 px in these tests. */
+/** A drag over the sketch, in px. The sketch is 358 by 268.5 px in these tests, the picture 1024 by 512 dots. */
 function drag(from: readonly [number, number], to: readonly [number, number]) {
-  const at = ([x, y]: readonly [number, number]) => ({ clientX: x * 358, clientY: y * 268.5, button: 0, buttons: 1 });
+  const at = ([clientX, clientY]: readonly [number, number]) => ({ clientX, clientY, button: 0, buttons: 1 });
   fireEvent.mouseDown(glass(), at(from));
   fireEvent.mouseMove(glass(), at(to));
   fireEvent.mouseUp(glass(), { ...at(to), buttons: 0 });
@@ -86,23 +86,23 @@ describe('marking faults on the picture', () => {
   it('by a touch picks the column under the finger, and a way down the lines', async () => {
     const { press, sent } = show(display);
     await press('type, green');
-    drag([0.5, 0.25], [0.5, 0.5]);
+    drag([181, 68], [181, 135]);
     await press('Use this picture');
-    expect(sent[0]!.marks).toEqual([{ looks: 'wrong', planes: ['type'], x: [0, 0], everyX: 8, y: [128, 256] }]);
+    expect(sent[0]!.marks).toEqual([{ looks: 'wrong', planes: ['type'], x: [5, 5], everyX: 8, y: [129, 257] }]);
   });
 
   it('by a touch marks a band of lines, and a box of dots', async () => {
     const { press, sent } = show(display);
     await press('type, green');
     await press('A band of lines');
-    drag([0.1, 0.5], [0.9, 0.75]);
+    drag([20, 135], [300, 202]);
     await press('Another mark');
     await press('Dots');
-    drag([0.5, 0.5], [0.25, 0.25]);
+    drag([179, 135], [90, 68]);
     await press('Use this picture');
     expect(sent[0]!.marks).toEqual([
-      { looks: 'wrong', planes: ['type'], x: [0, 1023], y: [256, 384] },
-      { looks: 'wrong', planes: ['type'], x: [256, 512], y: [128, 256] },
+      { looks: 'wrong', planes: ['type'], x: [0, 1023], y: [257, 385] },
+      { looks: 'wrong', planes: ['type'], x: [257, 512], y: [129, 257] },
     ]);
   });
 
