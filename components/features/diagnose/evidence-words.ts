@@ -2,6 +2,7 @@ import { lanesWords, type BitIndex, type LayoutIndex } from '@/lib';
 import { addressWords, listWords, sentenceCase } from '@/lib/layout/words';
 import type { Change, Evidence, LaneName, LogEvidence, PlainEvidence, Reading, Readings, Run } from '@/shared';
 import type { Bench } from './bench';
+import { counted } from './logs/log-words';
 import { signWords } from './sign-words';
 import { voltWords } from './volt-words';
 
@@ -102,8 +103,6 @@ function readingsWords(index: LayoutIndex, { lines, rest, waited }: Readings): E
     code: true,
   };
 }
-
-const counted = (count: number) => count.toLocaleString('en').replaceAll(',', '\u202f');
 
 function logNote({ lines, readings, unread, outside, rest }: LogEvidence): string {
   return [

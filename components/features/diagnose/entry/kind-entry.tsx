@@ -3,6 +3,7 @@ import { makeStyles } from '@/components/theme';
 import { Button } from '@/components/ui/button';
 import { Text } from '@/components/ui/text';
 import type { Bench } from '../bench';
+import { LogImport } from '../logs/log-import';
 import { PictureEntry } from '../picture/picture-entry';
 import { AliasEntry } from './alias-entry';
 import { BitsEntry } from './bits-entry';
@@ -92,7 +93,7 @@ function Body({ bench, entry, onClose }: KindEntryProps) {
         />
       );
     case logTab:
-      return null;
+      return <LogImport index={bench.index} onEvidence={entry.add} />;
     default:
       return (
         <ActionList

@@ -76,6 +76,31 @@ describe('readings', () => {
   });
 });
 
+describe('what is rarer than a code', () => {
+  const rare = () =>
+    within(screen.getByRole('group', { name: 'What else there is to enter' }))
+      .getAllByRole('button')
+      .map((one) => one.getAttribute('aria-label')?.split('.')[0]);
+
+  it('stands in one list, with only what the board can use', async () => {
+    const { user, unmount } = showWorkspace(loom);
+    await user.click(control('Something else'));
+    expect(rare()).toEqual(['A log', 'A sign', 'The supply', 'Two addresses, one cell']);
+    await user.click(control(/^A log\./));
+    expect(control('Choose a log file')).toBeInTheDocument();
+    expect(screen.queryByText('Find the chip')).toBeNull();
+    await user.click(control('Another kind'));
+    expect(rare()).toHaveLength(4);
+    unmount();
+
+    const shown = showWorkspace(board('penhallow-formset-2-pd-3'));
+    await shown.user.click(control('Something else'));
+    expect(rare()).toContain('The picture');
+    await shown.user.click(control(/^The picture\./));
+    expect(screen.queryByRole('group', { name: 'What else there is to enter' })).toBeNull();
+  });
+});
+
 describe('signs', () => {
   it('are chosen in words, with the socket where one helps', async () => {
     const { user } = showWorkspace(loom, { r: '1~c.lamp.C5', e: 'add' });
