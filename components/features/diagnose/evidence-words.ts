@@ -84,7 +84,10 @@ const radixes = { hexadecimal: 16, octal: 8, decimal: 10 } as const;
 export function readingText({ document: { addressMap } }: LayoutIndex, line: Reading): string {
   const value = (each: number) => each.toString(radixes[addressMap.notation]).toUpperCase();
   const at = addressWords(addressMap, line.address);
-  const run = line.to === undefined ? at : `${at} to ${addressWords(addressMap, line.to)}`;
+  const until = line.to === undefined ? '' : ` to ${addressWords(addressMap, line.to)}`;
+  const step = line.step === undefined ? '' : ` step ${value(line.step)}`;
+  const page = line.register === undefined ? '' : `${line.register.name} ${value(line.register.value)} `;
+  const run = `${page}${at}${until}${step}`;
   if (line.read === undefined) return `${run} mask ${value(line.mask ?? 0)}`;
   return `${run} ${value(line.written ?? 0)} ${value(line.read)}`;
 }

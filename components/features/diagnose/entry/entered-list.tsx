@@ -38,7 +38,7 @@ export function EnteredList({ model: { bench, workspace, entry } }: { model: Wor
           );
         })}
       </View>
-      {entry.lists ? (
+      {entry.lists && entry.format !== null ? (
         <SegmentedControl
           label="Was that the whole list?"
           options={wholes}

@@ -70,18 +70,22 @@ export interface TypedReadings {
   readonly waited: number | null;
 }
 
-/** Reads the draft, with what was said of all of it put in the place of what the text lets open. */
-export function readTyped(index: LayoutIndex, draft: ReadingsDraft): TypedReadings {
+/**
+ * Reads the draft, with what was said of all of it put in the place of what the text lets open. `before`: the readings
+ * that are being changed; as long as their lines are as they were, they are taken over and not read again.
+ */
+export function readTyped(index: LayoutIndex, draft: ReadingsDraft, before: Readings | null = null): TypedReadings {
   const cut = draft.text.length > longestTyped;
   const parsed = parse(index, cut ? { ...draft, text: wholeLines(draft.text) } : draft);
-  const found = parsed.evidence;
+  const same = before !== null && draftOfReadings(index, before).text === draft.text;
+  const found = same ? { ...before, unit: draft.unit ?? before.unit } : parsed.evidence;
   const waited = readSeconds(draft.waited);
   const plain = found === null ? [] : found.kind === 'either' ? found.ways : [{ takes: '', evidence: found }];
   const ways = plain.map(({ takes, evidence }) => ({
     takes,
     evidence:
       evidence.kind === 'readings'
-        ? { ...evidence, rest: draft.rest ?? evidence.rest, ...(waited === null ? {} : { waited }) }
+        ? { ...evidence, rest: draft.rest ?? evidence.rest, waited: waited ?? undefined }
         : evidence,
   }));
   const chosen = draft.way === null ? undefined : ways[draft.way];

@@ -64,6 +64,7 @@ export function useEntry(bench: Bench, workspace: Workspace): Entry {
   // Another step or another look-up begins with what its own link holds.
   const held = kept.revision === revision ? kept : begin(bench, workspace);
   const place = step.at === 'entry' ? step.place : null;
+  const before = place === null ? null : (runs[place.run]?.evidence[place.index] ?? null);
   const { tab, text, doubts } = held;
 
   const hold = (next: Partial<Held>) => {
@@ -76,8 +77,8 @@ export function useEntry(bench: Bench, workspace: Workspace): Entry {
   const code = useMemo(() => (compiled === null ? null : lookAt(compiled, text)), [compiled, text]);
   const bits = useMemo(() => (tab === bitsTab ? readBits(text) : noBits), [tab, text]);
   const readings = useMemo(
-    () => (tab === readingsTab ? readTyped(bench.index, readReadingsDraft(text)) : null),
-    [bench, tab, text],
+    () => (tab === readingsTab ? readTyped(bench.index, readReadingsDraft(text), readingsOf(before)) : null),
+    [bench, tab, text, before],
   );
   const typed: Typed = { tab, text, doubts, code, bits, readings };
   const ready = readyEvidence(bench, typed);
@@ -111,7 +112,7 @@ export function useEntry(bench: Bench, workspace: Workspace): Entry {
       [bench, tab, text, code, bits, readings],
     ),
     ready,
-    before: place === null ? null : (runs[place.run]?.evidence[place.index] ?? null),
+    before,
     editing: place !== null,
     lists: tab === supplyTab || (format !== null && format.definition.after !== 'stops'),
     complete: run?.complete ?? true,
@@ -126,6 +127,8 @@ export function useEntry(bench: Bench, workspace: Workspace): Entry {
     },
   };
 }
+
+const readingsOf = (seen: Evidence | null) => (seen?.kind === 'readings' ? seen : null);
 
 const addStep = { at: 'entry', place: null } as const;
 

@@ -1,7 +1,12 @@
 import fc from 'fast-check';
 import { doubtsOf, readTab, writeTab } from '@/components/features/diagnose/entry/doubts';
 import { readAddress } from '@/components/features/diagnose/entry/read-address';
-import { readReadingsDraft, writeReadingsDraft } from '@/components/features/diagnose/entry/readings-draft';
+import {
+  draftOfReadings,
+  readReadingsDraft,
+  readTyped,
+  writeReadingsDraft,
+} from '@/components/features/diagnose/entry/readings-draft';
 import {
   readAlias,
   readSign,
@@ -13,7 +18,7 @@ import {
 import { supplyPins, verdictOf } from '@/components/features/diagnose/entry/supply-pins';
 import { readVolts, voltWords } from '@/components/features/diagnose/volt-words';
 import { demoBoards } from '@/server/seeders/boards';
-import { layoutDocument, signKinds } from '@/shared';
+import { layoutDocument, signKinds, type Readings } from '@/shared';
 import { readyBench } from '../ready-bench';
 
 const bench = (slug: string) => readyBench(layoutDocument.parse(demoBoards.find((one) => one.slug === slug)?.document));
@@ -54,6 +59,31 @@ describe('what is being typed', () => {
         (draft) => expect(readAlias(writeAlias(draft))).toEqual(draft),
       ),
     );
+  });
+
+  it('keeps readings that are only looked at as they were, and reads them again once they are changed', () => {
+    const { index } = bench('tarnvall-t-64-rev-b');
+    const readings: Readings = {
+      kind: 'readings',
+      lines: [
+        { address: 0x4c1a, written: 0xff, read: 0xf7 },
+        { address: 0x4c20, to: 0x4cff, step: 0x20, mask: 8, register: { name: 'page', value: 3 } },
+      ],
+      unit: 'address',
+      shows: 'word',
+      rest: 'passed',
+      waited: 2,
+    };
+    const draft = draftOfReadings(index, readings);
+    expect(draft.text).toBe('4C1A FF F7\npage 3 4C20 to 4CFF step 20 mask 8');
+    expect(readTyped(index, draft, readings).evidence).toEqual(readings);
+    const changed = readTyped(index, { ...draft, text: '4C1A FF F7' }, readings).evidence;
+    expect(changed).toEqual({ ...readings, lines: readings.lines.slice(0, 1), shows: 'address' });
+    expect(readTyped(index, { ...draft, rest: 'unknown', waited: '' }, readings).evidence).toEqual({
+      ...readings,
+      rest: 'unknown',
+      waited: undefined,
+    });
   });
 
   it('keeps the doubts beside the tab', () => {
