@@ -1,4 +1,5 @@
 import { startNode } from './setup/children.mjs';
+import { ensureMawk } from './setup/debian.mjs';
 import { ensurePackages } from './setup/packages.mjs';
 import { GiveUp, giveUp, say } from './setup/say.mjs';
 
@@ -6,6 +7,7 @@ import { GiveUp, giveUp, say } from './setup/say.mjs';
 const parts = {
   'look-up': 'look-up.ts',
   diagnose: 'diagnose.ts',
+  logs: 'logs.ts',
   layouts: 'layouts.mjs',
   'first-load': 'first-load.mjs',
 };
@@ -53,7 +55,9 @@ try {
   }
   await ensurePackages();
   const rows = [];
-  for (const part of wanted.length > 0 ? wanted : Object.keys(parts)) rows.push(...(await rowsOf(part)));
+  const chosen = wanted.length > 0 ? wanted : Object.keys(parts);
+  if (chosen.includes('logs')) await ensureMawk();
+  for (const part of chosen) rows.push(...(await rowsOf(part)));
   say(table(rows));
 } catch (error) {
   giveUp(error);

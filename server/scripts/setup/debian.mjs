@@ -54,3 +54,11 @@ export const ensureKicadSymbols = () =>
     present: () => existsSync(kicadSymbols),
     purpose: 'the pin tables of the tests',
   });
+
+/** A small and fast awk, which the import of logs is measured against. */
+export const ensureMawk = () =>
+  ensureDebianPackage({
+    name: 'mawk',
+    present: () => existsSync('/usr/bin/mawk'),
+    purpose: 'what the import of logs is measured against',
+  });
