@@ -12,6 +12,10 @@ export interface FaultFigures {
   readonly sharedChannel: number;
   readonly sharedWhole: number;
   readonly lineShort: number;
+  /** A data line shorted to a supply, beside the driver that the layout lists. */
+  readonly lineItself: number;
+  /** What spoils just one lane beside its position: wiring, gating, a trace further on. */
+  readonly elsewhere: number;
   readonly intermittentShare: number;
 }
 
@@ -29,13 +33,14 @@ export const faultKinds = [
   'address line',
   'other shared part',
   'lines shorted',
+  'wiring of one lane',
 ] as const;
 export type FaultKind = (typeof faultKinds)[number];
 
 /** A part in a mode, as it can be drawn for a board. */
 export interface PossibleFault {
   readonly kind: FaultKind;
-  readonly part: 'chip' | 'position' | 'shared-part' | 'short';
+  readonly part: 'chip' | 'position' | 'shared-part' | 'short' | 'wiring';
   /** The socket of a position, or where the chip is at first; null for what has none. */
   readonly socket: string | null;
   /** Label of the shared part in the layout; null for others, and for what the layout does not list. */

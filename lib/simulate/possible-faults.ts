@@ -2,7 +2,7 @@ import { drawChipFault, drawContactFault, randomAddressPair } from './draw-insid
 import { ascending, type FaultFigures, type FaultKind, type PossibleFault } from './fault-kinds';
 import type { BoardFault } from './faults';
 import type { Random } from './self-test';
-import { sharedPartFaults, shortFaults, unlistedFaults } from './shared-faults';
+import { sharedPartFaults, shortFaults, unlistedFaults, wiringFaults } from './shared-faults';
 import { faultShares, pickLevel } from './shares';
 import type { Wiring } from './wiring';
 
@@ -15,6 +15,7 @@ export function possibleFaults(wiring: Wiring, figures: FaultFigures): PossibleF
     ...listed,
     ...unlistedFaults(wiring, figures, listed),
     ...shortFaults(wiring, figures),
+    ...wiringFaults(wiring, figures),
   ].filter(({ lanes }) => lanes.length > 0);
 }
 

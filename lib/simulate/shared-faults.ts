@@ -109,8 +109,8 @@ function drawAddress(wiring: Wiring, { lanes, addressBit }: SharedChannel): Draw
 }
 
 /**
- * What a layout leaves out is there all the same: each data line, what selects each bank, and what all banks share,
- * unless a listed part or channel reaches the very same lanes.
+ * What a layout leaves out is there all the same: what selects each bank and what all banks share, unless a listed part
+ * or channel reaches the very same lanes; and each data line, which beside a listed driver can still be shorted itself.
  */
 export function unlistedFaults(
   wiring: Wiring,
@@ -118,29 +118,34 @@ export function unlistedFaults(
   listed: readonly PossibleFault[],
 ): PossibleFault[] {
   const known = new Set(listed.map(({ lanes }) => lanes.join(' ')));
-  const bankLanes = wiring.banks.map((_, bank) =>
-    wiring.lanes.filter((lane) => Math.floor(lane / wiring.bits) === bank),
-  );
-  const wanted: { lanes: readonly number[]; way: Way; channel: boolean }[] = [
-    { lanes: wiring.lanes, way: 'strobe', channel: false },
-    ...bankLanes.map((lanes) => ({ lanes, way: 'strobe' as const, channel: false })),
-    ...[...wiring.lanesOfLine.values()].map((lanes) => ({ lanes, way: 'data' as const, channel: true })),
-  ];
-  return wanted.flatMap(({ lanes, way, channel }): PossibleFault[] => {
+  const bankLanes = wiring.banks.map((_, bank) => wiring.lanes.filter((at) => Math.floor(at / wiring.bits) === bank));
+  const common = { part: 'shared-part', socket: null, sharedPart: null } as const;
+  const selects = [wiring.lanes, ...bankLanes].flatMap((lanes): PossibleFault[] => {
     if (lanes.length < 2 || known.has(lanes.join(' '))) return [];
     known.add(lanes.join(' '));
-    return [
-      {
-        kind: channel ? 'channel of a buffer' : kindOf[way],
-        part: 'shared-part',
-        socket: null,
-        sharedPart: null,
-        lanes,
-        prior: channel ? figures.sharedChannel : figures.sharedWhole,
-        draw: drawShared(wiring, { way, lanes, addressBits: [] }),
-      },
-    ];
+    const draw = drawShared(wiring, { way: 'strobe', lanes, addressBits: [] });
+    return [{ ...common, kind: kindOf.strobe, lanes, prior: figures.sharedWhole, draw }];
   });
+  const lines = [...wiring.lanesOfLine.values()].flatMap((lanes): PossibleFault[] => {
+    if (lanes.length < 2) return [];
+    const prior = known.has(lanes.join(' ')) ? figures.lineItself : figures.sharedChannel;
+    const draw = drawShared(wiring, { way: 'data', lanes, addressBits: [] });
+    return [{ ...common, kind: 'channel of a buffer', lanes, prior, draw }];
+  });
+  return [...selects, ...lines];
+}
+
+/** Wiring of one lane beyond its position. */
+export function wiringFaults(wiring: Wiring, figures: FaultFigures): PossibleFault[] {
+  return wiring.lanes.map((lane) => ({
+    kind: 'wiring of one lane',
+    part: 'wiring',
+    socket: null,
+    sharedPart: null,
+    lanes: [lane],
+    prior: figures.elsewhere,
+    draw: drawShared(wiring, { way: 'data', lanes: [lane], addressBits: [] }),
+  }));
 }
 
 /** Two neighbouring data lines joined. */
