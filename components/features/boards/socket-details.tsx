@@ -15,6 +15,7 @@ import type { ChipFamily, Socket } from '@/shared';
 import { railWords, wordsCount } from './board-facts';
 import { DetailLines } from './detail-lines';
 import { codesOfSocket, type SocketCodes } from './socket-codes';
+import { SocketPicture } from './socket-picture';
 
 type SocketDetailsProps = { bench: Bench; label: string; onPick: (target: PickTarget) => void };
 
@@ -45,6 +46,7 @@ export function SocketDetails({ bench, label, onPick }: SocketDetailsProps) {
         />
         {codes.length === 0 ? <Text tone="soft">No report format of this board is known.</Text> : null}
       </View>
+      <SocketPicture index={bench.index} at={at} />
       <View style={styles.part}>
         <Text variant="subheading">Chip</Text>
         <DetailLines label="Chip" lines={chipLines({ bench, socket, family })} />

@@ -25,7 +25,7 @@ const storeRow = ({ bank, words, y }: (typeof rows)[number], row: number) =>
     holds: (bit) => [{ bank, bit, words }],
   });
 
-/** Cold-store terminal: a bank two chips deep, and two banks behind a page register. */
+/** Cold-store terminal: a bank two chips deep that is also the picture of a tube on its side, and two banks behind a page register. */
 export const rimstadCt7: LayoutDocumentInput = {
   format: 'rowcall.layout/1',
   board: {
@@ -35,7 +35,7 @@ export const rimstadCt7: LayoutDocumentInput = {
     kind: 'terminal',
     year: 1984,
     notes:
-      'Door terminal that logs pallet temperatures. The fixed store is 32 KB, two chips deep for each bit and soldered. The log pages of 16 KB share one address range and sit in sockets. Let a cold card warm up in its bag, or it will dew.',
+      'Door terminal that logs pallet temperatures. The fixed store is 32 KB, two chips deep for each bit and soldered; the amber tube, which stands upright in the door post, shows 20 KB from the middle of it. The log pages of 16 KB share one address range and sit in sockets. Let a cold card warm up in its bag, or it will dew.',
     marks: ['Sticker by the relay: "7-113 REV 3"', 'Two soldered rows above, two socketed rows below'],
     view: { side: 'component', edge: 'right', edgeName: 'door cable' },
   },
@@ -162,7 +162,7 @@ export const rimstadCt7: LayoutDocumentInput = {
       after: 'stops',
       testOrder: { bits: 'ascending', outer: 'bank' },
       notes:
-        'F is the fixed store, M and N are the log pages. In the fixed store the lamps do not tell the upper chip from the lower.',
+        'F is the fixed store, M and N are the log pages. In the fixed store the lamps do not tell the upper chip from the lower; the tube does, since each draws its own part of it.',
     },
     {
       id: 'dump',
@@ -180,6 +180,16 @@ export const rimstadCt7: LayoutDocumentInput = {
       after: 'lists-lanes',
     },
   ],
+  screenMap: {
+    width: 512,
+    height: 320,
+    base: '0x2000',
+    unitsPerLine: 64,
+    pixelsPerUnit: 8,
+    lineWeights: [64, 128, 256, 512, 1024, 2048, 4096, 8192, 16384],
+    planes: [{ name: 'amber', colour: 'amber', bits: numbers(7, 0) }],
+    turn: 1,
+  },
   sources: [
     {
       title: 'CT-7 terminal, card 7-113',
@@ -200,6 +210,14 @@ export const rimstadCt7: LayoutDocumentInput = {
       kind: 'pull test',
       year: 2020,
       proves: 'Pages 0 and 1, bits 0 and 7.',
+    },
+    {
+      title: 'CT-7 door tube, adjustment sheet 4',
+      kind: 'service manual',
+      author: 'Rimstad Cold Chain',
+      year: 1984,
+      page: '2',
+      proves: 'Points and lines of the tube, where they are kept, and that bit 7 is drawn first.',
     },
   ],
   examples: [

@@ -14,8 +14,8 @@ type ScreenSketchProps = {
   map: ScreenMap;
   /** On the glass. */
   marks: readonly PictureMark[];
-  /** The mark in hand, drawn in front; null where none is. */
-  at: number | null;
+  /** The mark in hand, drawn in front. Left out: the marks are only looked at, and are all drawn alike without a number. */
+  at?: number;
   /** What is drawn, in words. */
   label: string;
   /** A finger or a pointer goes from one place to another. Left out: the sketch is only looked at. */
@@ -35,16 +35,23 @@ export function ScreenSketch({ map, marks, at, label, onDraw, greatestHeight }: 
   const width = Math.max(1, Math.min(room, greatestHeight / share));
   const px = { width, height: width * share };
   const touch = useTouch({ map, px, onDraw });
+  // The mark in hand last, so that it lies in front.
+  const inOrder = [...marks.keys()].sort((a, b) => Number(a === at) - Number(b === at));
   const drawings = marks.map((mark) => drawMark(mark, glassSize(map), px));
   return (
     <View onLayout={({ nativeEvent }) => setRoom(nativeEvent.layout.width)}>
       <View role="img" aria-label={label} style={[styles.glass, onDraw && styles.drawn, px]} {...touch}>
         <View pointerEvents="none">
           <Svg width={px.width} height={px.height}>
-            {marks.map((_, n) => (n === at ? null : <Mark key={n} number={n + 1} drawing={drawings[n]!} px={px} />))}
-            {at === null || marks[at] === undefined ? null : (
-              <Mark number={at + 1} drawing={drawings[at]!} px={px} strong alone={marks.length === 1} />
-            )}
+            {inOrder.map((n) => (
+              <Mark
+                key={n}
+                drawing={drawings[n]!}
+                px={px}
+                number={at === undefined || marks.length === 1 ? null : n + 1}
+                strong={at === undefined || n === at}
+              />
+            ))}
           </Svg>
         </View>
       </View>
@@ -85,15 +92,14 @@ function useTouch({ map, px, onDraw }: { map: ScreenMap; px: Px; onDraw: ScreenS
 }
 
 type MarkProps = {
-  number: number;
+  /** Null where it needs none. */
+  number: number | null;
   drawing: ReturnType<typeof drawMark>;
   px: Px;
-  strong?: boolean;
-  /** The only mark needs no number. */
-  alone?: boolean;
+  strong: boolean;
 };
 
-function Mark({ number, drawing: { box, tile, cell }, px, strong = false, alone = false }: MarkProps) {
+function Mark({ number, drawing: { box, tile, cell }, px, strong }: MarkProps) {
   const { colours } = useTheme();
   // A colon, which React puts in, ends the name in url(#...).
   const id = `mark${useId().replaceAll(':', '')}`;
@@ -123,7 +129,7 @@ function Mark({ number, drawing: { box, tile, cell }, px, strong = false, alone 
         strokeWidth={strong ? sketchScale.line.mark : sketchScale.line.hair}
         strokeDasharray={strong ? undefined : [sketchScale.gap.small, sketchScale.gap.hair]}
       />
-      {alone ? null : (
+      {number === null ? null : (
         <>
           <Circle cx={badge.x} cy={badge.y} r={badgeRadius} fill={ink} stroke={colours.sheet} />
           <SvgText
