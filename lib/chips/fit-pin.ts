@@ -9,6 +9,8 @@ export interface PinContext {
   readonly chip: ChipFamily;
   /** A pin of the socket that has this supply, the nearest in number; null where none has. */
   readonly whereIs: (volts: number) => number | null;
+  /** A supply of the socket is described. */
+  readonly powered: boolean;
 }
 
 type Found = Omit<Finding, 'pin'> | null;
@@ -30,10 +32,21 @@ function feed({ pin, given, whereIs }: PinContext, volts: number): Pick<Finding,
   return { change: `Pin ${pin.pin}: ${off}join it to pin ${from}, which has ${voltsWords(volts)}.` };
 }
 
+/** Where the highest supply of the chip is nowhere in the socket, its negative one is not behind a pin left out either. */
+function unknownSupply({ pin, chip, whereIs, powered }: PinContext, wanted: number | null): Found {
+  const highest = Math.max(...chip.pins.map((one) => wantedVolts(one) ?? 0));
+  if (wanted === null || wanted >= 0 || !powered || whereIs(highest) !== null) return undescribed(pin.pin);
+  return {
+    severity: 'destroys',
+    words: `Pin ${pin.pin} wants ${voltsWords(wanted)}, and the chip never bears to run without its negative supply; the socket has neither that nor ${voltsWords(highest)}.`,
+    blocks: true,
+  };
+}
+
 function supplyPin(context: PinContext): Found {
   const { pin, given } = context;
   const wanted = wantedVolts(pin);
-  if (given.kind === 'unknown') return undescribed(pin.pin);
+  if (given.kind === 'unknown') return unknownSupply(context, wanted);
   if (given.kind === 'volts' && wanted === null && given.volts === null) return null;
   if (wanted === null || (given.kind === 'volts' && given.volts === null)) return undescribed(pin.pin);
   const has = given.kind === 'volts' ? given.volts! : null;

@@ -25,6 +25,9 @@ function comparePins(socket: ChipFamily, chip: ChipFamily, rails: readonly RailA
   const given = (n: number): Given => givenAt(socketPins.get(n), railAt(n));
   const last = packagePins(socket);
   const chipPins = new Map<number, ChipPin>(chip.pins.map((pin) => [pin.pin, pin]));
+  const powered = Array.from({ length: last }, (_, i) => given(i + 1)).some(
+    (has) => has.kind === 'volts' && (has.volts ?? 0) > 0,
+  );
   const findings: Finding[] = [];
   const pins: FitPin[] = [];
   for (let n = 1; n <= last; n++) {
@@ -35,7 +38,7 @@ function comparePins(socket: ChipFamily, chip: ChipFamily, rails: readonly RailA
       continue;
     }
     const whereIs = (volts: number) => nearest(n, last, (at) => supplies(given(at), volts));
-    const finding = pinFinding({ pin, given: has, chip, whereIs });
+    const finding = pinFinding({ pin, given: has, chip, whereIs, powered });
     if (finding !== null) findings.push(finding);
     pins.push({ pin: n, socket: givenWords(has), chip: pin.name, severity: finding?.severity ?? 'same' });
   }

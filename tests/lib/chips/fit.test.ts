@@ -132,6 +132,26 @@ describe('a three-rail part in a socket with +5 V alone', () => {
   });
 });
 
+describe('a socket of which only some pins are described', () => {
+  const some = (...pins: number[]) => ({
+    ...threeRail,
+    id: 'some',
+    pins: threeRail.pins.filter(({ pin }) => pins.includes(pin)),
+  });
+
+  it('would destroy a three-rail part where its +12 V is nowhere', () => {
+    const plain = { ...single64, id: 'plain', words: 16_384, pins: single64.pins.filter(({ pin }) => pin > 1) };
+    const check = fitCheck(plain, threeRail);
+    expect(check.verdict).toBe('destroyed');
+    expect(check.headline).toMatch(/^Would be destroyed\. Pin 1 wants −5 V/);
+  });
+
+  it('leaves open what it does not say of the negative supply where +12 V is there', () => {
+    expect(fitCheck(some(8, 9, 16), threeRail).verdict).toBe('fits-after-changes');
+    expect(fitCheck(some(2, 3, 16), threeRail).verdict).toBe('fits-after-changes');
+  });
+});
+
 describe('a 256K x 1 part', () => {
   it('would be destroyed at pin 1 of a three-rail socket, where −5 V meets its A8', () => {
     const check = fitCheck(threeRail, single256);
