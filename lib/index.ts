@@ -77,6 +77,7 @@ export { pictureOfChip, type FailingPicture } from './screen/picture-of-chip';
 export { faultWords, markWords, pictureWords, placeOfMarkWords } from './screen/mark-words';
 export { colourChoices, colourName, fullColour } from './screen/colours';
 export { glassSize, markInMemory, markOnGlass } from './screen/turn';
+export { effectOf, type AddressSpan, type ShapeEffect } from './simulate/effect';
 export { SimulatedBench, type BenchFigures } from './simulate/bench';
 export { allLanes, firstLane, inFormat, readings as simulatedReadings } from './simulate/emit';
 export { faultKinds, type FaultKind, type PossibleFault } from './simulate/fault-kinds';

@@ -38,31 +38,35 @@ function bankAt({ interleave }: AddressWindow, address: number): number {
  * The addresses at which the processor sees a word of a bank: one for each address step of the word and each window
  * that shows it. Windows whose interleave cannot be worked out are passed over.
  */
-export function addressesOf(wiring: Wiring, bank: number, word: number): CpuPlace[] {
-  const { windows } = wiring.document.addressMap;
-  const name = wiring.banks[bank] ?? '';
-  return windows.flatMap((window): CpuPlace[] => {
-    const number = window.banks.indexOf(name);
-    const inside = word - window.firstWord;
-    const steps = window.lanes?.length ?? 1;
-    const taken = takenBits(window);
-    if (number < 0 || inside < 0 || taken.some((bit) => !Number.isInteger(bit) || bit < 0)) return [];
-    const start = spreadOut(inside, taken);
-    const all = Array.from({ length: 2 ** taken.length }, (_, choice) =>
-      taken.reduce((at, bit, n) => at + bitOf(choice, n) * 2 ** bit, start),
-    );
-    const register = window.register ?? null;
-    return all.flatMap((unit) => {
-      const first = window.range.from + unit * steps;
-      if (first > window.range.to || (window.interleave.length > 0 && bankAt(window, first) !== number)) return [];
-      return Array.from({ length: steps }, (_, step): CpuPlace => {
-        const bits = window.lanes?.[step] ?? Array.from({ length: wiring.bits }, (__, bit) => bit);
-        return {
-          address: first + step,
-          register,
-          bits: bits.filter((bit) => wiring.lanes.includes(bank * wiring.bits + bit)),
-        };
-      });
+export const addressesOf = (wiring: Wiring, bank: number, word: number): CpuPlace[] =>
+  wiring.document.addressMap.windows.flatMap((window) => addressesIn(wiring, window, { bank, word }));
+
+/** The same in one window, ascending. */
+export function addressesIn(
+  wiring: Wiring,
+  window: AddressWindow,
+  { bank, word }: { bank: number; word: number },
+): CpuPlace[] {
+  const number = window.banks.indexOf(wiring.banks[bank] ?? '');
+  const inside = word - window.firstWord;
+  const steps = window.lanes?.length ?? 1;
+  const taken = takenBits(window);
+  if (number < 0 || inside < 0 || taken.some((bit) => !Number.isInteger(bit) || bit < 0)) return [];
+  const start = spreadOut(inside, taken);
+  const all = Array.from({ length: 2 ** taken.length }, (_, choice) =>
+    taken.reduce((at, bit, n) => at + bitOf(choice, n) * 2 ** bit, start),
+  );
+  const register = window.register ?? null;
+  return all.flatMap((unit) => {
+    const first = window.range.from + unit * steps;
+    if (first > window.range.to || (window.interleave.length > 0 && bankAt(window, first) !== number)) return [];
+    return Array.from({ length: steps }, (_, step): CpuPlace => {
+      const bits = window.lanes?.[step] ?? Array.from({ length: wiring.bits }, (__, bit) => bit);
+      return {
+        address: first + step,
+        register,
+        bits: bits.filter((bit) => wiring.portsOfLane.has(bank * wiring.bits + bit)),
+      };
     });
   });
 }

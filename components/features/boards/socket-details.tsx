@@ -14,6 +14,7 @@ import { sentenceCase } from '@/lib/layout/words';
 import type { ChipFamily, Socket } from '@/shared';
 import { railWords, wordsCount } from './board-facts';
 import { DetailLines } from './detail-lines';
+import { SocketAddresses } from './socket-addresses';
 import { codesOfSocket, type SocketCodes } from './socket-codes';
 import { SocketPicture } from './socket-picture';
 
@@ -46,6 +47,7 @@ export function SocketDetails({ bench, label, onPick }: SocketDetailsProps) {
         />
         {codes.length === 0 ? <Text tone="soft">No report format of this board is known.</Text> : null}
       </View>
+      <SocketAddresses document={bench.document} at={at} />
       <SocketPicture index={bench.index} at={at} />
       <View style={styles.part}>
         <Text variant="subheading">Chip</Text>
