@@ -3,10 +3,16 @@ import type { CheckAction, NextCheck } from '@/shared';
 import { expectedInformation, outcomeShares } from './information';
 import type { Beliefs, State } from './states';
 
-/** What a check can show. */
-export interface CandidateOutcome {
+/** What an outcome looks like, and what it means. */
+interface OutcomeWords {
   readonly sees: string;
   readonly means: string;
+}
+
+/** What a check can show. */
+export interface CandidateOutcome {
+  /** Made only for checks that are listed. */
+  readonly words: () => OutcomeWords;
   /** Probability by answer, in the order of the beliefs. */
   readonly likelihood: readonly number[];
 }
@@ -14,7 +20,7 @@ export interface CandidateOutcome {
 /** A check that could be made next, weighed. */
 export interface Candidate {
   readonly action: CheckAction;
-  readonly label: string;
+  readonly label: string | (() => string);
   readonly sockets: readonly string[];
   readonly minutes: number;
   /** Expected information about which part is at fault. */
@@ -22,9 +28,7 @@ export interface Candidate {
   readonly outcomes: readonly CandidateOutcome[];
 }
 
-interface Seen {
-  readonly sees: string;
-  readonly means: string;
+interface Seen extends OutcomeWords {
   /** Probability that a state shows this; null stands for what the model does not name. */
   readonly given: (state: State | null) => number;
 }
@@ -45,7 +49,10 @@ export function byAnswer({ states, answers }: Beliefs, given: (state: State | nu
 
 /** Weighs a check whose outcomes are told state by state. */
 export function weighSeen(beliefs: Beliefs, said: Said, seen: readonly Seen[]): Candidate {
-  const outcomes = seen.map(({ sees, means, given }) => ({ sees, means, likelihood: byAnswer(beliefs, given) }));
+  const outcomes = seen.map(({ sees, means, given }) => ({
+    words: () => ({ sees, means }),
+    likelihood: byAnswer(beliefs, given),
+  }));
   return weighOutcomes(beliefs, said, outcomes);
 }
 
@@ -72,13 +79,12 @@ export function asNextCheck(
   const total = sum(shares);
   return {
     action,
-    label,
+    label: typeof label === 'string' ? label : label(),
     sockets: [...sockets],
     minutes,
     bits,
-    outcomes: outcomes.map(({ sees, means }, o) => ({
-      sees,
-      means,
+    outcomes: outcomes.map(({ words }, o) => ({
+      ...words(),
       probability: total > 0 ? Math.min(1, (shares[o] as number) / total) : 0,
     })),
   };

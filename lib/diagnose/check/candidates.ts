@@ -3,6 +3,7 @@ import type { Priors } from '../priors';
 import type { Verdict, Weighed } from '../verdict';
 import type { Candidate } from './candidate';
 import type { Desk } from './desk';
+import { largerFirst } from './information';
 import { meaningFor } from './meanings';
 import { placeChecks } from './place-checks';
 import { reporterFor } from './report-words';
@@ -39,10 +40,17 @@ export function candidates(desk: Desk): Candidate[] {
   const most = places[0] ? places[0].chip + places[0].contact : 0;
   const worth = places.filter(({ chip, contact }) => chip + contact >= leastBeside * most).slice(0, mostPlaces);
   const chips = verdict.outcome === 'shared' ? [] : worth.flatMap((place) => placeChecks(desk, place));
+  return distinct([...(whole ? [whole] : []), ...sharedChecks(desk), ...chips]);
+}
+
+/** A swap is the same from either side. */
+function distinct(list: readonly Candidate[]): Candidate[] {
   const seen = new Set<string>();
-  return [...(whole ? [whole] : []), ...sharedChecks(desk), ...chips].filter(
-    ({ label }) => !seen.has(label) && seen.add(label),
-  );
+  return list.filter(({ action, sockets, label }) => {
+    const key =
+      action === 'swap' ? `swap ${[...sockets].sort().join(' ')}` : `${action} ${sockets.join(' ')} ${String(label)}`;
+    return !seen.has(key) && seen.add(key);
+  });
 }
 
 /** Chips are moved or pulled only after what they share was looked at, and moved only after one was pulled. */
@@ -55,7 +63,7 @@ const lateFor = { shared: ['pull-in-turn'], held: ['swap', 'replace', 'reseat', 
 export function ranked(desk: Desk, list: readonly Candidate[]): Candidate[] {
   const late = desk.verdict.outcome === 'shared' ? lateFor.shared : isHeld(desk) ? lateFor.held : [];
   const tier = ({ action }: Candidate) => (late.includes(action) ? 1 : 0);
-  return [...list].sort((a, b) => tier(a) - tier(b) || b.bits / b.minutes - a.bits / a.minutes);
+  return [...list].sort((a, b) => tier(a) - tier(b) || largerFirst(a.bits / a.minutes, b.bits / b.minutes));
 }
 
 /** A line that one of several chips may hold: a pull frees the others, where a swap only moves what is wrong. */

@@ -9,6 +9,11 @@ export function entropyOf(shares: readonly number[]): number {
   return Math.max(0, bits);
 }
 
+/** For sorting, the larger first; 0 where only the last digits of a double differ, so that ties keep their order. */
+export function largerFirst(a: number, b: number): number {
+  return Math.abs(a - b) <= 1e-9 * Math.max(Math.abs(a), Math.abs(b)) ? 0 : b - a;
+}
+
 /** Probability of each outcome: `likelihoods[outcome][hypothesis]` weighed by `prior`, which is normalised. */
 export function outcomeShares(prior: readonly number[], likelihoods: readonly (readonly number[])[]): number[] {
   const total = sum(prior);

@@ -8,9 +8,17 @@ export interface Move {
   readonly to: SocketIndex;
 }
 
+const perSocket = new WeakMap<LayoutIndex, (readonly Lane[])[]>();
+
 /** The lanes that a socket holds, ascending. */
-export function lanesOfSocket({ socketLaneStart, socketLanes }: LayoutIndex, socket: SocketIndex): readonly Lane[] {
-  return [...socketLanes.subarray(socketLaneStart[socket], socketLaneStart[socket + 1])] as Lane[];
+export function lanesOfSocket(index: LayoutIndex, socket: SocketIndex): readonly Lane[] {
+  let known = perSocket.get(index);
+  if (!known) {
+    const { socketLaneStart: start, socketLanes } = index;
+    known = index.document.sockets.map((_, s) => [...socketLanes.subarray(start[s], start[s + 1])] as Lane[]);
+    perSocket.set(index, known);
+  }
+  return known[socket] ?? [];
 }
 
 /** The lanes behind each data pin of a socket, in the order of the layout. */

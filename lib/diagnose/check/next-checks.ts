@@ -10,8 +10,11 @@ import { settleMeaning } from './whole-checks';
 
 /** No more than this many checks are listed. */
 const mostListed = 5;
-/** From here on a chip is replaced without another check: a repair that helps is the proof. */
-const provenFrom = 0.95;
+/**
+ * From here on a chip is replaced without another check: a repair that helps is the proof, and a swap before it
+ * would cost its minutes in nine cases to save a wrong replacement in one.
+ */
+const provenFrom = 0.9;
 /** A check that tells less than this is not listed. */
 const leastBits = 0.005;
 /** An open meaning of the report is settled first where that tells at least this much. */
@@ -40,6 +43,7 @@ export function nextChecks(input: CheckInput): NextCheck[] {
   if (verdict.refit || first[0]?.action === 'read-again' || first[0]?.action === 'ask') return first;
   const telling = candidates(desk).filter(({ bits }) => bits >= leastBits);
   const others = ranked(desk, telling)
+    .slice(0, mostListed + first.length)
     .map((candidate) => asNextCheck(beliefs, candidate))
     .filter((check) => first.every((each) => each.label !== check.label));
   return followUp([...first, ...others].slice(0, mostListed));
@@ -53,7 +57,7 @@ function comesFirst(desk: Desk): NextCheck[] {
   if (verdict.outcome === 'unexplained') return [runAgain()];
   const settle = settleMeaning(desk);
   if (settle && settle.bits >= worthSettling) return [asNextCheck(beliefs, settle)];
-  if (verdict.outcome === 'shared' && allFail(desk)) return railsFirst(desk);
+  if ((verdict.outcome === 'shared' && allFail(desk)) || severalHot(desk)) return railsFirst(desk);
   if (verdict.outcome !== 'place') return [];
   const [place] = weighed.places;
   const socket = place ? index.socketByLabel.get(place.socket) : undefined;
@@ -72,7 +76,12 @@ function allFail({ beliefs, index, runs }: Desk): boolean {
   return !drawn && beliefs.failing.length === index.lanes.length;
 }
 
-/** The supply before what is shared, unless it was measured. */
+/** Several chips are hot: over-voltage or a lost rail does that, and more so the longer it is on. */
+function severalHot({ weighed: { signs } }: Desk): boolean {
+  return new Set(signs.flatMap(({ sign, socket }) => (sign === 'hot' && socket ? [socket] : []))).size > 1;
+}
+
+/** The supply before anything else, unless it was measured. */
 function railsFirst(desk: Desk): NextCheck[] {
   return desk.weighed.rails.length > 0 ? [] : [asNextCheck(desk.beliefs, railsCheck(desk))];
 }

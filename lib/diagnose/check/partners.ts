@@ -16,7 +16,19 @@ export interface Partners {
  * Partners for a swap: of the same family, none of whose lanes failed, tested ones before untested, and with no
  * lane in common, or the fault could not be seen to move. Soldered chips only where there is no other.
  */
-export function partnersFor({ findings: { index }, failing, passed }: Beliefs, socket: SocketIndex): Partners {
+export function partnersFor(beliefs: Beliefs, socket: SocketIndex): Partners {
+  const known = found.get(beliefs) ?? new Map<SocketIndex, Partners>();
+  found.set(beliefs, known);
+  const before = known.get(socket);
+  if (before) return before;
+  const partners = search(beliefs, socket);
+  known.set(socket, partners);
+  return partners;
+}
+
+const found = new WeakMap<Beliefs, Map<SocketIndex, Partners>>();
+
+function search({ findings: { index }, failing, passed }: Beliefs, socket: SocketIndex): Partners {
   const own = lanesOfSocket(index, socket);
   const banks = new Set(own.map((lane) => index.bankOf(lane)));
   const failed = new Set(failing);

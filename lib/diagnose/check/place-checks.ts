@@ -129,7 +129,7 @@ export function measureCheck(desk: Desk, socket: SocketIndex): Candidate {
   const open = here(socket, shows.openLeg, 0.02);
   return weighSeen(
     beliefs,
-    { action: 'measure', label: continuityWords(beliefs, socket), sockets: [label], minutes: minutes.measure },
+    { action: 'measure', label: () => continuityWords(beliefs, socket), sockets: [label], minutes: minutes.measure },
     [
       { sees: 'open at a leg', means: `the contact, its solder or the trace at ${label}`, given: open },
       { sees: 'all joined', means: 'look further: the chip, the line, what drives it', given: not(open) },

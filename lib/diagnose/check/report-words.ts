@@ -2,7 +2,6 @@ import type { Evidence, PlainEvidence, Run } from '@/shared';
 import type { Lane } from '../../brand';
 import type { LayoutIndex } from '../../layout/layout-index';
 import { listWords } from '../../layout/words';
-import { buildAddressMap } from '../../place/address';
 import { testSequence } from '../../report/silence';
 import { compiledFormats } from '../compiled-formats';
 import { lanesWords } from '../lane-words';
@@ -23,8 +22,10 @@ export function reporterFor(index: LayoutIndex, runs: readonly Run[]): Reporter 
       return codeReporter(index, last.format, inWords);
     case 'mask':
     case 'readings':
-    case 'log':
-      return (lanes) => (lanes.length === 0 ? nothing : maskWords(index, lanes, inWords));
+    case 'log': {
+      const steps = stepsOf(index, last);
+      return (lanes) => (lanes.length === 0 ? nothing : maskWords(index, lanes, { steps, inWords }));
+    }
     case 'picture':
       return (lanes) => (lanes.length === 0 ? 'a right picture' : pictureWords(index, lanes, inWords));
     default:
@@ -89,28 +90,43 @@ function byBank(index: LayoutIndex, lanes: readonly Lane[]): Lane[][] {
 
 const radixOf = { hexadecimal: 16, octal: 8, decimal: 10 } as const;
 
-/** "bits 3 and 5 of bank 0 (mask 28)", the mask of one address in the notation of the board. */
-function maskWords(index: LayoutIndex, lanes: readonly Lane[], inWords: Reporter): string {
-  const masks = new Set(byBank(index, lanes).flatMap((own) => masksOf(index, own)));
-  return masks.size > 2 ? inWords(lanes) : `${inWords(lanes)} (mask ${[...masks].join(' and ')})`;
+/** The bits that one value shows, the lowest first, by bank. */
+type Steps = (bank: number) => readonly (readonly number[])[];
+
+/** Whole words, or what each address of a word carries where the readings gave that. */
+function stepsOf(index: LayoutIndex, last: PlainEvidence): Steps {
+  const whole = [Array.from({ length: index.bitCount }, (_, bit) => bit)];
+  if (last.kind !== 'readings' || last.shows === 'word') return () => whole;
+  return (bank) => {
+    const id = index.document.memory.banks[bank]?.id ?? '';
+    return index.document.addressMap.windows.find(({ banks }) => banks.includes(id))?.lanes ?? whole;
+  };
 }
 
-/** The failing bits of one bank as the addresses of a word show them. */
-function masksOf(index: LayoutIndex, lanes: readonly Lane[]): string[] {
+/** "bits 3 and 5 of bank 0 (mask 28)", the mask in the notation of the board. */
+function maskWords(
+  index: LayoutIndex,
+  lanes: readonly Lane[],
+  { steps, inWords }: { steps: Steps; inWords: Reporter },
+): string {
   const radix = radixOf[index.document.addressMap.notation];
-  const [first] = lanes;
-  if (first === undefined) return [];
-  const failing = lanes.map((lane): number => index.bitOf(lane));
-  const [window] = buildAddressMap(index).byBank.get(index.bankOf(first)) ?? [];
-  const steps = window?.window.lanes ?? [Array.from({ length: index.bitCount }, (_, bit) => bit)];
-  return steps.flatMap((carried) => {
-    const places = carried.flatMap((bit, place) => (failing.includes(bit) ? [place] : []));
-    if (places.length === 0) return [];
-    const mask = places.reduce((all, place) => all | (1n << BigInt(place)), 0n);
-    const width = ((1n << BigInt(carried.length)) - 1n).toString(radix).length;
-    const text = mask.toString(radix).toUpperCase();
-    return [radix === 10 ? text : text.padStart(width, '0')];
+  const masks = byBank(index, lanes).flatMap((own) => {
+    const failing = own.map((lane): number => index.bitOf(lane));
+    return steps(index.bankOf(own[0] as Lane)).flatMap((carried) => {
+      const places = carried.flatMap((bit, place) => (failing.includes(bit) ? [place] : []));
+      return places.length === 0 ? [] : [maskText(places, { radix, width: carried.length })];
+    });
   });
+  const different = [...new Set(masks)];
+  return different.length > 2 ? inWords(lanes) : `${inWords(lanes)} (mask ${different.join(' and ')})`;
+}
+
+function maskText(places: readonly number[], { radix, width }: { radix: number; width: number }): string {
+  const text = places
+    .reduce((all, place) => all | (1n << BigInt(place)), 0n)
+    .toString(radix)
+    .toUpperCase();
+  return radix === 10 ? text : text.padStart(((1n << BigInt(width)) - 1n).toString(radix).length, '0');
 }
 
 /** "bit 4 of bank GL: dots at x = 3, 11, 19 and so on". */

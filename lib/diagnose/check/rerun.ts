@@ -33,6 +33,7 @@ interface Report {
   silent: number;
 }
 
+const anythingElse = { sees: 'anything else', means: 'type it in as a new run' };
 /** Reports less likely than this are told together as anything else. */
 const worthTelling = 0.01;
 
@@ -103,12 +104,15 @@ function told(of: Rerun, reports: readonly Report[], handling: Handling): Candid
     const after = sharesAfter(prior, likelihood);
     const clears = silent > (probability[n] as number) / 2;
     const modeOf = (answer: number) => leads[answer]?.state.cause.mode ?? null;
-    return { sees: report(lanes), means: meaning({ after, clears, handling, modeOf }), likelihood };
+    return {
+      words: () => ({ sees: report(lanes), means: meaning({ after, clears, handling, modeOf }) }),
+      likelihood,
+    };
   });
   const left = byAnswer(beliefs, () => 1).map((one, answer) =>
     Math.max(0, one - sum(outcomes, (outcome) => outcome.likelihood[answer] as number)),
   );
-  return [...outcomes, { sees: 'anything else', means: 'type it in as a new run', likelihood: left }];
+  return [...outcomes, { words: () => anythingElse, likelihood: left }];
 }
 
 function together(one: readonly Lane[], other: readonly Lane[]): Lane[] {

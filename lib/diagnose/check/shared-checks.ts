@@ -6,6 +6,7 @@ import { labelOf } from '../timeline';
 import { asNextCheck, weighSeen, type Candidate } from './candidate';
 import { minutes, solderedFactor } from './costs';
 import { effort, type Desk } from './desk';
+import { largerFirst } from './information';
 import { shows } from './likelihoods';
 import { railsWords } from './pin-words';
 import { placesOf, type State } from './states';
@@ -29,7 +30,7 @@ function partProbes(desk: Desk): Candidate[] {
   const { beliefs } = desk;
   const parts = beliefs.answers
     .filter(({ part, share }) => part?.kind === 'shared-part' && share >= 0.02)
-    .sort((a, b) => b.share - a.share)
+    .sort((a, b) => largerFirst(a.share, b.share))
     .slice(0, mostProbes);
   return parts.map(({ part }) => {
     const leading = beliefs.states.find((state) => state.part === part);
@@ -132,6 +133,9 @@ function valueWords({ index }: Desk, bit: number): string {
   return (1n << BigInt(bit)).toString(radix).toUpperCase().padStart(width, '0');
 }
 
+/** More chips than this are not pulled in turn. */
+const mostPulled = 9;
+
 /** Chips that may hold a line or a strobe, taken out one after the other. */
 function pullChecks(desk: Desk): Candidate[] {
   const { beliefs, index } = desk;
@@ -140,12 +144,9 @@ function pullChecks(desk: Desk): Candidate[] {
     if (sort !== 'holder' || part.socket === null) continue;
     shares.set(part.socket, (shares.get(part.socket) ?? 0) + share);
   }
-  const order = [...shares]
-    .filter(([, share]) => share >= 0.01)
-    .sort((a, b) => b[1] - a[1])
-    .slice(0, 12);
+  const order = [...shares].filter(([, share]) => share >= 0.01).sort((a, b) => largerFirst(a[1], b[1]) || a[0] - b[0]);
   const held = order.reduce((total, [, share]) => total + share, 0);
-  if (order.length < 2 || held < 0.05) return [];
+  if (order.length < 2 || order.length > mostPulled || held < 0.05) return [];
   const sockets = order.map(([socket]) => socket);
   const labels = sockets.map((socket) => labelOf(index, socket));
   const strobe = beliefs.states.find(({ sort }) => sort === 'holder')?.cause.mode === 'holds-strobe';
@@ -182,7 +183,7 @@ function pullChecks(desk: Desk): Candidate[] {
 function otherWords({ beliefs }: Desk): string {
   const left = beliefs.answers
     .filter(({ part }) => part?.kind === 'shared-part')
-    .sort((a, b) => b.share - a.share)
+    .sort((a, b) => largerFirst(a.share, b.share))
     .slice(0, 2);
   return left.length === 0
     ? 'look at the line and what drives it'

@@ -2,6 +2,7 @@ import type { Lane, SocketIndex } from '../../brand';
 import type { Cause, Kind, Part } from '../cause-types';
 import type { Findings } from '../suspects';
 import type { Weighed } from '../verdict';
+import { largerFirst } from './information';
 import type { Sort } from './likelihoods';
 
 /** One way in which what failed can have come about: a part in a mode, of one kind. */
@@ -128,7 +129,7 @@ function explaining({ parts, posterior, everFailing }: Findings, run: number): F
       }),
     ),
   );
-  return found.sort((a, b) => b.probability - a.probability);
+  return found.sort((a, b) => largerFirst(a.probability, b.probability));
 }
 
 function sortOf(part: Part, cause: Cause): Sort {
@@ -171,5 +172,5 @@ export function placesOf({ answers }: Beliefs): Place[] {
     else place.contact += share;
     places.set(part.socket, place);
   }
-  return [...places.values()].sort((a, b) => b.chip + b.contact - a.chip - a.contact);
+  return [...places.values()].sort((a, b) => largerFirst(a.chip + a.contact, b.chip + b.contact));
 }

@@ -13,6 +13,7 @@ import type { State } from './states';
 
 /** So few failing readings do not show whether a lane fails everywhere or only at some addresses. */
 const fewReadings = 2;
+const anythingElse = { sees: 'anything else', means: 'type it in as it is' };
 const worthTelling = 0.01;
 
 /**
@@ -65,11 +66,8 @@ export function testWhole(desk: Desk): Candidate | null {
       const more = lanes.length > alone.length;
       const wholeMode = (answer: number) => (more ? leadingMode(states, { answer, alone }) : null);
       const none = { moves: new Map(), handled: [] };
-      return {
-        sees: `${report(lanes)}${where}`,
-        means: desk.meaning({ after, clears: false, handling: none, modeOf: wholeMode }),
-        likelihood,
-      };
+      const means = () => desk.meaning({ after, clears: false, handling: none, modeOf: wholeMode });
+      return { words: () => ({ sees: `${report(lanes)}${where}`, means: means() }), likelihood };
     });
   const left = answers.map((_, a) =>
     Math.max(0, 1 - outcomes.reduce((sum, each) => sum + (each.likelihood[a] as number), 0)),
@@ -78,7 +76,7 @@ export function testWhole(desk: Desk): Candidate | null {
   return weighOutcomes(
     beliefs,
     { action: 'test-whole', label: `Test the whole of ${banks}.`, sockets: [], minutes: minutes.testWhole },
-    [...outcomes, { sees: 'anything else', means: 'type it in as it is', likelihood: left }],
+    [...outcomes, { words: () => anythingElse, likelihood: left }],
   );
 }
 
@@ -146,7 +144,8 @@ export function settleMeaning(desk: Desk): Candidate | null {
   }
   const list = [...meanings.values()].slice(0, 8);
   if (list.length < 2) return null;
-  const counting = /counts/.test(open.words);
+  const takes = weighed.interpretations.flatMap((each) => each.takes).join(' ');
+  const counting = /counts/.test(open.words) || /octal|hexadecimal|decimal|counted from|highest|lowest/.test(takes);
   const within = (lanes: readonly Lane[], state: State | null): number => {
     const touches = (each: readonly Lane[]) => state === null || state.reach.some((lane) => each.includes(lane));
     const all = list.filter(touches).length;

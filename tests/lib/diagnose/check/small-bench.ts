@@ -16,60 +16,37 @@ const causeOf = (mode: Cause['mode'], prior: number, lanes: readonly Lane[]): Ca
 });
 
 /** A board of a few one-bit chips, with its causes written down a second time. */
-export function smallBench(banks: number, bits: number, shared = false) {
-  const index = buildLayoutIndex(buildLayout({ banks, bits, sharedParts: shared, formats: [] }));
+export function smallBench(banks: number, bits: number) {
+  const index = buildLayoutIndex(buildLayout({ banks, bits, sharedParts: false, formats: [] }));
   const lanes = [...index.lanes] as Lane[];
   const lineOf = (lane: Lane) => lanes.filter((each) => index.bitOf(each) === index.bitOf(lane));
-  const bankOf = (lane: Lane) => lanes.filter((each) => index.bankOf(each) === index.bankOf(lane));
-  const part = (kind: Part['kind'], id: string, causes: Cause[], socket: SocketIndex | null = null): Part => ({
-    kind,
+  const part = (id: string, causes: Cause[], of: Pick<Part, 'kind' | 'socket'>): Part => ({
+    ...of,
     id,
     label: id,
-    socket,
-    cameFrom: kind === 'chip' ? socket : null,
+    cameFrom: of.kind === 'chip' ? of.socket : null,
     sharedPart: null,
     causes,
   });
+  const shared = { kind: 'shared-part', socket: null } as const;
   const parts: Part[] = [];
   index.document.sockets.forEach(({ label }, s) => {
     const lane = index.socketLanes[index.socketLaneStart[s] as number] as Lane;
     const socket = s as SocketIndex;
-    parts.push(
-      part(
-        'chip',
-        `chip:${label}`,
-        [causeOf('dead', 0.018, [lane]), causeOf('holds-line', 0.002, lineOf(lane))],
-        socket,
-      ),
-    );
-    parts.push(part('position', `position:${label}`, [causeOf('open', 0.004, [lane])], socket));
+    const dead = [causeOf('dead', 0.018, [lane]), causeOf('holds-line', 0.002, lineOf(lane))];
+    parts.push(part(`chip:${label}`, dead, { kind: 'chip', socket }));
+    parts.push(part(`position:${label}`, [causeOf('open', 0.004, [lane])], { kind: 'position', socket }));
   });
+  const onBits = (...wanted: number[]) => lanes.filter((lane) => wanted.includes(index.bitOf(lane)));
+  const inBank = (bank: number) => lanes.filter((lane) => index.bankOf(lane) === bank);
   for (let bit = 0; bit < bits; bit++)
-    parts.push(
-      part('shared-part', `line:${bit}`, [
-        causeOf(
-          'channel',
-          0.0015,
-          lanes.filter((each) => index.bitOf(each) === bit),
-        ),
-      ]),
-    );
+    parts.push(part(`line:${bit}`, [causeOf('channel', 0.0015, onBits(bit))], shared));
   for (let bank = 0; bank < banks; bank++)
-    parts.push(
-      part('shared-part', `bank:${bank}`, [
-        causeOf('whole', 0.002, bankOf(lanes.find((each) => index.bankOf(each) === bank) as Lane)),
-      ]),
-    );
-  for (let bit = 0; bit + 1 < bits; bit++)
-    parts.push(
-      part('short', `short:${bit}`, [
-        causeOf(
-          'short',
-          0.0005,
-          lanes.filter((each) => [bit, bit + 1].includes(index.bitOf(each))),
-        ),
-      ]),
-    );
+    parts.push(part(`bank:${bank}`, [causeOf('whole', 0.002, inBank(bank))], shared));
+  for (let bit = 0; bit + 1 < bits; bit++) {
+    const cause = causeOf('short', 0.0005, onBits(bit, bit + 1));
+    parts.push(part(`short:${bit}`, [cause], { kind: 'short', socket: null }));
+  }
   return { index, parts, lanes };
 }
 
