@@ -2,6 +2,7 @@ import type { Picture, PictureMark } from '@/shared';
 import { lane, type Lane } from '../brand';
 import type { LayoutIndex } from '../layout/layout-index';
 import { listWords } from '../layout/words';
+import { chipEnds, chipsOfLine, piecesOf, segmentAt } from './chips-of-line';
 import { covers, placesOf } from './extent';
 import { lineOf, screenOf, type LinePattern, type Screen } from './screen';
 import { columnsOf, linesOf } from './turn';
@@ -15,6 +16,12 @@ export interface MarkedLane {
   readonly words: number;
   /** Words of the lane that the screen shows; the mark covers words / shown of them. */
   readonly shown: number;
+  /**
+   * Chips behind the lane that hold a marked word, and chips of which words were seen to be right and none is marked:
+   * masks over `segmentsOf`. Both 0 where one chip holds the whole lane.
+   */
+  readonly failingSegments: number;
+  readonly rightSegments: number;
 }
 
 /** What the marks of a picture say of the lanes. */
@@ -49,19 +56,35 @@ export function lanesOfMarks(index: LayoutIndex, picture: Picture): LanesOfMarks
   const shown = new Float64Array(index.laneCount);
   const words = new Float64Array(index.laneCount);
   const looks = new Uint8Array(index.laneCount);
+  const shownSegments = new Uint32Array(index.laneCount);
+  const markedSegments = new Uint32Array(index.laneCount);
   screen.planes.forEach((_, plane) => {
     const here = marks.filter(({ planes }) => planes.has(plane)).map(({ mark }) => mark);
-    for (const { pattern, pixels, lines } of alikeLines({ screen, plane, marks: here, problems })) {
+    for (const { pattern, pixels, lines, word } of alikeLines({ screen, plane, marks: here, problems })) {
+      const segment = segmentAt(index, word);
       forEachPixel(screen, pattern, (of, x) => {
         shown[of]! += lines;
+        shownSegments[of]! |= segment(of);
         if (pixels === null || pixels[x] === 0) return;
         words[of]! += lines;
         looks[of]! |= pixels[x]!;
+        markedSegments[of]! |= segment(of);
       });
     }
   });
   const failing = [...index.lanes].flatMap((n) =>
-    words[n]! > 0 ? [{ lane: lane(n), reads: readsOf(looks[n]!), words: words[n]!, shown: shown[n]! }] : [],
+    words[n]! > 0
+      ? [
+          {
+            lane: lane(n),
+            reads: readsOf(looks[n]!),
+            words: words[n]!,
+            shown: shown[n]!,
+            failingSegments: markedSegments[n]!,
+            rightSegments: picture.rest === 'right' ? shownSegments[n]! & ~markedSegments[n]! : 0,
+          },
+        ]
+      : [],
   );
   if (failing.length === 0 && problems.length === 0)
     problems.push('What is marked of the picture shows no memory of this board.');
@@ -108,6 +131,8 @@ interface AlikeLines {
   readonly pixels: Uint8Array | null;
   /** How many lines of different words there are. */
   readonly lines: number;
+  /** A word of theirs; all of them are behind the same chips. */
+  readonly word: number;
 }
 
 interface Asked {
@@ -122,15 +147,17 @@ const mostSingleUnits = 500_000;
 
 function* alikeLines({ screen, plane, marks, problems }: Asked): Generator<AlikeLines> {
   let single = 0;
-  const groups = new Map<LinePattern, Map<string, number>>();
+  const ends = chipEnds(screen.index);
+  const groups = new Map<LinePattern, Map<string, { lines: number; word: number; marked: string }>>();
   const pixelsOf = new Map<string, Uint8Array | null>();
   const pixels = (marked: string) => {
     if (!pixelsOf.has(marked)) pixelsOf.set(marked, markedPixels(screen, marks, marked));
     return pixelsOf.get(marked) ?? null;
   };
   for (const [line, marked] of markedLines(screen, marks)) {
-    const { pattern, shared } = lineOf(screen, screen.planes[plane]!, line);
-    if (!shared) {
+    const here = lineOf(screen, screen.planes[plane]!, line);
+    const chips = chipsOfLine(ends, here);
+    if (!here.shared || chips === null) {
       single += screen.shownUnits;
       if (single > mostSingleUnits) {
         const name = screen.map.planes[plane]!.name;
@@ -139,15 +166,18 @@ function* alikeLines({ screen, plane, marks, problems }: Asked): Generator<Alike
         );
         break;
       }
-      yield { pattern, pixels: pixels(marked), lines: 1 };
+      for (const piece of piecesOf(ends, here)) yield { ...piece, pixels: pixels(marked), lines: 1 };
       continue;
     }
-    let ofPattern = groups.get(pattern);
-    if (ofPattern === undefined) groups.set(pattern, (ofPattern = new Map()));
-    ofPattern.set(marked, (ofPattern.get(marked) ?? 0) + 1);
+    let ofPattern = groups.get(here.pattern);
+    if (ofPattern === undefined) groups.set(here.pattern, (ofPattern = new Map()));
+    const key = `${marked}/${chips}`;
+    const before = ofPattern.get(key);
+    if (before === undefined) ofPattern.set(key, { lines: 1, word: here.firstWord + here.pattern.least, marked });
+    else before.lines++;
   }
   for (const [pattern, ofPattern] of groups) {
-    for (const [marked, lines] of ofPattern) yield { pattern, pixels: pixels(marked), lines };
+    for (const { lines, word, marked } of ofPattern.values()) yield { pattern, pixels: pixels(marked), lines, word };
   }
 }
 

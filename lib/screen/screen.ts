@@ -19,6 +19,9 @@ export interface LinePattern {
   readonly cells: readonly (ScreenCell | null)[];
   /** The word of each unit, counted from `firstWord` of the line. */
   readonly words: Float64Array;
+  /** The lowest and the highest of `words` that a unit shows; both 0 where none shows any. */
+  readonly least: number;
+  readonly most: number;
 }
 
 export interface PlaneLine {
@@ -152,13 +155,17 @@ export function lineOf(screen: Screen, plane: ScreenPlane, line: number): PlaneL
 
 function patternAt(screen: Screen, plane: ScreenPlane, at: { start: number; firstWord: number }): LinePattern {
   const words = new Float64Array(screen.shownUnits);
+  let [least, most] = [Infinity, -Infinity];
   const cells = Array.from({ length: screen.shownUnits }, (_, unit) => {
     const place = placeInPlane(screen, plane, at.start + unit);
     if (place === null) return null;
-    words[unit] = place.word - at.firstWord;
+    const word = place.word - at.firstWord;
+    words[unit] = word;
+    least = Math.min(least, word);
+    most = Math.max(most, word);
     return plane.cellOf(place);
   });
-  return { cells, words };
+  return most < least ? { cells, words, least: 0, most: 0 } : { cells, words, least, most };
 }
 
 /**

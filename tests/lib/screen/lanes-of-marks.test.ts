@@ -30,13 +30,14 @@ const twoPlanes = (): LayoutDocument =>
     },
   });
 const read = (picture: Picture) => lanesOfMarks(buildLayoutIndex(twoPlanes()), picture);
+const oneChip = { failingSegments: 0, rightSegments: 0 };
 const eighthColumn = { x: [2, 2] as [number, number], everyX: 8, y: [0, 31] as [number, number] };
 
 describe('faults marked on the picture', () => {
   it('name the lane whose dots they cover, and pass the others that are seen beside them', () => {
     const { failing, passed, problems } = read(pictureWith([mark({ ...eighthColumn, planes: ['green'] })]));
     expect(problems).toEqual([]);
-    expect(failing).toEqual([{ lane: 2, reads: 'unknown', words: 256, shown: 256 }]);
+    expect(failing).toEqual([{ lane: 2, reads: 'unknown', words: 256, shown: 256, ...oneChip }]);
     expect(passed).toEqual([0, 1, 3, 4, 5, 6, 7, 8, 9, 10, 11, 12, 13, 14, 15]);
   });
 
@@ -55,7 +56,7 @@ describe('faults marked on the picture', () => {
 
   it('in a band of lines cover only a share of the words', () => {
     const { failing } = read(pictureWith([mark({ ...eighthColumn, y: [8, 15], planes: ['green'] })]));
-    expect(failing).toEqual([{ lane: 2, reads: 'unknown', words: 64, shown: 256 }]);
+    expect(failing).toEqual([{ lane: 2, reads: 'unknown', words: 64, shown: 256, ...oneChip }]);
   });
 
   it('pass nothing while the rest of the picture was not looked at', () => {
@@ -79,6 +80,33 @@ describe('faults marked on the picture', () => {
     expect(lanesOfMarks(buildLayoutIndex(buildLayout()), pictureWith([mark({})])).problems).toEqual([
       'This board has no screen map to read a picture with.',
     ]);
+  });
+
+  it('name the chip where a lane has several, also in a line that begins in one and ends in the next', () => {
+    const index = buildLayoutIndex(
+      layoutDocument.parse({
+        ...buildLayoutInput({ banks: 1, deep: 2 }),
+        screenMap: {
+          width: 256,
+          height: 192,
+          base: 0x10000 - 95 * 32 - 16,
+          unitsPerLine: 32,
+          pixelsPerUnit: 8,
+          lineWeights: [32, 64, 128, 256, 512, 1024, 2048, 4096],
+          planes: [{ name: 'all', bits: [0, 1, 2, 3, 4, 5, 6, 7] }],
+        },
+      }),
+    );
+    const chips = (given: Partial<PictureMark>, rest: Picture['rest'] = 'right') => {
+      const { failing } = lanesOfMarks(index, pictureWith([mark(given)], rest));
+      return failing.map(({ failingSegments, rightSegments }) => [failingSegments, rightSegments]);
+    };
+    expect(chips({ x: [2, 2], everyX: 8, y: [0, 94] })).toEqual([[0b01, 0b10]]);
+    expect(chips({ x: [2, 2], everyX: 8, y: [96, 191] })).toEqual([[0b10, 0b01]]);
+    expect(chips({ x: [2, 2], everyX: 8, y: [0, 191] })).toEqual([[0b11, 0]]);
+    expect(chips({ x: [2, 2], everyX: 8, untilX: 127, y: [95, 95] })).toEqual([[0b01, 0b10]]);
+    expect(chips({ x: [130, 130], everyX: 8, y: [95, 95] })).toEqual([[0b10, 0b01]]);
+    expect(chips({ x: [2, 2], everyX: 8, y: [0, 94] }, 'unknown')).toEqual([[0b01, 0]]);
   });
 
   it('agree with a count over every pixel by a plain formula', () => {
@@ -134,8 +162,8 @@ describe('faults marked on the picture', () => {
     const { failing } = lanesOfMarks(index, pictureWith([mark({ x: [2, 2], everyX: 8, y: [0, 8191] })]));
     expect(performance.now() - begin).toBeLessThan(1000);
     expect(failing).toEqual([
-      { lane: 2, reads: 'unknown', words: 2 ** 22, shown: 2 ** 22 },
-      { lane: 10, reads: 'unknown', words: 2 ** 22, shown: 2 ** 22 },
+      { lane: 2, reads: 'unknown', words: 2 ** 22, shown: 2 ** 22, ...oneChip },
+      { lane: 10, reads: 'unknown', words: 2 ** 22, shown: 2 ** 22, ...oneChip },
     ]);
   });
 });
@@ -160,7 +188,7 @@ describe('a screen whose lines lie outside the memory', () => {
       pictureWith([mark({ x: [0, 9], y: [0, 8191] })]),
     );
     expect(performance.now() - begin).toBeLessThan(5000);
-    expect(failing).toEqual([{ lane: 0, reads: 'unknown', words: 10, shown: 256 }]);
+    expect(failing).toEqual([{ lane: 0, reads: 'unknown', words: 10, shown: 256, ...oneChip }]);
     expect(problems).toEqual([
       'The lines of the plane all lie too irregularly in memory; they are read down to line 61.',
     ]);

@@ -67,10 +67,10 @@ function Ends({ name, size, span: [from, to], every, onChange }: AxisProps & { o
 type EveryProps = AxisProps & { onChange: (span: Span, every: number | undefined) => void };
 
 /** How often a span comes again; 0 where it does not. */
-function Every({ name, size, span: [from, to], every, onChange }: EveryProps) {
+function Every({ size, span: [from, to], every, onChange }: EveryProps) {
   return (
     <NumberStepper
-      label={`Again every so many ${name}s, 0: not again`}
+      label="Again every, 0: once"
       value={every ?? 0}
       least={0}
       most={size}

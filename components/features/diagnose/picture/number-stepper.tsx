@@ -26,36 +26,39 @@ export function NumberStepper({ label, value, least, most, soon = [least, most],
     onChange(value + by);
   };
   return (
-    <View role="group" aria-label={label} style={styles.row}>
-      <View style={styles.field}>
-        <Field
-          mono
-          label={label}
-          inputMode="numeric"
-          value={typed ?? String(value)}
-          error={typed !== null && !fits(number) ? `A whole number from ${least} to ${most}.` : undefined}
-          onChangeText={(text) => {
-            setTyped(text);
-            const next = text.trim() === '' ? NaN : Number(text);
-            if (fits(next) && next >= soon[0] && next <= soon[1]) onChange(next);
-          }}
-          onBlur={() => {
-            setTyped(null);
-            if (fits(number) && number !== value) onChange(number);
-          }}
-        />
-      </View>
-      <View style={styles.buttons}>
-        <Button kind="plain" label="−" aria-label={`− ${label}`} disabled={value <= least} onPress={() => step(-1)} />
-        <Button kind="plain" label="+" aria-label={`+ ${label}`} disabled={value >= most} onPress={() => step(1)} />
-      </View>
+    <View role="group" aria-label={label} style={styles.stepper}>
+      <Field
+        mono
+        label={label}
+        inputMode="numeric"
+        value={typed ?? String(value)}
+        error={typed !== null && !fits(number) ? `A whole number from ${least} to ${most}.` : undefined}
+        onChangeText={(text) => {
+          setTyped(text);
+          const next = text.trim() === '' ? NaN : Number(text);
+          if (fits(next) && next >= soon[0] && next <= soon[1]) onChange(next);
+        }}
+        onBlur={() => {
+          setTyped(null);
+          if (fits(number) && number !== value) onChange(number);
+        }}
+        trailing={
+          <>
+            <Button
+              kind="quiet"
+              label="−"
+              aria-label={`− ${label}`}
+              disabled={value <= least}
+              onPress={() => step(-1)}
+            />
+            <Button kind="quiet" label="+" aria-label={`+ ${label}`} disabled={value >= most} onPress={() => step(1)} />
+          </>
+        }
+      />
     </View>
   );
 }
 
 const useStyles = makeStyles((t) => ({
-  row: { flexDirection: 'row', alignItems: 'flex-start', gap: t.space.xs, flexGrow: 1, flexBasis: t.measure.beside },
-  field: { flex: 1, minWidth: 0 },
-  // Beside the line to write on, under its label.
-  buttons: { flexDirection: 'row', gap: t.space.xs, paddingTop: t.text.label.lineHeight + t.space.xs },
+  stepper: { flexGrow: 1, flexBasis: t.measure.beside },
 }));
