@@ -185,7 +185,12 @@ function Checks({ model }: { model: WorkspaceModel }) {
 /** What is open in the evidence, and the answers to choose from. */
 function Open({ model: { diagnosis, settled, settleBy } }: { model: WorkspaceModel }) {
   return (
-    <Questions questions={diagnosis.questions} settles={(answer) => settled(answer) !== null} onAnswer={settleBy} />
+    <Questions
+      questions={diagnosis.questions}
+      next={diagnosis.nextChecks[0]?.label ?? ''}
+      settles={(answer) => settled(answer) !== null}
+      onAnswer={settleBy}
+    />
   );
 }
 

@@ -44,7 +44,7 @@ function Words({ outcome: { sees, means, probability } }: { outcome: Outcome }) 
   const styles = useStyles();
   return (
     <>
-      <View style={styles.sees}>
+      <View style={[styles.sees, sees.length > longestBeside && styles.above]}>
         <Text variant={isWords(sees) ? 'smallStrong' : 'codeSmall'}>{sees}</Text>
       </View>
       <View style={styles.means}>
@@ -57,12 +57,15 @@ function Words({ outcome: { sees, means, probability } }: { outcome: Outcome }) 
   );
 }
 
-/** What is seen may be a code, or words such as "no failure". */
-const isWords = (sees: string) => /^[a-z]{2,}( |$)/.test(sees);
+/** What is seen may be a code, or words such as "no failure" and "bit 2 of bank B (mask 04)". */
+const isWords = (sees: string) => (sees.match(/(?<=^|\s)[a-z]{2,}(?=\s|$)/g) ?? []).length > 1;
+
+/** Longest text, in characters, that stands beside what it means and not over it. */
+const longestBeside = 16;
 
 const useStyles = makeStyles((t) => ({
   outcomes: { gap: t.space.xs },
-  outcome: { flexDirection: 'row', gap: t.space.md, alignItems: 'baseline' },
+  outcome: { flexDirection: 'row', flexWrap: 'wrap', columnGap: t.space.md, alignItems: 'baseline' },
   pressable: {
     minHeight: t.target,
     paddingVertical: t.space.md,
@@ -71,6 +74,7 @@ const useStyles = makeStyles((t) => ({
   },
   held: { backgroundColor: t.colours.faded },
   sees: { flexBasis: 0, flexGrow: 2, minWidth: 0 },
+  above: { flexBasis: '100%' },
   means: { flexBasis: 0, flexGrow: 5, minWidth: 0 },
   percent: { flexShrink: 0, minWidth: t.target },
 }));

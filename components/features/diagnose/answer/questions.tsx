@@ -9,17 +9,21 @@ import { stated } from '../stated';
 
 type QuestionsProps = {
   questions: readonly Question[];
+  /** What to do next as it stands under the questions, so that it is not said twice. */
+  next: string;
   /** Whether an answer can be taken over. */
   settles: (answer: string) => boolean;
   onAnswer: (answer: string) => void;
 };
 
 /** What is open in the evidence: each question with its answers, how likely each is, and what would settle it. */
-export function Questions({ questions, settles, onAnswer }: QuestionsProps) {
-  return questions.map((question) => <OneQuestion key={question.ask} {...{ question, settles, onAnswer }} />);
+export function Questions({ questions, ...rest }: QuestionsProps) {
+  return questions.map((question) => <OneQuestion key={question.ask} question={question} {...rest} />);
 }
 
-function OneQuestion({ question, settles, onAnswer }: Omit<QuestionsProps, 'questions'> & { question: Question }) {
+type OneQuestionProps = Omit<QuestionsProps, 'questions'> & { question: Question };
+
+function OneQuestion({ question, next, settles, onAnswer }: OneQuestionProps) {
   const styles = useStyles();
   const { ask, answers, settles: bySettling } = question;
   return (
@@ -27,6 +31,11 @@ function OneQuestion({ question, settles, onAnswer }: Omit<QuestionsProps, 'ques
       <Text variant="subheading" level={2}>
         {ask}
       </Text>
+      {answers.some(({ words }) => settles(words)) ? (
+        <Text variant="small" tone="soft">
+          Tap the one that is true, if you know.
+        </Text>
+      ) : null}
       <View role="list" aria-label="Answers">
         {answers.map(({ words, share, sockets }) => {
           const row = <AnswerWords {...{ words, share, sockets }} />;
@@ -48,7 +57,7 @@ function OneQuestion({ question, settles, onAnswer }: Omit<QuestionsProps, 'ques
           );
         })}
       </View>
-      {bySettling === '' ? null : (
+      {bySettling === '' || next.includes(bySettling) ? null : (
         <Text variant="small">
           <Text variant="smallStrong">If nobody knows: </Text>
           {bySettling}

@@ -31,8 +31,8 @@ function beside(label: string, name: string | null): string {
   return rest === '' ? 'shared part' : rest;
 }
 
-/** Suspects that the evidence speaks for: they explain some of it, or belong to a group that does. Others are merely not cleared. */
+/** Suspects that the evidence speaks for: they explain some of it, were measured to be wrong, or belong to a group that does. Others are merely not cleared. */
 export function leadingSuspects({ suspects, groups }: Diagnosis): Suspect[] {
   const members = new Set(groups.flatMap((group) => group.members.map(({ id }) => id)));
-  return suspects.filter(({ id, explains }) => explains.length > 0 || members.has(id));
+  return suspects.filter(({ id, kind, explains }) => explains.length > 0 || kind === 'rail' || members.has(id));
 }

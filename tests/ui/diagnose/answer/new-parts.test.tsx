@@ -101,6 +101,7 @@ describe('an open question', () => {
     const { user } = renderPage(
       <Questions
         questions={questions}
+        next=""
         settles={(words) => words.endsWith('0')}
         onAnswer={(words) => answered.push(words)}
       />,
