@@ -25,6 +25,8 @@ export interface Cause {
   readonly where: string | null;
   /** For address lines: the bits of the word number inside the chip that go through it. */
   readonly addressBits?: readonly number[];
+  /** For a short: the data lines that are joined. */
+  readonly lines?: readonly [number, number];
   readonly kinds: readonly Kind[];
 }
 

@@ -2,9 +2,9 @@ import type { Lane, SocketIndex } from '../brand';
 import type { LayoutIndex } from '../layout/layout-index';
 import type { Priors } from './priors';
 import { twoKinds, type Builder, type Cause, type Kind, type Part } from './cause-types';
-import type { Hints } from './hints';
+import { noHints, type Hints } from './hints';
 import { Scopes, type Scope } from './scopes';
-import { addressLineParts, sharedParts, shortParts, unlistedParts } from './shared-causes';
+import { addressLineParts, sharedParts, shortParts, unlistedParts, withJoinedChannels } from './shared-causes';
 import { labelOf, type Chip, type Timeline } from './timeline';
 import { isDestroyed } from './wrong-part';
 
@@ -23,8 +23,13 @@ export function listParts(
   const builder: Builder = { index, timeline, priors, scopes, everyRun: new Map() };
   const parts = before?.priors === priors ? before.parts : listAfresh(builder);
   if (untouched) firstRuns.set(index, { priors, parts });
-  const more = [...(hints.addressLines ? addressLineParts(builder) : []), ...shortParts(builder, hints.joinedLines)];
-  return more.length > 0 ? [...parts, ...more] : parts;
+  if (hints === noHints) return parts;
+  const far = hints.joinedLines.filter(([line, other]) => other !== line + 1);
+  return [
+    ...withJoinedChannels(builder, parts, hints.joinedLines),
+    ...(hints.addressLines ? addressLineParts(builder) : []),
+    ...shortParts(builder, far),
+  ];
 }
 
 const scopesByLayout = new WeakMap<LayoutIndex, Scopes>();

@@ -1,4 +1,4 @@
-import type { Diagnosis, LaneState, Run } from '@/shared';
+import type { Diagnosis, LaneState, Run, Sign, Suspect } from '@/shared';
 import type { Lane } from '../brand';
 import type { LayoutIndex } from '../layout/layout-index';
 import { cautionsFor } from './cautions';
@@ -13,12 +13,12 @@ import { observe, type RunObservation } from './observe/observations';
 import type { Posterior } from './posterior';
 import { priors as defaultPriors, type Priors } from './priors';
 import { openQuestions } from './questions';
-import { railReading } from './rails';
+import { railReading, type RailReading } from './rails';
 import { tell } from './sentences';
 import { listSignatures } from './signature-words';
-import { supplyVerdict, railSuspects } from './supply';
+import { deadBoardSuspects, loadedRails, railSuspects, supplyVerdict } from './supply';
 import { listPlaces, listSuspects, type Findings } from './suspects';
-import { followChips } from './timeline';
+import { followChips, type Timeline } from './timeline';
 import { decide, laneNames, openMeaning, type Weighed } from './verdict';
 
 /** A failing lane of which the model's causes explain less than this is told as unexplained. */
@@ -61,7 +61,7 @@ export function diagnose(index: LayoutIndex, runs: readonly Run[], priors: Prior
     signals,
     signs,
     rails,
-    suspects: ranks ? listSuspects(findings) : railSuspects(index, rails),
+    suspects: ranks ? withLoadedRails(listSuspects(findings), index, timeline) : otherSuspects(index, rails, signs),
     places: ranks ? listPlaces(findings) : [],
     lastRun,
     interpretations,
@@ -85,7 +85,7 @@ export function diagnose(index: LayoutIndex, runs: readonly Run[], priors: Prior
     headline: verdict.headline,
     sure: verdict.sure,
     probability: verdict.probability,
-    sentences: tell({ weighed, verdict, observations, untested, leftOut, problems }),
+    sentences: tell({ weighed, verdict, observations, untested, leftOut, problems, chips: timeline.chips }),
     suspects: [...weighed.suspects],
     places: [...weighed.places],
     groups: [...verdict.groups],
@@ -105,6 +105,16 @@ export function diagnose(index: LayoutIndex, runs: readonly Run[], priors: Prior
     exact: leftOut <= exactWithin,
     leftOut,
   };
+}
+
+function withLoadedRails(suspects: Suspect[], index: LayoutIndex, { chips }: Timeline): Suspect[] {
+  return [...suspects, ...loadedRails(index, chips, suspects.length)];
+}
+
+function otherSuspects(index: LayoutIndex, rails: readonly RailReading[], signs: readonly Sign[]): Suspect[] {
+  const measured = railSuspects(index, rails);
+  if (measured.length > 0 || rails.length > 0) return measured;
+  return signs.some(({ sign }) => sign === 'dead') ? deadBoardSuspects() : [];
 }
 
 const addressMaps = new WeakMap<LayoutIndex, AddressMap>();

@@ -7,7 +7,7 @@ import { chipSize } from './signals';
 /** Causes that are worth listing only because the readings point at them. */
 export interface Hints {
   readonly addressLines: boolean;
-  /** Pairs of data lines, no neighbours by number, that read as joined. */
+  /** Pairs of data lines that read as joined. */
   readonly joinedLines: readonly (readonly [number, number])[];
 }
 
@@ -21,8 +21,7 @@ export function hintsOf(index: LayoutIndex, interpretations: readonly Interpreta
   for (const { runs } of interpretations) {
     if (!runs.some((run) => run.seen.size > 0 || run.aliased.size > 0)) continue;
     for (const pair of linePairs(index, runs)) {
-      const [one, other] = pair.lines;
-      if (looksJoined(pair) && other !== one + 1) joined.set(pair.lines.join(' '), pair.lines);
+      if (looksJoined(pair)) joined.set(pair.lines.join(' '), pair.lines);
     }
     for (const run of runs) {
       if (run.aliased.size > 0) addressLines = true;

@@ -5,6 +5,7 @@ import { inferNoisyOr, type HiddenVariable } from './noisy-or';
 import type { RunObservation } from './observe/observations';
 import type { Priors } from './priors';
 import type { Scope } from './scopes';
+import { shownBy, type ShapeRow, type Tried } from './shapes';
 import type { Signals } from './signals';
 
 /** Of the kinds of one cause. */
@@ -16,7 +17,7 @@ export interface Posterior {
   readonly logEvidence: number;
   /** By part, cause and kind. */
   readonly kinds: readonly (readonly Probabilities[])[];
-  /** Probability that at least one of these parts has failed; exact within `leftOut`. */
+  /** Probability that at least one of these parts has failed; in large groups as if they failed apart from each other. */
   readonly anyOf: (parts: ReadonlySet<number>) => number;
   /** Upper bound of the share of probability that was left out. */
   readonly leftOut: number;
@@ -69,6 +70,8 @@ export function weigh(
     (kinds[part] as Probabilities[])[cause] = answer.marginals[i] as Float64Array;
   });
   const anyOf = (chosen: ReadonlySet<number>): number => {
+    // In a large group the answer is within a bound anyway, and both at once is nearly as rare as if they were apart.
+    if (!answer.quick) return 1 - [...chosen].reduce((none, p) => none * (1 - probabilityIn(kinds, p)), 1);
     const without = solve(touching.filter((slot) => !chosen.has(slot.part)));
     let log = without.logEvidence - answer.logEvidence;
     for (const p of chosen) log += (absent[p] ?? 0) - (apart[p] ?? 0);
@@ -79,8 +82,12 @@ export function weigh(
 
 /** Probability of a part: the sum over its modes, which are so rare together that their overlap is nothing. */
 export function probabilityOf(posterior: Posterior, part: number): number {
+  return probabilityIn(posterior.kinds, part);
+}
+
+function probabilityIn(kinds: Posterior['kinds'], part: number): number {
   let total = 0;
-  for (const kinds of posterior.kinds[part] ?? []) total += sum(kinds);
+  for (const own of kinds[part] ?? []) total += sum(own);
   return Math.min(1, total);
 }
 
@@ -92,23 +99,25 @@ function variableOf(evidence: Evidence, signals: Signals, of: { part: Part; caus
   let prior = 0;
   for (const kind of of.cause.kinds) prior += kind.prior;
   const states = of.cause.kinds.map((kind) => {
-    const state = evidence.stateOf(kind);
+    const state = evidence.stateOf(kind, () => signals.rowOf(of.part, of.cause));
     if (signals.silent || state.touches.length === 0) return state;
     return { ...state, weight: state.weight * signals.factor(of.part, of.cause, kind) };
   });
   return { absent: 1 - prior, states };
 }
 
-/** Passes that a set of lanes gave: how many as a whole, and the power of the others. */
+/** Passes that a set of lanes gave: how many as a whole, and what was tried of the others. */
 interface Passes {
   readonly whole: number;
-  readonly weak: readonly number[];
+  readonly tried: readonly Tried[];
 }
 
-/** Probability that a fault shows on none of them. */
-function allMissed({ whole, weak }: Passes, miss: number): number {
+/** Probability that a fault of this row of the table of shapes shows on none of them. */
+function allMissed({ whole, tried }: Passes, miss: number, row: () => ShapeRow): number {
   let product = miss ** whole;
-  for (const power of weak) product *= 1 - (1 - miss) * power;
+  if (tried.length === 0) return product;
+  const own = row();
+  for (const each of tried) product *= 1 - (1 - miss) * shownBy(own, each);
   return product;
 }
 
@@ -125,12 +134,12 @@ class Evidence {
     let next = 0;
     this.numberOf = runs.map((run) => new Map([...run.failing].map((lane) => [lane, next++])));
     this.positives = next;
-    this.negatives = sum(runs, (run) => run.passed.size - sum(run.power.values(), (power) => 1 - power));
+    this.negatives = sum(runs, (run) => run.passed.size);
   }
 
-  stateOf(kind: Kind): HiddenVariable['states'][number] {
+  stateOf(kind: Kind, row: () => ShapeRow): HiddenVariable['states'][number] {
     const { passed, touches } = this.reachOf(kind.scopes);
-    return { weight: kind.prior * allMissed(passed, kind.miss), touches, miss: kind.miss };
+    return { weight: kind.prior * allMissed(passed, kind.miss, row), touches, miss: kind.miss };
   }
 
   /** The chance of each failure to come from nothing, one for all where nothing tells them apart. */
@@ -153,7 +162,7 @@ class Evidence {
       const first = this.runs.findIndex((run) => run.failing.has(lane));
       const factor = signals.silent ? 1 : signals.unknown(first, lane);
       const state = (share: number, miss: number) => ({
-        weight: priors.elsewhere * share * allMissed(all, miss) * factor,
+        weight: priors.elsewhere * share * allMissed(all, miss, () => 'unknown') * factor,
         touches,
         miss,
       });
@@ -226,21 +235,21 @@ function reaches(scope: Scope, lane: Lane, segments: ReadonlyMap<Lane, number>):
 
 function passesOf(run: RunObservation, scope: Scope): Passes {
   let whole = 0;
-  const weak: number[] = [];
-  if (run.passed.size === 0 && run.rightSegments.size === 0) return { whole, weak };
+  const tried: Tried[] = [];
+  if (run.passed.size === 0 && run.rightSegments.size === 0) return { whole, tried };
   for (const lane of scope.lanes) {
-    const own = scope.within?.get(lane);
-    const right = own === undefined ? undefined : run.rightSegments.get(lane);
-    const segmentRight = right !== undefined && own !== 0 && ((own ?? 0) & right) === own;
+    const chips = scope.within?.get(lane);
+    const right = chips === undefined ? undefined : run.rightSegments.get(lane);
+    const segmentRight = right !== undefined && chips !== 0 && ((chips ?? 0) & right) === chips;
     if (!run.passed.has(lane) && !segmentRight) continue;
-    const power = run.power.get(lane);
-    if (power === undefined) whole++;
-    else weak.push(power);
+    const own = run.tried.get(lane);
+    if (own === undefined) whole++;
+    else tried.push(own);
   }
-  return { whole, weak };
+  return { whole, tried };
 }
 
 function joined(passes: readonly Passes[]): Passes {
   if (passes.length === 1) return passes[0] as Passes;
-  return { whole: sum(passes, (each) => each.whole), weak: passes.flatMap((each) => each.weak) };
+  return { whole: sum(passes, (each) => each.whole), tried: passes.flatMap((each) => each.tried) };
 }

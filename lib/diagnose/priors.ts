@@ -30,6 +30,10 @@ export const priors = {
   lineShort: 0.0005,
   /** Two data lines joined that are not neighbours by number; weighed only where readings show them to follow each other. */
   farShort: 0.0001,
+  /** Two channels joined inside a buffer; weighed only where readings show the lines to follow each other. */
+  shortInside: 0.00003,
+  /** A data line shorted to a supply, beside the driver that the layout lists. */
+  lineItself: 0.0003,
   /** One address line of the array; weighed beside the listed parts only where readings show an address bit to be lost. */
   addressLine: 0.0008,
   /** A lane that reads bad though no cause of the model is there. */

@@ -3,6 +3,8 @@ import { sentenceCase } from '../layout/words';
 import { lanesWords, saidAsOne } from './lane-words';
 import type { Observations } from './observe/observations';
 import { listSignatures } from './signature-words';
+import type { Chip } from './timeline';
+import { fitOf } from './wrong-part';
 import { openMeaning, wentAway, type Verdict, type Weighed } from './verdict';
 
 export interface Told {
@@ -12,6 +14,7 @@ export interface Told {
   readonly untested: readonly Lane[];
   readonly leftOut: number;
   readonly problems: readonly string[];
+  readonly chips: readonly Chip[];
 }
 
 function shortened(text: string): string {
@@ -70,6 +73,10 @@ export function tell(told: Told): string[] {
   }
   for (const { words } of listSignatures(findings.index, weighed.signals, findings.runs).slice(0, 3))
     sentences.push(words);
+  for (const chip of told.chips) {
+    const fit = chip.family === null ? null : fitOf(findings.index, chip);
+    if (fit && fit.verdict !== 'fits') sentences.push(...fit.reasons.slice(0, 3).map(({ words }) => words));
+  }
   const [first] = places;
   if (verdict.outcome === 'place' && first && verdict.sockets.length === 1 && first.chip + first.contact > 0) {
     const more =
@@ -87,9 +94,10 @@ export function tell(told: Told): string[] {
   }
   if (unexplained.length > 0)
     sentences.push(`No single cause explains ${lanesWords(findings.index, unexplained)} well.`);
-  if (told.leftOut > 1e-3) {
+  if (told.leftOut > 0.2) sentences.push('So much fails that only the likeliest combinations of faults were weighed.');
+  else if (told.leftOut > 1e-3) {
     sentences.push(
-      `Combinations of many faults at once were left out; together they hold at most ${percent(Math.min(1, told.leftOut))}.`,
+      `Combinations of many faults at once were left out; together they hold at most ${percent(told.leftOut)}.`,
     );
   }
   return [...sentences, ...observations.notes];

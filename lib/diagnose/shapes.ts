@@ -20,7 +20,7 @@ export const shapeShares = {
   'address line': shares([0.001, 0.01, 0.01, 0.579, 0.15, 0.245, 0.005]),
   'whole part': shares([0.002, 0.004, 0.004, 0.04, 0.15, 0.795, 0.005]),
   short: shares([0.002, 0.001, 0.001, 0.006, 0.04, 0.05, 0.9]),
-  unknown: shares([0.3, 0.02, 0.02, 0.05, 0.3, 0.3, 0.01]),
+  unknown: shares([0.12, 0.02, 0.02, 0.05, 0.38, 0.4, 0.01]),
 } as const satisfies Record<string, Readonly<Record<Shape, number>>>;
 
 export type ShapeRow = keyof typeof shapeShares;
@@ -116,4 +116,26 @@ export function shareOf(row: ShapeRow, shapes: readonly Shape[]): number {
   let total = 0;
   for (const shape of shapes) total += shapeShares[row][shape];
   return total;
+}
+
+/** What was tried of a lane that passed: right words, and whether both values were written. */
+export interface Tried {
+  readonly words: number;
+  readonly bothValues: boolean;
+}
+
+/** A fault that holds a lane at one value is seen by one written value in this share of cases (estimate). */
+const oneValueShows = 0.65;
+/** So many doublings of the words that were tried find any part of a chip. */
+const allFound = 16;
+
+/**
+ * The chance that a fault of this row would have shown in what was tried of a lane, 0 to 1: in one word by the share
+ * of faults that spoil any word, growing with the words that were tried.
+ */
+export function shownBy(row: ShapeRow, { words, bothValues }: Tried): number {
+  const own = shapeShares[row];
+  const anyWord = row === 'short' ? 0.3 : own.whole + (own.scattered + own.block) / 2 + own['follows-neighbour'];
+  const found = Math.min(1, Math.log2(Math.max(1, words)) / allFound);
+  return (bothValues ? 1 : oneValueShows) * (anyWord + (1 - anyWord) * found);
 }

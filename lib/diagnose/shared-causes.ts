@@ -26,7 +26,12 @@ export function sharedParts(builder: Builder): Part[] {
         causes.push({
           mode: 'channel',
           where: channel.name,
-          kinds: twoKinds(builder, priors.sharedChannel, scopes.of(channel.lanes)),
+          // An output of a multiplexer carries two address bits, one after the other.
+          kinds: twoKinds(
+            builder,
+            priors.sharedChannel / (channel.addressBit === undefined ? 1 : 2),
+            scopes.of(channel.lanes),
+          ),
           ...(channel.addressBit === undefined ? {} : { addressBits: [channel.addressBit] }),
         });
       }
@@ -61,7 +66,7 @@ export function unlistedParts(builder: Builder): Part[] {
   }
   const parts: Part[] = [];
   const add = (id: string, label: string, { scope, prior, mode }: { scope: Scope; prior: number; mode: FaultMode }) => {
-    if (listed.has(scope) || scope.lanes.length < 2) return;
+    if ((listed.has(scope) && mode !== 'channel') || scope.lanes.length < 2) return;
     listed.add(scope);
     const causes = [{ mode, where: null, kinds: twoKinds(builder, prior, scope) }];
     parts.push({ kind: 'shared-part', id, label, socket: null, cameFrom: null, sharedPart: null, causes });
@@ -76,8 +81,15 @@ export function unlistedParts(builder: Builder): Part[] {
     add(`unlisted:bank:${bank.id}`, label, { scope: scopes.ofBank(bankIndex(b)), ...whole });
   });
   for (let line = 0; line < index.lineCount; line++) {
-    const label = `data line ${index.lineName(line)} (trace, buffer)`;
-    add(`unlisted:line:${line}`, label, { scope: scopes.ofLine(line), prior: priors.sharedChannel, mode: 'channel' });
+    // Beside a listed driver there is still the line itself, which can be shorted to a supply.
+    const scope = scopes.ofLine(line);
+    const driven = listed.has(scope);
+    const label = `data line ${index.lineName(line)} (${driven ? 'trace, shorted to a supply' : 'trace, buffer'})`;
+    add(`unlisted:line:${line}`, label, {
+      scope,
+      prior: driven ? priors.lineItself : priors.sharedChannel,
+      mode: 'channel',
+    });
   }
   return parts;
 }
@@ -91,18 +103,24 @@ export function addressLineParts(builder: Builder): Part[] {
   const { multiplexing } = index.document;
   if (!multiplexing) return [];
   const inputs = Math.max(multiplexing.row.length, multiplexing.column.length);
-  return Array.from({ length: inputs }, (_, n): Part => {
+  const listed = new Set(
+    index.document.sharedParts.flatMap((part) => (part.role === 'multiplexer' ? (part.serves.addressBits ?? []) : [])),
+  );
+  return Array.from({ length: inputs }, (_, n) => n).flatMap((n): Part[] => {
     const addressBits = [multiplexing.row[n], multiplexing.column[n]].filter((bit) => bit !== undefined);
+    if (addressBits.every((bit) => listed.has(bit))) return [];
     const kinds = twoKinds(builder, priors.addressLine, scopes.all());
-    return {
-      kind: 'shared-part',
-      id: `unlisted:address:${n}`,
-      label: `address line ${n} of the chips (trace, resistor, multiplexer output)`,
-      socket: null,
-      cameFrom: null,
-      sharedPart: null,
-      causes: [{ mode: 'channel', where: null, kinds, addressBits }],
-    };
+    return [
+      {
+        kind: 'shared-part',
+        id: `unlisted:address:${n}`,
+        label: `address line ${n} of the chips (trace, resistor, multiplexer output)`,
+        socket: null,
+        cameFrom: null,
+        sharedPart: null,
+        causes: [{ mode: 'channel', where: null, kinds, addressBits }],
+      },
+    ];
   });
 }
 
@@ -122,8 +140,30 @@ export function shortParts(builder: Builder, pairs: readonly (readonly [number, 
         socket: null,
         cameFrom: null,
         sharedPart: null,
-        causes: [{ mode: 'short', where: null, kinds }],
+        causes: [{ mode: 'short', where: null, lines: [line, other], kinds }],
       },
     ];
+  });
+}
+
+/** The same parts, with a joint inside each listed buffer between lines that the readings show to be joined. */
+export function withJoinedChannels(
+  builder: Builder,
+  parts: readonly Part[],
+  pairs: readonly (readonly [number, number])[],
+): readonly Part[] {
+  const { index, priors, scopes } = builder;
+  return parts.map((part) => {
+    const listed = index.document.sharedParts.find(({ label }) => label === part.sharedPart);
+    if (!listed || (listed.role !== 'data-buffer' && listed.role !== 'shift-register')) return part;
+    const served = new Set(servedLanes(index, listed).map((lane) => index.lineOfLane[lane]));
+    const joined = pairs.filter((pair) => pair.every((line) => served.has(line)));
+    if (joined.length === 0) return part;
+    const causes = joined.map(([line, other]): Cause => {
+      const scope = scopes.of([...scopes.ofLine(line).lanes, ...scopes.ofLine(other).lanes]);
+      const where = `${index.lineName(line)} and ${index.lineName(other)}`;
+      return { mode: 'short', where, lines: [line, other], kinds: twoKinds(builder, priors.shortInside, scope) };
+    });
+    return { ...part, causes: [...part.causes, ...causes] };
   });
 }

@@ -5,7 +5,7 @@ import { segmentsOf } from '../layout/segments';
 import type { Cause, Kind, Part } from './cause-types';
 import { linePairs, looksJoined, type LinePair } from './line-pairs';
 import type { RunObservation } from './observe/observations';
-import { fixedBits, shapeRowOf, shapesThatFit, shareOf, type ChipSize } from './shapes';
+import { fixedBits, shapeRowOf, shapesThatFit, shareOf, type ChipSize, type ShapeRow } from './shapes';
 import { signWeight, unknownWeights } from './sign-weights';
 
 /** What is known of how one failing lane fails. */
@@ -40,7 +40,8 @@ export class Signals {
   ) {
     const readings = runs.some((run) => run.seen.size > 0 || run.aliased.size > 0 || run.values.length > 0);
     const telling = signs.filter((sign) => sign.sign !== 'dead');
-    this.silent = !readings && telling.length === 0;
+    const picked = runs.some((run) => run.picked !== null);
+    this.silent = !readings && !picked && telling.length === 0;
     this.signs = telling;
     this.pairs = readings ? linePairs(index, runs) : [];
     this.pairOf = new Map(this.pairs.map((pair) => [pair.lines.join('-'), pair]));
@@ -77,9 +78,9 @@ export class Signals {
   /** Likelihood of what is known beside the lanes, given that this kind of the cause is there; above 0, at most 1. */
   factor(part: Part, cause: Cause, kind: Kind): number {
     if (this.silent) return 1;
-    let product = this.signFactor(part, cause, kind);
-    if (cause.mode === 'short') return product * this.shortFactor(part, kind);
-    const row = shapeRowOf(part, cause, this.roleOf(part));
+    let product = this.signFactor(part, cause, kind) * this.pickedFactor(kind);
+    if (cause.mode === 'short') return product * this.shortFactor(cause, kind);
+    const row = this.rowOf(part, cause);
     const counted = new Set<string>();
     this.lanes.forEach((lanes, r) => {
       if (lanes.size === 0) return;
@@ -94,8 +95,26 @@ export class Signals {
     return product;
   }
 
-  private shortFactor(part: Part, kind: Kind): number {
-    const pair = this.pairOf.get(part.id.replace('short:', ''));
+  /** Of the lanes or banks that fail, the test named just this one. */
+  private pickedFactor(kind: Kind): number {
+    let product = 1;
+    this.runs.forEach((run, r) => {
+      if (run.picked === null) return;
+      const untested = (kind.scopes[r]?.lanes ?? []).filter((lane) => !run.passed.has(lane));
+      const failing =
+        run.picked === 'lane' ? untested.length : new Set(untested.map((lane) => this.index.bankOf(lane))).size;
+      if (failing > 1) product /= failing;
+    });
+    return product;
+  }
+
+  /** The row of the table of shapes for a cause, which also says what a pass in single words is worth. */
+  rowOf(part: Part, cause: Cause): ShapeRow {
+    return shapeRowOf(part, cause, this.roleOf(part));
+  }
+
+  private shortFactor(cause: Cause, kind: Kind): number {
+    const pair = this.pairOf.get((cause.lines ?? []).join('-'));
     if (pair && looksJoined(pair)) return shareOf('short', ['follows-neighbour']);
     let product = pair && pair.against > 0 ? notJoined : 1;
     // Lanes that do not follow this neighbour show a short no better than any other fault of a line does.

@@ -2,8 +2,10 @@ import type { Sign, Suspect } from '@/shared';
 import type { LayoutIndex } from '../layout/layout-index';
 import { listWords } from '../layout/words';
 import type { RunObservation } from './observe/observations';
-import type { RailReading } from './rails';
+import { railReading, type RailReading } from './rails';
+import { labelOf, type Chip } from './timeline';
 import type { Verdict } from './verdict';
+import { fitOf } from './wrong-part';
 
 /** A meter that shows a rail out of its limits is right this often (estimate; a probe slips, a lead is broken). */
 const meterIsRight = 0.95;
@@ -76,6 +78,76 @@ export function railSuspects(index: LayoutIndex, rails: readonly RailReading[]):
       contradicts: [],
     };
   });
+}
+
+/** How often a chip that its socket destroyed drags the rail down that destroyed it (estimate). */
+const loadsRail = 0.1;
+/** On a board where nothing runs (common practice for the supply, an estimate for reset and clock). */
+const deadBoard = { supply: 0.3, resetAndClock: 0.2 };
+
+function besideChips(
+  rank: number,
+  of: { kind: Suspect['kind']; id: string; label: string; probability: number; words: string },
+): Suspect {
+  const { kind, id, label, probability, words } = of;
+  return {
+    rank,
+    kind,
+    id,
+    label,
+    socket: null,
+    cameFrom: null,
+    sharedPart: null,
+    channel: null,
+    probability,
+    modes: [
+      { mode: kind === 'rail' ? 'supply' : 'whole', intermittent: false, words, prior: probability, probability },
+    ],
+    lanes: [],
+    reasons: [],
+    explains: [],
+    contradicts: [],
+  };
+}
+
+/** What is looked at where nothing runs and nothing names a place. */
+export function deadBoardSuspects(): Suspect[] {
+  const words = 'looked at first where nothing runs';
+  return [
+    besideChips(1, { kind: 'rail', id: 'rail:supply', label: 'supply rails', probability: deadBoard.supply, words }),
+    besideChips(2, {
+      kind: 'shared-part',
+      id: 'unlisted:reset',
+      label: 'reset and clock',
+      probability: deadBoard.resetAndClock,
+      words,
+    }),
+  ];
+}
+
+/** The rails that chips which do not belong in their sockets may load, after the suspects that are there already. */
+export function loadedRails(index: LayoutIndex, chips: readonly Chip[], before: number): Suspect[] {
+  const names = new Map<string, string>();
+  for (const chip of chips) {
+    if (chip.family === null) continue;
+    const fit = fitOf(index, chip);
+    if (fit?.verdict !== 'destroyed') continue;
+    for (const reason of fit.reasons) {
+      if (reason.severity !== 'destroys' || reason.pin === null) continue;
+      const rail = railReading(index, { socket: labelOf(index, chip.cameFrom), pin: reason.pin, volts: 0 });
+      if (rail) names.set(rail.name, reason.words);
+    }
+  }
+  return [...names].map(([name, words], i) => ({
+    ...besideChips(before + i + 1, {
+      kind: 'rail',
+      id: `rail:${name}`,
+      label: `${name} rail, loaded by the chip`,
+      probability: loadsRail,
+      words: 'loaded by a destroyed chip',
+    }),
+    reasons: [words],
+  }));
 }
 
 /** "Pin 1 of U13 measures -0.4 V; it should lie between -5.5 V and -4.5 V." */

@@ -6,6 +6,7 @@ import { lanesWords, saidAsOne } from './lane-words';
 import type { Interpretation } from './observe/observations';
 import type { RailReading } from './rails';
 import type { Signals } from './signals';
+import { labelOf } from './timeline';
 import type { Findings } from './suspects';
 
 /** What the evidence as a whole comes to. */
@@ -89,7 +90,9 @@ export function decide(weighed: Weighed): Verdict {
   if (fitting) return fitting;
   const leading = places.filter((place) => place.probability >= leads);
   if (leading.length > 0) return placeVerdict(weighed, leading);
-  if (sharedSum >= leads) return sharedVerdict(shared, sharedSum);
+  // Many shared parts with a little each do not outweigh one place that is likelier than any of them.
+  const outweighs = (shared[0]?.probability ?? 0) >= (places[0]?.probability ?? 0);
+  if (sharedSum >= leads && outweighs) return sharedVerdict(shared, sharedSum);
   return groupVerdict(weighed, shared);
 }
 
@@ -200,12 +203,16 @@ function membersOf(candidates: readonly Member[], total: number): Member[] {
 
 function groupVerdict(weighed: Weighed, shared: readonly Suspect[]): Verdict {
   const { places, suspects, findings } = weighed;
+  const together = needEachOther(weighed);
   const candidates = [
-    ...places.map((place) => ({
-      id: suspects.find((suspect) => suspect.socket === place.socket)?.id ?? `place:${place.socket}`,
-      label: place.socket,
-      share: place.probability,
-    })),
+    ...(together ? [together.member] : []),
+    ...places
+      .filter((place) => !together?.sockets.includes(place.socket))
+      .map((place) => ({
+        id: suspects.find((suspect) => suspect.socket === place.socket)?.id ?? `place:${place.socket}`,
+        label: place.socket,
+        share: place.probability,
+      })),
     ...shared.map((suspect) => ({
       id: suspect.id,
       label: suspect.sharedPart ?? suspect.label,
@@ -219,11 +226,14 @@ function groupVerdict(weighed: Weighed, shared: readonly Suspect[]): Verdict {
     sum(members, (member) => member.share),
   );
   const sockets = places
-    .filter((place) => members.some((member) => member.label === place.socket))
+    .filter(
+      (place) => members.some((member) => member.label === place.socket) || together?.sockets.includes(place.socket),
+    )
     .map((place) => place.socket);
   const holders = suspects.filter((suspect) => suspect.kind === 'chip' && suspect.modes[0]?.mode === 'holds-line');
   const held =
     holders.length > 1 &&
+    sockets.length > 1 &&
     members.every((m) => shared.some((s) => s.id === m.id) || holders.some((h) => h.socket === m.label));
   const names = members.map((member) => member.label);
   const open = openMeaning(weighed);
@@ -253,6 +263,27 @@ function groupVerdict(weighed: Weighed, shared: readonly Suspect[]): Verdict {
     sure: 'not sure',
     probability,
     groups: [{ members, probability, why, check }],
+    sockets,
+  };
+}
+
+/** Of two likely places this share is held by both at once, so that they are one explanation and no two. */
+const onlyTogether = 0.8;
+
+/** Two places that explain the evidence only when both have failed. */
+function needEachOther({ places, findings }: Weighed): { member: Member; sockets: string[] } | null {
+  const [one, other] = places;
+  if (!one || !other || other.probability < 0.1) return null;
+  const partsOf = (socket: string) =>
+    findings.parts.flatMap((part, p) =>
+      part.socket !== null && labelOf(findings.index, part.socket) === socket ? [p] : [],
+    );
+  const either = findings.posterior.anyOf(new Set([...partsOf(one.socket), ...partsOf(other.socket)]));
+  const share = one.probability + other.probability - either;
+  if (share < onlyTogether * other.probability) return null;
+  const sockets = [one.socket, other.socket].sort();
+  return {
+    member: { id: `together:${sockets.join('+')}`, label: `${sockets.join(' and ')} together`, share },
     sockets,
   };
 }

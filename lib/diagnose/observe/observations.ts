@@ -4,6 +4,7 @@ import type { LayoutIndex } from '../../layout/layout-index';
 import type { AddressMap } from '../../place/address';
 import type { LaneSeen, ValueSeen } from '../../readings/tally';
 import type { CompiledFormat } from '../../report/meaning';
+import type { Tried } from '../shapes';
 import { consistentChoices } from './choices';
 import { observeRun } from './observe-run';
 import { emptyPiece, shownOf, type Piece, type Read, type Where } from './piece';
@@ -17,11 +18,10 @@ export interface RunObservation {
   readonly passed: ReadonlySet<Lane>;
   /** What single readings showed; empty where the evidence speaks of whole lanes only. */
   readonly seen: ReadonlyMap<Lane, LaneSeen>;
-  /**
-   * For lanes that passed: the chance that a fault there would have shown in what was tested, 0 to 1. Lanes that
-   * are not listed were tested as a whole.
-   */
-  readonly power: ReadonlyMap<Lane, number>;
+  /** For lanes that passed in single readings: what was tried. Lanes that are not listed were tested as a whole. */
+  readonly tried: ReadonlyMap<Lane, Tried>;
+  /** The code names one of several failing lanes or banks, as if at random; null where it does not. */
+  readonly picked: 'lane' | 'bank' | null;
   /** For failing lanes of banks that are several chips deep: the chips that hold a failing word, and those seen right. */
   readonly failingSegments: ReadonlyMap<Lane, number>;
   readonly rightSegments: ReadonlyMap<Lane, number>;
@@ -39,7 +39,8 @@ export function plainRun(failing: ReadonlySet<Lane>, passed: ReadonlySet<Lane>):
     failing,
     passed,
     seen: none,
-    power: none,
+    tried: none,
+    picked: null,
     failingSegments: none,
     rightSegments: none,
     values: [],
@@ -166,6 +167,7 @@ function readEither(where: Where, evidence: Extract<Evidence, { kind: 'either' }
       .sort()
       .join(' | ')}`,
     after: first.piece.after,
+    unordered: fitting.every((way) => way.piece.unordered),
     choices,
     passesOutright: fitting.every((way) => way.piece.passesOutright),
   };

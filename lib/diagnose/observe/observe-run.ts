@@ -3,6 +3,7 @@ import type { Lane } from '../../brand';
 import type { LayoutIndex } from '../../layout/layout-index';
 import { segmentsOf } from '../../layout/segments';
 import { emptySeen, type LaneSeen } from '../../readings/tally';
+import type { Tried } from '../shapes';
 import type { RunObservation } from './observations';
 import type { Choice, Piece } from './piece';
 
@@ -30,12 +31,14 @@ export function observeRun(index: LayoutIndex, run: Run, chosen: readonly Chosen
   for (const lane of failing) passed.delete(lane);
   for (const lane of outright) passed.add(lane);
   const tallied = chosen.some(({ choice }) => choice.tally !== null || choice.aliased.length > 0);
+  const picked = pickedOf(index, chosen);
   if (!tallied) {
     return {
       failing,
       passed,
       seen: nothing,
-      power: nothing,
+      tried: nothing,
+      picked,
       failingSegments: nothing,
       rightSegments: nothing,
       values: [],
@@ -43,7 +46,21 @@ export function observeRun(index: LayoutIndex, run: Run, chosen: readonly Chosen
       whole: false,
     };
   }
-  return { failing, passed, ...details(index, { chosen, failing, passed, outright, listed }) };
+  return { failing, passed, picked, ...details(index, { chosen, failing, passed, outright, listed }) };
+}
+
+/**
+ * A test that stops at the first failure, in an order that nobody knows, reports one of the failing lanes as if at
+ * random, or the word of one of the failing banks. Null where the run says more than such a code.
+ */
+function pickedOf(index: LayoutIndex, chosen: readonly Chosen[]): RunObservation['picked'] {
+  const telling = chosen.filter(({ choice }) => choice.failing.length + choice.passed.length > 0);
+  const [only] = telling;
+  if (telling.length !== 1 || !only?.piece.unordered) return null;
+  const { failing, passed } = only.choice;
+  const banks = new Set(failing.map((lane) => index.bankOf(lane)));
+  const wholeWord = failing.length > 1 || passed.some((lane) => banks.has(index.bankOf(lane)));
+  return wholeWord ? 'bank' : 'lane';
 }
 
 interface Parts {
@@ -73,23 +90,13 @@ function details(index: LayoutIndex, { chosen, failing, passed, outright, listed
     whole,
     values: chosen.flatMap(({ choice }) => choice.tally?.values ?? []),
     aliased,
-    power: listed || whole ? nothing : powers(seen, { passed, outright, byReadings, otherwise }),
+    tried: listed || whole ? nothing : triedOf(seen, { passed, outright, byReadings, otherwise }),
     ...segments(index, seen, { failing, whole: whole || listed }),
   };
 }
 
-/** A pass is worth what was tried; one polarity shows fewer faults than both, few words fewer than many (estimates). */
-const onePolarity = 0.4;
-const bothPolarities = 0.6;
-const perDoubling = 0.03;
-const mostByWords = 0.3;
-
-function powerOf({ rightZeros, rightOnes }: LaneSeen): number {
-  const base = rightZeros > 0 && rightOnes > 0 ? bothPolarities : onePolarity;
-  return base + Math.min(mostByWords, perDoubling * Math.log2(Math.max(1, rightZeros + rightOnes)));
-}
-
-function powers(
+/** What was tried of the lanes that passed in single readings only. */
+function triedOf(
   seen: ReadonlyMap<Lane, LaneSeen>,
   sets: {
     passed: ReadonlySet<Lane>;
@@ -97,21 +104,27 @@ function powers(
     byReadings: ReadonlySet<Lane>;
     otherwise: ReadonlySet<Lane>;
   },
-): Map<Lane, number> {
-  const power = new Map<Lane, number>();
+): Map<Lane, Tried> {
+  const tried = new Map<Lane, Tried>();
   let ones = false;
   let zeros = false;
+  let words = 0;
   for (const own of seen.values()) {
     if (own.rightOnes + own.readsZero > 0) ones = true;
     if (own.rightZeros + own.readsOne > 0) zeros = true;
+    words = Math.max(words, own.rightZeros + own.rightOnes + own.readsOne + own.readsZero);
   }
   for (const lane of sets.passed) {
     const own = seen.get(lane);
-    if (own && sets.byReadings.has(lane) && !sets.otherwise.has(lane)) power.set(lane, powerOf(own));
-    // "Nothing failed there" beside single readings is as good as the values that those readings tried.
-    else if (sets.outright.has(lane)) power.set(lane, (ones && zeros ? bothPolarities : onePolarity) + mostByWords);
+    if (own && sets.byReadings.has(lane) && !sets.otherwise.has(lane)) {
+      const { rightZeros, rightOnes } = own;
+      tried.set(lane, { words: rightZeros + rightOnes, bothValues: rightZeros > 0 && rightOnes > 0 });
+    } else if (sets.outright.has(lane)) {
+      // "Nothing failed there" beside single readings is as good as the values that those readings tried.
+      tried.set(lane, { words, bothValues: ones && zeros });
+    }
   }
-  return power;
+  return tried;
 }
 
 function merged(before: LaneSeen | undefined, own: LaneSeen): LaneSeen {

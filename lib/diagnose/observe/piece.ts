@@ -23,6 +23,8 @@ export interface Piece {
   /** Pieces with the same question take the same answer: the format, or the ways of an open reading. */
   readonly question: string | null;
   readonly after: 'stops' | 'lists-lanes' | 'lists-banks' | null;
+  /** The test stops at the first failure, and the layout does not say in which order it tests. */
+  readonly unordered: boolean;
   readonly choices: readonly Choice[];
   /** It says outright that lanes passed, against which no other code of the run counts. */
   readonly passesOutright: boolean;
@@ -50,6 +52,7 @@ export function emptyPiece(where: Where): Piece {
     run: where.run,
     question: null,
     after: null,
+    unordered: false,
     choices: [noChoice],
     passesOutright: false,
     sign: null,

@@ -35,6 +35,7 @@ export function readCode(where: Where, evidence: Code): Read {
       ...emptyPiece(where),
       question: evidence.format,
       after: definition.after,
+      unordered: definition.after === 'stops' && definition.testOrder === undefined,
       choices: result.readings.map((reading) => choiceOf(where, reading, definition)),
     },
     shown: {

@@ -106,7 +106,7 @@ export function readPicture(where: Where, evidence: Of<'picture'>): Read {
     return refuse(where, text, problems[0] ?? 'The marks touch no lane that the picture shows.');
   }
   const lanes = failing.map(({ lane }) => lane);
-  const seen = failing.map(({ lane, words, shown, reads }): [Lane, LaneSeen] => [
+  const seen = failing.map(({ lane, words, shown, reads, failingSegments, rightSegments }): [Lane, LaneSeen] => [
     lane,
     {
       ...emptySeen(),
@@ -114,6 +114,8 @@ export function readPicture(where: Where, evidence: Of<'picture'>): Read {
       readsZero: reads === 'zero' ? words : 0,
       words,
       outOf: shown,
+      failingSegments,
+      rightSegments,
     },
   ]);
   const tally: Tally = { lanes: new Map(seen), values: [], whole: evidence.rest === 'right', readings: marks };
