@@ -2,8 +2,14 @@ import { startNode } from './setup/children.mjs';
 import { ensurePackages } from './setup/packages.mjs';
 import { GiveUp, giveUp, say } from './setup/say.mjs';
 
-/** What is proved, each part in a process of its own. The longest come first. */
-const parts = ['singles', 'follow', 'reports', 'reference'];
+/** What is proved, each part in a process of its own: its program and what that is told. */
+const parts = {
+  own: ['singles.ts', 'own'],
+  shared: ['singles.ts', 'shared'],
+  reports: ['reports.ts'],
+  reference: ['reference.ts'],
+  follow: ['follow.ts'],
+};
 const atOnce = 2;
 
 /** --cases N --seed S --only kind. */
@@ -23,7 +29,8 @@ const optionsOf = (args) => {
 };
 
 const tablesOf = async (part, options) => {
-  const child = startNode(['--import', 'tsx', `server/scripts/prove/${part}.ts`], {
+  const [program, ...told] = parts[part];
+  const child = startNode(['--import', 'tsx', `server/scripts/prove/${program}`, ...told], {
     env: { ...process.env, ...options },
   });
   let tables;
@@ -33,6 +40,16 @@ const tablesOf = async (part, options) => {
   const code = await child.ended;
   if (code !== 0 || tables === undefined) throw new GiveUp(`the proof of ${part} failed; the reason is above.`);
   return tables;
+};
+
+/** Tables of one title are one table. */
+const together = (tables) => {
+  const byTitle = new Map();
+  for (const table of tables) {
+    const before = byTitle.get(table.title);
+    byTitle.set(table.title, before === undefined ? table : { ...before, rows: [...before.rows, ...table.rows] });
+  }
+  return [...byTitle.values()].filter(({ rows }) => rows.length > 0);
 };
 
 const markdown = ({ title, columns, rows, notes = [] }) => {
@@ -46,8 +63,9 @@ const markdown = ({ title, columns, rows, notes = [] }) => {
 try {
   const args = process.argv.slice(2);
   const options = optionsOf(args);
-  const wanted = parts.filter((part) => options.PROVE_PART === undefined || part === options.PROVE_PART);
-  if (wanted.length === 0) throw new GiveUp(`There is no part ${options.PROVE_PART}. There are: ${parts.join(', ')}.`);
+  const wanted = Object.keys(parts).filter((part) => options.PROVE_PART === undefined || part === options.PROVE_PART);
+  if (wanted.length === 0)
+    throw new GiveUp(`There is no part ${options.PROVE_PART}. There are: ${Object.keys(parts).join(', ')}.`);
   await ensurePackages();
   const waiting = [...wanted];
   const tables = new Map();
@@ -59,7 +77,11 @@ try {
   await Promise.all(Array.from({ length: atOnce }, worker));
   const command = ['npm run prove', ...(args.length > 0 ? ['--', ...args] : [])].join(' ');
   say(`Measured on ${new Date().toISOString().slice(0, 10)} with \`${command}\`.\n`);
-  say(wanted.flatMap((part) => tables.get(part).map(markdown)).join('\n\n'));
+  say(
+    together(wanted.flatMap((part) => tables.get(part)))
+      .map(markdown)
+      .join('\n\n'),
+  );
 } catch (error) {
   giveUp(error);
 }

@@ -51,7 +51,7 @@ const boards = [...demoProofBoards(), ...generatedProofBoards()].filter(
   ({ wiring }) => wiring.labels.length <= mostSockets,
 );
 const kinds = faultKinds.filter((kind) => kind !== 'wiring of one lane' && (options.only ?? kind) === kind);
-const cases = Math.max(1, Math.floor(options.cases / 5));
+const cases = Math.max(1, Math.floor(options.cases / 6));
 hand([
   {
     title: 'Following the next checks, one fault, evidence that lists every lane',

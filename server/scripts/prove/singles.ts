@@ -1,4 +1,4 @@
-import { allLanes, diagnose, faultKinds, type FaultKind } from '@/lib';
+import { allLanes, diagnose, faultKinds, type FaultKind, type PossibleFault } from '@/lib';
 import { demoProofBoards, generatedProofBoards, type ProofBoard } from './boards';
 import { drawShown } from './draw';
 import { seededRandom } from './random';
@@ -6,12 +6,25 @@ import { naiveScore, scoreAnswer } from './score';
 import { hand, optionsFrom, type ProofOptions } from './table';
 import { calibrationError, figure, mean, percent, Tally } from './tally';
 
-/** One kind of single fault on all boards in turn, evidence that lists every lane. */
-function proveKind(boards: readonly ProofBoard[], kind: FaultKind | null, { cases, seed }: ProofOptions): Tally {
+/** Faults that are proved together: a kind, and with shared parts whether there is more than one chip behind them. */
+interface Wanted {
+  readonly name: string;
+  readonly fits: (board: ProofBoard, fault: PossibleFault) => boolean;
+}
+
+/** A shared part behind which there is one chip alone cannot be told from that chip by what fails. */
+const oneChip = ({ wiring }: ProofBoard, { part, lanes }: PossibleFault): boolean =>
+  part !== 'chip' &&
+  part !== 'position' &&
+  new Set(lanes.flatMap((lane) => (wiring.portsOfLane.get(lane) ?? []).map((at) => wiring.ports[at]?.position))).size <
+    2;
+
+/** Faults of one sort on all boards in turn, evidence that lists every lane. */
+function prove(boards: readonly ProofBoard[], { fits }: Wanted, { cases, seed }: ProofOptions): Tally {
   const tally = new Tally();
-  const random = seededRandom(seed * 1000 + faultKinds.indexOf(kind as FaultKind) + 2);
+  const random = seededRandom(seed);
   const able = boards
-    .map((board) => ({ board, possible: board.possible.filter((each) => kind === null || each.kind === kind) }))
+    .map((board) => ({ board, possible: board.possible.filter((each) => fits(board, each)) }))
     .filter(({ possible }) => possible.length > 0);
   for (let n = 0; n < cases && able.length > 0; n++) {
     const { board, possible } = able[n % able.length]!;
@@ -38,14 +51,35 @@ const row = (name: string, tally: Tally): string[] => [
   percent(tally.setHolds, tally.cases),
 ];
 
+const own: readonly FaultKind[] = faultKinds.slice(0, faultKinds.indexOf('channel of a buffer'));
+
+/** The faults of one part of the proof: those of chips and positions, or those of what they share. */
+function wantedIn(half: string | undefined): Wanted[] {
+  if (half !== 'own' && half !== 'shared') throw new RangeError('Say own or shared.');
+  const kinds = faultKinds.filter((kind) => own.includes(kind) === (half === 'own'));
+  const each = kinds.map((kind): Wanted => ({
+    name: kind,
+    fits: (board, fault) => fault.kind === kind && (kind === 'wiring of one lane' || !oneChip(board, fault)),
+  }));
+  if (half === 'own') return each;
+  return [
+    ...each,
+    {
+      name: 'shared part with one chip behind it',
+      fits: (board, fault) => fault.kind !== 'wiring of one lane' && oneChip(board, fault),
+    },
+    { name: 'any, drawn by the priors', fits: () => true },
+  ];
+}
+
 const options = optionsFrom(process.env);
 const boards = [...demoProofBoards(), ...generatedProofBoards()];
-const kinds = faultKinds.filter((kind) => options.only === null || kind === options.only);
-const rows = kinds.map((kind) => row(kind, proveKind(boards, kind, options)));
-const drawn =
-  options.only === null
-    ? [row('any, drawn by the priors', proveKind(boards, null, { ...options, cases: options.cases * 2 }))]
-    : [];
+const half = process.argv[2];
+const rows = wantedIn(half)
+  .filter(({ name }) => options.only === null || name === options.only)
+  .map((wanted, at) =>
+    row(wanted.name, prove(boards, wanted, { ...options, seed: options.seed * 1000 + at + (half === 'own' ? 0 : 50) })),
+  );
 hand([
   {
     title: 'One fault, evidence that lists every lane',
@@ -62,7 +96,7 @@ hand([
       '95 % set',
       'set holds it',
     ],
-    rows: [...rows, ...drawn],
+    rows,
     notes: [`On ${boards.length} boards in turn: the demo boards and generated ones of 8 to 256 sockets.`],
   },
 ]);
