@@ -85,6 +85,9 @@ export function shapesThatFit(seen: LaneSeen, size: ChipSize, whole: boolean): r
   const oneColumn = seen.column !== null && seen.columns === 1;
   if (!whole) {
     if (n === 1) return null;
+    // A list that ends exactly where a row or column of the chip ends is one.
+    if (oneRow && size.columns > 1 && seen.columns >= size.columns) return ['row'];
+    if (oneColumn && size.rows > 1 && seen.rows >= size.rows) return ['column'];
     return everywhere.filter(
       (shape) =>
         !(shape === 'cell' && n > fewWords) && !(shape === 'row' && !oneRow) && !(shape === 'column' && !oneColumn),

@@ -49,6 +49,8 @@ const weights: Record<SignKind, (about: About) => number> = {
   },
   'writes-do-not-stick': (about) => {
     if (about.role === 'write-driver') return 0.9;
+    // Drivers of strobes often drive the write line as well.
+    if (about.role === 'strobe-driver') return 0.4;
     if (ofPosition(about)) return 0.1;
     return about.part.id === 'unlisted:all' ? 0.2 : 0.04;
   },

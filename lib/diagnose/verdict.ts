@@ -268,7 +268,7 @@ function groupVerdict(weighed: Weighed, shared: readonly Suspect[]): Verdict {
 }
 
 /** Of two likely places this share is held by both at once, so that they are one explanation and no two. */
-const onlyTogether = 0.8;
+const onlyTogether = 0.6;
 
 /** Two places that explain the evidence only when both have failed. */
 function needEachOther({ places, findings }: Weighed): { member: Member; sockets: string[] } | null {

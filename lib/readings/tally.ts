@@ -62,10 +62,22 @@ export interface TalliedReadings {
   readonly problems: readonly string[];
 }
 
-/** Of a run of addresses no more than this many are looked at, spread evenly, the ends among them. */
+/**
+ * Of runs of addresses no more than this many are looked at in all, spread over them, the ends among them; but a few of
+ * each run.
+ */
+const mostOfRuns = 4096;
 const mostOfRun = 2048;
+const leastOfRun = 4;
 const mostWords = 64;
 const mostWays = 8;
+
+/** The golden ratio spreads samples evenly without a stride, which would look like an address bit that never changes. */
+const golden = 0.618_033_988_749_894_9;
+
+function nthOfRun(i: number, looked: number, count: number): number {
+  return i === looked - 1 ? count - 1 : Math.floor(((i * golden) % 1) * count);
+}
 
 /** Draws the readings together. Never throws; a line that leads nowhere is told in `problems` and left out. */
 export function tallyReadings(map: AddressMap, evidence: Readings): TalliedReadings {
@@ -103,20 +115,24 @@ class TallyBuilder {
   >();
   private readonly values = new Map<string, { bank: BankIndex; written: number; read: number; count: number }>();
   private readings = 0;
+  private readonly perRun: number;
 
   constructor(
     private readonly map: AddressMap,
     private readonly form: Readings,
     private readonly register: ValuePlace['register'],
-  ) {}
+  ) {
+    const runs = form.lines.filter((line) => line.to !== undefined).length;
+    this.perRun = Math.max(leastOfRun, Math.min(mostOfRun, Math.floor(mostOfRuns / Math.max(1, runs))));
+  }
 
   add(line: Reading): void {
     const step = line.step ?? 1;
     const count = line.to === undefined ? 1 : Math.floor((line.to - line.address) / Math.max(1, step)) + 1;
-    const looked = Math.min(count, mostOfRun);
+    const looked = Math.min(count, this.perRun);
     let missed = 0;
     for (let i = 0; i < looked; i++) {
-      const nth = looked === 1 ? 0 : Math.floor((i * (count - 1)) / (looked - 1));
+      const nth = looked === count ? i : nthOfRun(i, looked, count);
       const place = this.placeOf(line, line.address + nth * step);
       if (place) this.addPlaced(line, { place, address: line.address + nth * step, weight: count / looked });
       else missed++;

@@ -22,13 +22,14 @@ export function continuityWords(beliefs: Beliefs, socket: SocketIndex): string {
   const to = `to the leg of the chip in ${here}`;
   const neighbour = beside === null ? 'the chip beside it' : labelOf(index, beside);
   if (!pins) {
-    const data = line === null ? bufferWords(index, socket) : `the data pins from ${labelOf(index, line)}`;
-    return `Power off, measure from each pin of ${neighbour} ${to}, the same pin. Only ${data}.`;
+    const data =
+      line === null ? `The data pins ${leadWords(index, socket)}` : `The data pins: from ${labelOf(index, line)}`;
+    return `Power off, measure from each pin of ${neighbour} ${to}, the same pin. ${data}.`;
   }
   const [first, ...others] = pins.data;
   if (line === null) {
-    const from = beside === null ? 'its line' : `the same pin of ${neighbour}`;
-    return `Power off, measure ${to} from ${from}, ${pinsWords(pins.rest)}. Data ${pinsWords(pins.data)}: ${bufferWords(index, socket)}.`;
+    const data = `Data ${pinsWords(pins.data)} ${leadWords(index, socket)}`;
+    return `Power off, measure from ${neighbour} ${to}, ${pinsWords(pins.rest)}. ${data}.`;
   }
   const same = others.length > 0 ? ` Then ${pinsWords(others)} the same way,` : ' Then';
   const rest = `${pinsWords(pins.rest)} from ${neighbour}`;
@@ -55,23 +56,16 @@ function pinsWords(pins: readonly number[]): string {
   return pins.length === 1 ? pinWords(pins[0]) : `pins ${numbersWords([...pins].sort((a, b) => a - b))}`;
 }
 
-/** "to the buffer U30", by what the layout lists for the line. */
-function bufferWords(index: LayoutIndex, socket: SocketIndex): string {
+/** "lead to U30", by what the layout lists for the line. */
+function leadWords(index: LayoutIndex, socket: SocketIndex): string {
   const own = lanesOfSocket(index, socket);
-  const buffers = index.document.sharedParts.filter(
-    (part) =>
-      (part.role === 'data-buffer' || part.role === 'shift-register') &&
-      servedLanes(index, part).some((lane) => own.includes(lane)),
-  );
-  return buffers.length === 0
-    ? 'the data pins lead elsewhere, to what drives the line'
-    : `the data pins lead to ${listWords(
-        buffers.map(({ label }) => label),
-        3,
-      )}`;
+  const buffers = index.document.sharedParts.filter(({ role }) => role === 'data-buffer' || role === 'shift-register');
+  const serving = buffers.filter((part) => servedLanes(index, part).some((lane) => own.includes(lane)));
+  const labels = serving.map(({ label }) => label);
+  return labels.length === 0 ? 'lead elsewhere, to what drives the line' : `lead to ${listWords(labels, 3)}`;
 }
 
-/** "−5 V at pin 1, +12 V at pin 8 and +5 V at pin 9", null where the layout and the family say nothing. */
+/** "-5 V at pin 1, +12 V at pin 8 and +5 V at pin 9", null where the layout and the family say nothing. */
 export function railsWords(index: LayoutIndex, socket: SocketIndex): string | null {
   const label = labelOf(index, socket);
   const listed = index.document.rails.filter(({ sockets }) => !sockets || sockets.includes(label));

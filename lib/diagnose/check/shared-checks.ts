@@ -111,19 +111,10 @@ function shortChecks(desk: Desk): Candidate[] {
   return [written, measured];
 }
 
-/** The readings already show the two bits written differently. */
-function writtenApart({ index, runs }: Desk, bits: readonly number[]): boolean {
-  const differ = (value: number | undefined, places: readonly number[]) =>
-    value !== undefined && new Set(places.map((place) => Math.floor(value / 2 ** place) % 2)).size > 1;
-  const carried = index.document.addressMap.windows.flatMap(({ lanes }) => lanes ?? []);
-  const places = bits.map((bit) => carried.find((step) => step.includes(bit))?.indexOf(bit) ?? bit);
-  return runs.some((run) =>
-    run.evidence.some((each) => {
-      if (each.kind === 'readings')
-        return each.lines.some(({ written }) => differ(written, each.shows === 'word' ? bits : places));
-      return each.kind === 'log' && each.values.some(({ written }) => differ(written, bits));
-    }),
-  );
+/** Some reading already shows the two bits written differently. */
+function writtenApart({ beliefs }: Desk, bits: readonly number[]): boolean {
+  const differ = (value: number) => new Set(bits.map((bit) => Math.floor(value / 2 ** bit) % 2)).size > 1;
+  return beliefs.findings.runs.some((run) => run.values.some(({ written }) => differ(written)));
 }
 
 /** A value with just this bit, as the board writes numbers. */

@@ -95,6 +95,9 @@ function details(index: LayoutIndex, { chosen, failing, passed, outright, listed
   };
 }
 
+/** From so many readings on, ranges were tested and not single words. */
+const rangeFrom = 64;
+
 /** What was tried of the lanes that passed in single readings only. */
 function triedOf(
   seen: ReadonlyMap<Lane, LaneSeen>,
@@ -119,10 +122,12 @@ function triedOf(
     if (own && sets.byReadings.has(lane) && !sets.otherwise.has(lane)) {
       const { rightZeros, rightOnes } = own;
       tried.set(lane, { words: rightZeros + rightOnes, bothValues: rightZeros > 0 && rightOnes > 0 });
-    } else if (sets.outright.has(lane)) {
-      // "Nothing failed there" beside single readings is as good as the values that those readings tried.
-      tried.set(lane, { words, bothValues: ones && zeros });
+      continue;
     }
+    if (!sets.outright.has(lane)) continue;
+    // "Nothing failed there" beside single readings is as good as the values that those readings tried. Where whole
+    // ranges were read, what spoils both places would have shown with the value that showed it in the other.
+    tried.set(lane, { words, bothValues: (ones && zeros) || words >= rangeFrom });
   }
   return tried;
 }
