@@ -1,4 +1,5 @@
 import type { Column, ColumnPattern, LogNotation } from './line-pattern';
+import { type Label, hasDash, isLabel, joiningWords, labelOf, looksLikeNumber, stepWords } from './line-labels';
 import { type LineReader, type Outcome, marks, outcomes, slots } from './line-reader';
 import { codeOf as codeOfByte, type Span, numberOfLimbs, readNumber, separator } from './numbers';
 
@@ -9,11 +10,12 @@ const { blank, read: isRead, unread: isUnread } = outcomes;
 const { address: addressMark, written: writtenMark, read: readMark, mask: maskMark } = marks;
 const pairMarks = writtenMark | readMark;
 
-const roles = { none: 0, address: 1, written: 2, read: 3, mask: 4, register: 5, to: 6, step: 7 } as const;
+export const roles = { none: 0, address: 1, written: 2, read: 3, mask: 4, register: 5, to: 6, step: 7 } as const;
 type Role = (typeof roles)[keyof typeof roles];
 
-const markOf = [0, marks.address, marks.written, marks.read, marks.mask, marks.register, 0, 0];
-const slotOf = [0, 0, slots.written, slots.read, slots.mask, 0, 0, 0];
+const { none, address, written, mask } = roles;
+export const markOf = Uint8Array.of(0, marks.address, marks.written, marks.read, marks.mask, marks.register, 0, 0);
+export const slotOf = Uint8Array.of(0, 0, slots.written, slots.read, slots.mask, 0, 0, 0);
 const bitsOfNotation: Readonly<Record<LogNotation | 'binary', number>> = {
   hexadecimal: 4,
   octal: 3,
@@ -22,23 +24,9 @@ const bitsOfNotation: Readonly<Record<LogNotation | 'binary', number>> = {
 };
 const radixOfNotation = { hexadecimal: 16, octal: 8, binary: 2, decimal: 10 } as const;
 const mostColumns = 64;
-const lineEnd = 254;
+export const lineEnd = 254;
 const highest = 2 ** 40 - 1;
 
-interface Label {
-  readonly codes: readonly number[];
-  readonly hash: number;
-  readonly role: Role;
-}
-
-function labelOf(word: string, role: Role): Label {
-  const codes = Array.from(word, (letter) => codeOf[letter.charCodeAt(0)] ?? separator);
-  return { codes, hash: codes.reduce((hash, code) => (Math.imul(hash, 37) + code) | 0, 0), role };
-}
-
-/** Words that join the two ends of a run, and those before the distance of its addresses. */
-const joiningWords = ['to', 'thru', 'through', 'until'].map((word) => labelOf(word, roles.to));
-const stepWords = ['step', 'every'].map((word) => labelOf(word, roles.step));
 const [letterT, letterU] = [29, 30];
 
 function roleColumns(pattern: ColumnPattern): (readonly [Role, Column])[] {
@@ -64,19 +52,24 @@ export class ColumnReader implements LineReader {
   has = 0;
   next = 0;
   readonly values = new Int32Array(9);
-  private readonly codes = codeOf.slice();
+  protected readonly codes = codeOf.slice();
   private readonly roleAt = new Uint8Array(mostColumns + 1);
   private readonly labels: readonly Label[];
   private readonly labelStart = new Uint8Array(lineEnd);
-  private readonly all: number;
-  private readonly bitsOf = new Uint8Array(8);
+  protected readonly all: number;
+  protected readonly bitsOf = new Uint8Array(8);
   private readonly mostDigits = new Uint8Array(8);
   private readonly radixOf = new Uint8Array(8);
   /** A dash between two numbers of different length makes a run, which it cannot where columns are bare. */
   private readonly freeDash: boolean;
   private readonly number = new Int32Array(3);
+  /** Where the numbers of the last line stood. */
+  protected readonly starts = new Int32Array(8);
+  protected readonly ends = new Int32Array(8);
+  /** Whether the last line had nothing but plain short numbers, so that its form says all of it. */
+  protected simple = false;
   private addressDigits = 0;
-  private tooGreat: Role = roles.none;
+  private tooGreat: number = roles.none;
 
   constructor(
     private readonly pattern: ColumnPattern,
@@ -107,6 +100,7 @@ export class ColumnReader implements LineReader {
   }
 
   line(bytes: Uint8Array, at: number): Outcome {
+    this.simple = true;
     const outcome = this.follow(bytes, at, 'runs');
     // A dash that made a run may have stood between two columns.
     if (outcome === isUnread && this.to >= 0 && !this.freeDash) return this.follow(bytes, at, 'columns only');
@@ -114,7 +108,8 @@ export class ColumnReader implements LineReader {
   }
 
   private follow(bytes: Uint8Array, at: number, dashes: 'runs' | 'columns only'): Outcome {
-    const { codes, roleAt, labels, labelStart, all } = this;
+    const { codes, roleAt, labelStart, all, bitsOf, mostDigits, values, starts, ends } = this;
+    let has = 0;
     this.has = 0;
     this.to = -1;
     this.step = 1;
@@ -122,7 +117,7 @@ export class ColumnReader implements LineReader {
     this.tooGreat = roles.none;
     let p = at;
     let column = 0;
-    let pending: Role = roles.none;
+    let pending: number = none;
     let afterAddress = false;
     for (;;) {
       const gap = p;
@@ -141,11 +136,11 @@ export class ColumnReader implements LineReader {
         }
       }
       column++;
-      let role = column <= mostColumns ? (roleAt[column] as Role) : roles.none;
-      const fixed = role !== roles.none;
+      let role: number = column <= mostColumns ? roleAt[column]! : none;
+      const fixed = role !== none;
       if (!fixed) role = pending;
-      if (role !== roles.none) {
-        const bits = this.bitsOf[role]!;
+      if (role !== none) {
+        const bits = bitsOf[role]!;
         let value = 0;
         let bad = 0;
         do {
@@ -153,15 +148,32 @@ export class ColumnReader implements LineReader {
           value = (value << bits) | code;
           code = codes[bytes[++p]!]!;
         } while (code < lineEnd);
-        if (bad === 0 && p - start <= this.mostDigits[role]!) this.keepShort(role, value, p - start);
-        else if (!this.keepLong({ bytes, from: start, to: p }, role)) {
-          if (fixed) return this.leave(bytes, p);
-          role = roles.none;
+        if (bad === 0 && p - start <= mostDigits[role]!) {
+          const mark = markOf[role]!;
+          if ((has & mark) === 0) {
+            has |= mark;
+            starts[role] = start;
+            ends[role] = p;
+            if (role >= written && role <= mask) {
+              const slot = slotOf[role]!;
+              values[slot] = value;
+              values[slot + 1] = 0;
+              values[slot + 2] = 0;
+            } else this.keepShort(role, value, p - start);
+          }
+        } else {
+          this.has = has;
+          const kept = this.keepLong({ bytes, from: start, to: p }, role);
+          has = this.has;
+          if (!kept) {
+            if (fixed) return this.leave(bytes, p);
+            role = none;
+          }
         }
-        if (role !== roles.none) {
-          afterAddress = role === roles.address;
-          pending = roles.none;
-          if (!afterAddress && (this.has & all) === all && this.to < 0) break;
+        if (role !== none) {
+          afterAddress = role === address;
+          pending = none;
+          if (!afterAddress && (has & all) === all && this.to < 0) break;
           continue;
         }
         p = start;
@@ -178,17 +190,25 @@ export class ColumnReader implements LineReader {
         hash = (Math.imul(hash, 37) + code) | 0;
         code = codes[bytes[++p]!]!;
       } while (code < lineEnd);
-      for (let n = 0; n < labels.length; n++) {
-        if (labels[n]!.hash === hash && isLabel(bytes, start, labels[n]!) && labels[n]!.codes.length === p - start) {
-          pending = labels[n]!.role;
-          break;
-        }
+      const label = this.labelAt(bytes, start, { size: p - start, hash });
+      if (label !== none) pending = label;
+      if (pending === none) {
+        this.has = has;
+        pending = this.rareWord(bytes, start, p);
+        has = this.has;
       }
-      if (pending === roles.none && (labels.length > 0 || this.to >= 0)) pending = this.rareWord(bytes, start, p);
-      afterAddress = pending === roles.address && (this.has & addressMark) !== 0;
-      if (afterAddress) pending = roles.none;
+      afterAddress = pending === address && (has & addressMark) !== 0;
+      if (afterAddress) pending = none;
     }
+    this.has = has;
     return this.leave(bytes, p, column);
+  }
+
+  private labelAt(bytes: Uint8Array, from: number, { size, hash }: { size: number; hash: number }): number {
+    for (const label of this.labels) {
+      if (label.hash === hash && label.codes.length === size && isLabel(bytes, from, label)) return label.role;
+    }
+    return none;
   }
 
   /** Goes to the line's end and says what the line was. */
@@ -202,25 +222,18 @@ export class ColumnReader implements LineReader {
     return whole && this.tooGreat === roles.none ? isRead : isUnread;
   }
 
-  private keepShort(role: Role, value: number, digits: number): void {
-    const mark = markOf[role]!;
-    if ((this.has & mark) !== 0) return;
-    this.has |= mark;
-    if (role === roles.address) {
+  /** Numbers other than values, of up to 32 bits. */
+  private keepShort(role: number, value: number, digits: number): void {
+    if (role === address) {
       this.address = value >>> 0;
       this.addressDigits = digits;
     } else if (role === roles.register) this.register = value >>> 0;
     else if (role === roles.step) this.step = Math.max(1, value >>> 0);
-    else {
-      const slot = slotOf[role]!;
-      this.values[slot] = value;
-      this.values[slot + 1] = 0;
-      this.values[slot + 2] = 0;
-    }
   }
 
   /** Numbers with marks of their base, decimal ones and those of more than 32 bits. */
-  private keepLong(span: Span, role: Role): boolean {
+  private keepLong(span: Span, role: number): boolean {
+    this.simple = false;
     const digits = readNumber(span, this.radixOf[role]!, { limbs: this.number, at: 0 });
     if (digits === 0) return false;
     const mark = markOf[role]!;
@@ -292,31 +305,4 @@ export class ColumnReader implements LineReader {
     const notation = role === roles.address ? pattern.notation : (pattern.values ?? pattern.notation);
     return `There is no ${nouns[role]} (${notation} number, ${where}).`;
   }
-}
-
-/** Whether the word at a place begins with the letters of a label. */
-function isLabel(bytes: Uint8Array, from: number, { codes }: Label): boolean {
-  for (let n = 0; n < codes.length; n++) if (codeOf[bytes[from + n]!] !== codes[n]) return false;
-  return true;
-}
-
-/** A hyphen, a tilde, two dots, or a dash of UTF-8. */
-function hasDash(bytes: Uint8Array, from: number, to: number): boolean {
-  for (let p = from; p < to; p++) {
-    const byte = bytes[p]!;
-    if (byte === 0x2d || byte === 0x7e) return true;
-    if (byte === 0x2e && bytes[p + 1] === 0x2e) return true;
-    if (byte === 0xe2 && bytes[p + 1] === 0x80 && bytes[p + 2]! >= 0x90 && bytes[p + 2]! <= 0x95) return true;
-  }
-  return false;
-}
-
-/** Digits after a label that touches them: with a decimal digit among them, or one letter several times, as FF. */
-function looksLikeNumber(bytes: Uint8Array, from: number, to: number): boolean {
-  let same = to - from > 1;
-  for (let p = from; p < to; p++) {
-    if (codeOf[bytes[p]!]! < 10) return true;
-    if (codeOf[bytes[p]!] !== codeOf[bytes[from]!]) same = false;
-  }
-  return same;
 }

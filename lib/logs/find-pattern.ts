@@ -14,6 +14,8 @@ const bitsPerDigit = { hexadecimal: 4, octal: 3, decimal: Math.log2(10), binary:
 const weights = {
   /** Another notation than the layout states for its addresses. */
   otherNotation: 0.15,
+  /** Decimal numbers on a machine that counts otherwise. */
+  decimal: 0.04,
   /** For each digit that an address or a value has more or less than the notation needs on this board. */
   otherDigits: 0.4,
   /** No word tells which value was written, and it stands after the value read. */
@@ -168,15 +170,15 @@ function digitsNear(words: readonly string[], most: number, notation: LogNotatio
   return near.reduce((sum, each) => sum + each, 0) / near.length;
 }
 
-/** How much likelier it is that hexadecimal digits never reach 8, the less often the more digits change. */
-function neverAboveSeven(words: readonly string[]): number {
-  let chances = 0;
+/** How likely it is that numbers of a notation never have an 8 or a digit above it; the less, the more digits change. */
+function neverAboveSeven(words: readonly string[], notation: LogNotation): number {
+  if (notation === 'octal' || words.some((word) => /[89a-f]/i.test(word))) return 1;
   const width = Math.max(0, ...words.map((word) => word.length));
-  if (words.some((word) => /[89a-f]/i.test(word))) return 1;
+  let chances = 0;
   for (let place = 1; place <= width; place++) {
     chances += new Set(words.map((word) => word.at(-place) ?? '0')).size - 1;
   }
-  return 0.5 ** Math.min(8, chances);
+  return (notation === 'decimal' ? 0.8 : 0.5) ** Math.min(12, chances);
 }
 
 function ratio(part: number, whole: number): number {
@@ -205,7 +207,7 @@ function scoreOf(
   let score = ratio(read, lines) * (0.2 + 0.8 * ratio(sample.differ, read));
   if (windows.length > 0) score *= 0.001 + 0.999 * ratio(sample.placed, read) ** 3;
   if (sample.placed > 0) score *= 0.001 + 0.999 * ratio(sample.fits, sample.placed) ** 3;
-  if (pattern.notation !== notation) score *= weights.otherNotation;
+  if (pattern.notation !== notation) score *= pattern.notation === 'decimal' ? weights.decimal : weights.otherNotation;
   if (values !== pattern.notation) score *= weights.mixed;
   score *= weights.passedOver ** shape.passedOver;
   if (pattern.mask !== undefined && pattern.written !== undefined)
@@ -220,7 +222,7 @@ function scoreOf(
     score *= digitsNear(digits.address, most, pattern.notation);
   }
   if (sample.bits > 0) score *= digitsNear(digits.values, widthOf(2 ** sample.bits - 1, values), values);
-  if (pattern.notation === 'hexadecimal') score *= neverAboveSeven(digits.address);
+  score *= neverAboveSeven(digits.address, pattern.notation);
   if (read > 2 && shape.told !== 'words') {
     score *= 0.2 + 0.8 * ratio(addresses.size, read);
     if (writtens.size > reads.size) score *= 0.6;

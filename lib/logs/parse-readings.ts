@@ -4,6 +4,8 @@ import { type AddressMap, buildAddressMap } from '../place/address';
 import { placeValue } from '../place/place-value';
 import { findLinePatterns } from './find-pattern';
 import { type LinePattern, isFormatPattern, patternWords } from './line-pattern';
+import { openLogImport } from './log-import';
+import { bytesOfText } from './numbers';
 import { openLineReader } from './open-line-reader';
 import { readLine } from './read-line';
 import { cleanParity, goesOn, saysAllPassed, saysRestPassed } from './statements';
@@ -65,6 +67,15 @@ function readAll(map: AddressMap, lines: readonly Line[], pattern: LinePattern):
 
 const notationOf = (pattern: LinePattern) => (isFormatPattern(pattern) ? null : pattern.notation);
 
+/** Whether lines of another order can stand among those of a pattern: their words say so, and the numbers are alike. */
+function standsBeside(other: LinePattern, pattern: LinePattern): boolean {
+  if (other.unit !== pattern.unit || other.shows !== pattern.shows) return false;
+  if (isFormatPattern(other) || isFormatPattern(pattern)) return isFormatPattern(other);
+  const { written, read, mask } = other;
+  const labelled = typeof mask === 'string' || (typeof written === 'string' && typeof read === 'string');
+  return labelled && other.notation === pattern.notation && other.values === pattern.values;
+}
+
 /** Lines of another order than most: each group of them by a pattern of its own, in the notation and unit of the first. */
 function readOthers(map: AddressMap, parsed: Parsed, pattern: LinePattern): Parsed {
   let current = parsed;
@@ -72,11 +83,7 @@ function readOthers(map: AddressMap, parsed: Parsed, pattern: LinePattern): Pars
     const like = findLinePatterns(
       map.index,
       current.unread.map(({ text }) => text),
-    ).find(
-      (other) =>
-        other.unit === pattern.unit &&
-        (notationOf(other) === null || notationOf(pattern) === null || notationOf(other) === notationOf(pattern)),
-    );
+    ).find((other) => standsBeside(other, pattern));
     if (like === undefined) return current;
     const more = readAll(map, current.unread, like);
     if (more.readings.length === 0) return current;
@@ -136,10 +143,18 @@ function meaning(map: AddressMap, { pattern, parsed }: Read): string {
     .join('|');
 }
 
-function readingsEvidence({ pattern, parsed }: Read, rest: 'unknown' | 'passed'): PlainEvidence {
+function readingsEvidence(
+  { pattern, parsed }: Read,
+  { index, lines, rest }: { index: LayoutIndex; lines: readonly Line[]; rest: 'unknown' | 'passed' },
+): PlainEvidence {
+  if (parsed.readings.length > mostReadings) {
+    const log = openLogImport(index, pattern, { name: 'Pasted lines', rest });
+    for (const { text } of lines) log.push(bytesOfText(`${text}\n`));
+    return log.finish();
+  }
   return {
     kind: 'readings',
-    lines: parsed.readings.slice(0, mostReadings).map(({ reading }) => reading),
+    lines: parsed.readings.map(({ reading }) => reading),
     unit: pattern.unit,
     shows: pattern.shows,
     rest,
@@ -161,14 +176,14 @@ function distinctTakes(ways: readonly Read[]): string[] {
 }
 
 /** One way as it is; several that remain as `either`. */
-function evidenceOf(ways: readonly Read[], rest: 'unknown' | 'passed'): Evidence | null {
+function evidenceOf(ways: readonly Read[], of: Parameters<typeof readingsEvidence>[1]): Evidence | null {
   const held = ways.filter(({ parsed }) => parsed.readings.length > 0);
   if (held.length === 0) return null;
-  if (held.length === 1) return readingsEvidence(held[0]!, rest);
+  if (held.length === 1) return readingsEvidence(held[0]!, of);
   const takes = distinctTakes(held);
   return {
     kind: 'either',
-    ways: held.map((way, at) => ({ takes: takes[at]!, evidence: readingsEvidence(way, rest) })),
+    ways: held.map((way, at) => ({ takes: takes[at]!, evidence: readingsEvidence(way, of) })),
   };
 }
 
@@ -202,7 +217,7 @@ export function eitherReadings(index: LayoutIndex, text: string, patterns: reado
     const key = meaning(map, way);
     return !seen.has(key) && seen.add(key);
   });
-  return evidenceOf(distinct.slice(0, 8), saysRestPassed(text) ? 'passed' : 'unknown');
+  return evidenceOf(distinct.slice(0, 8), { index, lines, rest: saysRestPassed(text) ? 'passed' : 'unknown' });
 }
 
 function rivalsOf(
@@ -235,7 +250,9 @@ function notesOf(
   }
   if (rest === 'passed') notes.push('The text says that the rest passed.');
   if (parsed.readings.length > mostReadings)
-    notes.push(`Only the first ${mostReadings} readings are taken; open the text as a log for all of them.`);
+    notes.push(
+      `${parsed.readings.length} readings are more than are kept one by one; they are drawn together as a log.`,
+    );
   return notes;
 }
 
@@ -276,7 +293,7 @@ export function parseReadings(
   const rest = saysRestPassed(text) ? 'passed' : 'unknown';
   const rivals = best.parsed.readings.length === 0 ? [] : rivalsOf(map, lines, { candidates, best });
   return {
-    evidence: evidenceOf([best, ...rivals], rest),
+    evidence: evidenceOf([best, ...rivals], { index, lines, rest }),
     lines: lines.length,
     unread: best.parsed.unread,
     pattern,
