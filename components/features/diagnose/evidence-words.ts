@@ -1,6 +1,6 @@
-import { lanesWords, type BitIndex, type LayoutIndex } from '@/lib';
+import { lanesWords, pictureWords, type BitIndex, type LayoutIndex } from '@/lib';
 import { addressWords, listWords, sentenceCase } from '@/lib/layout/words';
-import type { Change, Evidence, LaneName, LogEvidence, PlainEvidence, Reading, Readings, Run } from '@/shared';
+import type { Change, Evidence, LaneName, LogEvidence, Picture, PlainEvidence, Reading, Readings, Run } from '@/shared';
 import type { Bench } from './bench';
 import { counted } from './logs/log-words';
 import { signWords } from './sign-words';
@@ -49,11 +49,7 @@ function plainWords(seen: PlainEvidence, { index, formatName }: Bench): Evidence
     case 'log':
       return { text: seen.name, note: logNote(seen), code: false };
     case 'picture':
-      return {
-        text: seen.marks.length === 1 ? 'One mark on the picture' : `${seen.marks.length} marks on the picture`,
-        note: seen.rest === 'right' ? 'the rest of it is right' : 'the rest of it was not looked at',
-        code: false,
-      };
+      return { ...pictureEvidence(index, seen), code: false };
     case 'sign':
       return {
         text: `${signWords[seen.sign].label}${seen.socket === undefined ? '' : `: ${seen.socket}`}`,
@@ -71,6 +67,15 @@ function plainWords(seen: PlainEvidence, { index, formatName }: Bench): Evidence
       };
     }
   }
+}
+
+function pictureEvidence(
+  { document: { screenMap } }: LayoutIndex,
+  seen: Picture,
+): Pick<EvidenceWords, 'text' | 'note'> {
+  if (screenMap === undefined) return { text: 'Marks on a picture', note: 'this board has no screen map' };
+  const { text, note } = pictureWords(screenMap, seen);
+  return { text: sentenceCase(text), note };
 }
 
 function doubtWords(doubts: Extract<Evidence, { kind: 'code' }>['doubts'] = []): string {
