@@ -44,7 +44,7 @@ const leads = 0.5;
 /** Members of a group hold together this share of the probability; none is far below the first. */
 const groupHolds = 0.95;
 const mostMembers = 24;
-const leastBesideFirst = 0.2;
+const leastBesideFirst = 0.25;
 
 /** The words for a probability. `capped` where the evidence cannot prove more, such as a fault that went away. */
 export function sureWords(probability: number, { capped }: { capped: boolean }): Diagnosis['sure'] {
@@ -121,6 +121,9 @@ function onePlace({ suspects }: Weighed, place: Place): string {
   return `Pull ${place.socket} first.`;
 }
 
+/** A look at what was just handled costs so little that it comes first from here on. */
+const worthALook = 0.3;
+
 /** A new failure right after chips were handled: the handling itself is looked at first. */
 function fittingVerdict({ suspects, findings, lastRun }: Weighed): Verdict | null {
   const fitted = suspects.flatMap((suspect) => {
@@ -135,7 +138,7 @@ function fittingVerdict({ suspects, findings, lastRun }: Weighed): Verdict | nul
     1,
     sum(fitted, (each) => each.probability),
   );
-  if (total < leads || lastRun === null || findings.runs[lastRun]?.failing.size === 0) return null;
+  if (total < worthALook || lastRun === null || findings.runs[lastRun]?.failing.size === 0) return null;
   const sockets = fitted.map((each) => each.socket);
   return {
     outcome: 'place',

@@ -101,6 +101,12 @@ function fromBitField(context: FormatContext, match: Match, { convention }: Sett
   return { failing: [{ bit, reads: 'unknown' }], shown: null, at: start };
 }
 
+function valueOf({ ones }: Word): number {
+  let value = 0;
+  for (const bit of ones) if (bit < 40) value += 2 ** bit;
+  return value;
+}
+
 function differing(written: Word, read: Word): number[] {
   return read.shows.filter((bit) => written.shows.includes(bit) && written.ones.has(bit) !== read.ones.has(bit));
 }
@@ -128,8 +134,12 @@ function fromWords(context: FormatContext, match: Match, setting: Setting): Fail
   }
   if (read === null || written === null) return null;
   const failing = differing(written, read);
-  if (failing.length === 0) return { reason: 'What was read is what was written: nothing failed here.', at: read.at };
+  // A word that read what was written is no failure, but it tells a test of both values from one of one value.
+  if (failing.length === 0 && told === null) {
+    return { reason: 'What was read is what was written: nothing failed here.', at: read.at };
+  }
   return {
+    ...(told === null ? {} : { values: { written: valueOf(told), read: valueOf(read) } }),
     failing: failing.map((bit) => ({ bit, reads: readsOf(bit, written, read) })),
     shown: read.shows,
     at: read.at,

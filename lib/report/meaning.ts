@@ -1,5 +1,6 @@
 import type { Lane } from '../brand';
 import type { Result } from '../result';
+import type { WordValues } from './outcome';
 
 /** What a code says of one lane. */
 export interface FailingLane {
@@ -15,6 +16,8 @@ export interface ReportReading {
   readonly passed: readonly Lane[];
   /** CPU address of the failing word, where the code has one and it is not shortened. */
   readonly address: number | null;
+  /** What was written and read, as words of the bank as far as bit 39; null where the code does not show both. */
+  readonly values: WordValues | null;
   /** Which conventions this reading takes: "counted from 1", "bit 0 is the highest". Empty where none is open. */
   readonly takes: readonly string[];
 }

@@ -9,6 +9,12 @@ export interface Refusal {
   readonly known?: boolean;
 }
 
+/** What was written and read. */
+export interface WordValues {
+  readonly written: number;
+  readonly read: number;
+}
+
 /** What one way to understand a code says, before it is asked what silence means. */
 export interface RawReading {
   readonly failing: readonly FailingLane[];
@@ -17,6 +23,8 @@ export interface RawReading {
   /** The code shows the bits of a word one by one, so nothing is said of others. */
   readonly showsWord: boolean;
   readonly address: number | null;
+  /** What was written and read, as words of the bank: bit n of the number is data bit n, as far as bit 39. */
+  readonly values: WordValues | null;
   readonly takes: readonly string[];
 }
 
@@ -32,5 +40,6 @@ export interface FailingBits {
   readonly failing: readonly { readonly bit: number; readonly reads: FailingLane['reads'] }[] | null;
   /** The bits that the code shows, right and wrong ones; null where it shows no word. */
   readonly shown: readonly number[] | null;
+  readonly values?: WordValues;
   readonly at: number;
 }

@@ -76,6 +76,7 @@ function finished({ silence }: Reader, { match, readings }: Understood): ReadRes
   const done = readings.map((reading): ReportReading => ({
     failing: reading.failing,
     passed: silence.passed(reading),
+    values: reading.values,
     address: reading.address,
     takes: reading.takes,
   }));

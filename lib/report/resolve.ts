@@ -121,6 +121,7 @@ function anyBitOf(context: FormatContext, site: Site, takes: readonly string[]):
     shown: [],
     showsWord: false,
     address: site.address,
+    values: null,
     takes: [...takes, index.laneWords(at)],
   }));
 }
@@ -141,13 +142,14 @@ function readingsAt(context: FormatContext, { site, convention }: Placing, bits:
   for (const { bit, reads } of bits.failing) failing.push({ lane: lane(base + bit), reads });
   failing.sort((a, b) => a.lane - b.lane);
   const shown = rightOnes(context, base, bits);
-  return [{ failing, shown, showsWord: bits.shown !== null, address: site.address, takes }];
+  const values = bits.values ?? null;
+  return [{ failing, shown, showsWord: bits.shown !== null, address: site.address, values, takes }];
 }
 
 function direct(lanes: readonly Lane[], convention: Convention): Resolved {
   const failing = lanes.map((bad): FailingLane => ({ lane: bad, reads: 'unknown' }));
   return {
-    readings: [{ failing, shown: [], showsWord: false, address: null, takes: convention.takes }],
+    readings: [{ failing, shown: [], showsWord: false, address: null, values: null, takes: convention.takes }],
     refusal: null,
   };
 }

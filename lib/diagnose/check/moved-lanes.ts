@@ -21,6 +21,18 @@ export function lanesOfSocket(index: LayoutIndex, socket: SocketIndex): readonly
   return known[socket] ?? [];
 }
 
+const perLine = new WeakMap<LayoutIndex, readonly (readonly Lane[])[]>();
+
+function lanesOfLine(index: LayoutIndex, line: number): readonly Lane[] {
+  let known = perLine.get(index);
+  if (!known) {
+    const lists: Lane[][] = Array.from({ length: index.lineCount }, () => []);
+    for (const lane of index.lanes) lists[index.lineOfLane[lane] as number]?.push(lane as Lane);
+    perLine.set(index, (known = lists));
+  }
+  return known[line] ?? [];
+}
+
 /** The lanes behind each data pin of a socket, in the order of the layout. */
 function lanesByPin(index: LayoutIndex, socket: SocketIndex): Map<number, Lane[]> {
   const pins = new Map<number, Lane[]>();
@@ -74,7 +86,7 @@ function linesMoved(index: LayoutIndex, lanes: readonly Lane[], { from, to }: Mo
     if (held.length === 0) continue;
     const banks = new Set(held.map((lane) => index.bankOf(lane)));
     const target = new Set((there.get(pin) ?? []).map((lane) => index.lineOfLane[lane]));
-    const onLine = ([...index.lanes] as Lane[]).filter((lane) => target.has(index.lineOfLane[lane]));
+    const onLine = [...target].flatMap((line) => (line === undefined ? [] : lanesOfLine(index, line)));
     const seen = onLine.filter((lane) => banks.has(index.bankOf(lane)));
     for (const lane of seen.length > 0 ? seen : onLine) moved.add(lane);
   }

@@ -63,7 +63,7 @@ export function rerun(of: Rerun, said: Said, handling: Handling): Candidate {
   const unharmed = (1 - priors.handlingHarms) ** handling.handled.length;
   for (const state of beliefs.states) {
     const { lanes, cured } = effectOf(of, state, handling);
-    const others = beliefs.failing.filter((lane) => !state.lanes.includes(lane));
+    const { others } = state;
     const showing = lanes.length === 0 ? 0 : (1 - cured) * (1 - state.kind.miss ** lanes.length);
     const weight = unharmed * state.share;
     add(together(lanes, others), { state, silent: false }, weight * showing);
@@ -115,6 +115,7 @@ function told(of: Rerun, reports: readonly Report[], handling: Handling): Candid
   return [...outcomes, { words: () => anythingElse, likelihood: left }];
 }
 
-function together(one: readonly Lane[], other: readonly Lane[]): Lane[] {
+function together(one: readonly Lane[], other: readonly Lane[]): readonly Lane[] {
+  if (other.length === 0) return one;
   return [...new Set([...one, ...other])].sort((a, b) => a - b);
 }

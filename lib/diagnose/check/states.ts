@@ -19,6 +19,8 @@ export interface State {
   readonly lanes: readonly Lane[];
   /** What it can spoil now, tested or not. */
   readonly reach: readonly Lane[];
+  /** What failed in the last run and is none of its lanes. */
+  readonly others: readonly Lane[];
 }
 
 /** Who is at fault, as far as a repair is concerned: a part, or null for what the model does not name. */
@@ -80,6 +82,8 @@ export function believe({ findings, lastRun, interpretations }: Weighed): Belief
   const answers: { part: Part | null; share: number }[] = [];
   const numberOf = new Map<Part, number>();
   const failing = runs[shown]?.failing ?? new Set<Lane>();
+  const last = lastRun === null ? undefined : runs[lastRun];
+  const failsNow = [...(last?.failing ?? [])].sort((a, b) => a - b);
   const states = kept.map(({ part, cause, kind, probability }): State => {
     const share = probability * scale;
     const answer = numberOf.get(part) ?? answers.push({ part, share: 0 }) - 1;
@@ -87,6 +91,7 @@ export function believe({ findings, lastRun, interpretations }: Weighed): Belief
     (answers[answer] as { share: number }).share += share;
     const reach = kind.scopes.at(-1)?.lanes ?? [];
     const showed = reach.filter((lane) => failing.has(lane));
+    const lanes = showed.length > 0 ? showed : reach;
     return {
       part,
       cause,
@@ -94,16 +99,16 @@ export function believe({ findings, lastRun, interpretations }: Weighed): Belief
       sort: sortOf(part, cause),
       answer,
       share,
-      lanes: showed.length > 0 ? showed : reach,
+      lanes,
       reach,
+      others: failsNow.filter((lane) => !lanes.includes(lane)),
     };
   });
-  const last = lastRun === null ? undefined : runs[lastRun];
   return {
     findings,
     states,
     answers: [...answers, { part: null, share: rest }],
-    failing: [...(last?.failing ?? [])],
+    failing: failsNow,
     passed: last?.passed ?? new Set<Lane>(),
     failed: [...failing],
   };

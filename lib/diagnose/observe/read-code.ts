@@ -114,10 +114,11 @@ function oneWord(
   reading: ReportReading,
   { address, oneWordOnly }: { address: number; oneWordOnly: boolean },
 ): Tally {
+  const { index } = where;
   const lanes = new Map<Lane, LaneSeen>();
   const reads = new Map(reading.failing.map((f) => [f.lane, f.reads]));
   for (const { lane, inChip, mask } of chipWords(where, [...reads.keys()], address)) {
-    const place = rowAndColumn(where.index, inChip);
+    const place = rowAndColumn(index, inChip);
     lanes.set(lane, {
       ...emptySeen(),
       readsOne: reads.get(lane) === 'one' ? 1 : 0,
@@ -134,9 +135,14 @@ function oneWord(
     });
   }
   for (const { lane, mask } of oneWordOnly ? chipWords(where, reading.passed, address) : []) {
-    if (!lanes.has(lane)) lanes.set(lane, { ...emptySeen(), rightOnes: 0.5, rightZeros: 0.5, rightSegments: mask });
+    if (lanes.has(lane)) continue;
+    // Where the values are not shown, one of the two was tried.
+    const one = reading.values ? Math.floor(reading.values.written / 2 ** (index.bitOf(lane) as number)) % 2 : 0;
+    lanes.set(lane, { ...emptySeen(), rightOnes: one, rightZeros: 1 - one, rightSegments: mask });
   }
-  return { lanes, values: [], whole: false, readings: 1 };
+  const bank = index.bankOf((reading.failing[0]?.lane ?? reading.passed[0]) as Lane);
+  const values = reading.values ? [{ bank, ...reading.values, count: 1 }] : [];
+  return { lanes, values, whole: false, readings: 1 };
 }
 
 function wordsOf(where: Where, reading: ReportReading) {

@@ -30,7 +30,7 @@ const two = (prior: number, spoils: number[][]): Kind[] => [
 ];
 
 /** `swaps[r]`: the sockets (numbered as their lanes) that change chips before run r. */
-function causesOf(swaps: (readonly [number, number] | null)[]): Cause[] {
+function causesOf(swaps: (readonly [number, number] | null)[], failed: ReadonlySet<number>): Cause[] {
   const at = swaps.reduce<number[][]>((runs, swap) => {
     const now = [...(runs.at(-1) ?? [0, 1, 2, 3])];
     if (swap) {
@@ -106,6 +106,8 @@ function causesOf(swaps: (readonly [number, number] | null)[]): Cause[] {
   for (let bit = 0; bit < bits; bit++) {
     causes.push({ part: `line ${bit}`, kinds: two(0.0015, everyRun(lanesOf((_, b) => b === bit))) });
   }
+  // Something outside the listed parts that spoils just one lane, in every run.
+  for (const lane of failed) causes.push({ part: `elsewhere ${lane}`, kinds: two(0.0008, everyRun([lane])) });
   causes.push({ part: 'short', kinds: two(0.0005, everyRun([0, 1, 2, 3])) });
   return causes;
 }
@@ -195,6 +197,9 @@ function expectSame(answer: Diagnosis, expected: Map<string, number>) {
   }
 }
 
+const failedIn = (runs: Seen[]) =>
+  new Set(runs.flatMap((run) => run.flatMap((each, lane) => (each === 'failed' ? [lane] : []))));
+
 const state = fc.constantFrom('failed' as const, 'passed' as const, 'untested' as const);
 const seenRun = fc.tuple(state, state, state, state).map((states): Seen => [...states]);
 const swap = fc.oneof(fc.constant(null), fc.constantFrom<readonly [number, number]>([0, 1], [0, 2], [1, 3], [2, 3]));
@@ -205,7 +210,7 @@ describe('the probabilities of an answer', () => {
       fc.property(
         seenRun.filter((run) => run.includes('failed')),
         (run) => {
-          expectSame(diagnose(index, runsOf([null], [run])), posteriorOf(causesOf([null]), [run]));
+          expectSame(diagnose(index, runsOf([null], [run])), posteriorOf(causesOf([null], failedIn([run])), [run]));
         },
       ),
       { seed: 11, numRuns: 300 },
@@ -220,7 +225,8 @@ describe('the probabilities of an answer', () => {
         swap,
         (first, second, changed) => {
           const swaps = [null, changed];
-          expectSame(diagnose(index, runsOf(swaps, [first, second])), posteriorOf(causesOf(swaps), [first, second]));
+          const seen = [first, second];
+          expectSame(diagnose(index, runsOf(swaps, seen)), posteriorOf(causesOf(swaps, failedIn(seen)), seen));
         },
       ),
       { seed: 12, numRuns: 100 },

@@ -19,7 +19,7 @@ function enumerate(model: NoisyOrModel): { evidence: number; marginals: number[]
     }
     let likelihood = weight;
     for (let o = 0; o < model.positives; o++) {
-      let quiet = 1 - model.leak;
+      let quiet = 1 - (typeof model.leak === 'number' ? model.leak : (model.leak[o] as number));
       model.variables.forEach((each, i) => {
         const state = each.states[chosen[i] as number];
         if (state?.touches.includes(o)) quiet *= state.miss;

@@ -70,7 +70,7 @@ export function weighedOf(
   const flat = weights.flat(2);
   const total = flat.reduce((a, b) => a + b, priors.leak ** failing.length);
   const kinds = weights.map((causes) => causes.map((each) => each.map((weight) => weight / total)));
-  const run = { failing: new Set(failing), passed: new Set(passed) };
+  const run = { failing: new Set(failing), passed: new Set(passed), values: [] };
   const sumOf = (p: number) => (kinds[p] ?? []).flat().reduce((a, b) => a + b, 0);
   const places = index.document.sockets
     .map(({ label }, s) => {
