@@ -151,6 +151,7 @@ describe.each(sizes)('the main job $name', (size) => {
       board,
       '/boards/wrayburn-gr-5-2b',
       '/learn/cautions',
+      '/parts?socket=dynamic-16k-1-three-rail&chip=dynamic-64k-1&family=static-1k-4',
       '/sign-in',
       '/sign-up',
       '/reset',

@@ -1,4 +1,5 @@
 import { useLocalSearchParams, useRouter } from 'expo-router';
+import { useRef } from 'react';
 import { View } from 'react-native';
 import { CautionNotice } from '@/components/features/cautions/caution-notice';
 import { makeStyles, useBreakpoint } from '@/components/theme';
@@ -28,25 +29,35 @@ export function PartsScreen() {
   const { link, change } = usePartsLink();
   const phone = useBreakpoint() === 'phone';
   const family = familyOf(link.family);
+  const details = useRef<View>(null);
+  const column = phone ? null : styles.column;
+  const showFamily = (id: string) => {
+    change({ family: id });
+    // Its pins lie far up the page from the table.
+    details.current?.focus();
+  };
+  const columns = useColumns(showFamily);
   return (
     <Page title="RAM chips" lead="What each family wants at its pins, and whether one fits where another was.">
       <View style={phone ? styles.stacked : styles.beside}>
-        <Panel title="Will this fit?" style={styles.column}>
+        <Panel title="Will this fit?" style={column}>
           <Fit link={link} change={change} />
         </Panel>
-        <Panel title="One family" style={styles.column}>
-          <SelectField
-            label="Family"
-            options={choices}
-            value={link.family}
-            onChange={(chosen) => change({ family: chosen })}
-          />
-          {family === null ? (
-            <Text tone="soft">Choose a family to see its pins.</Text>
-          ) : (
-            <FamilyDetails family={family} />
-          )}
-        </Panel>
+        <View ref={details} tabIndex={-1} style={column}>
+          <Panel title="One family">
+            <SelectField
+              label="Family"
+              options={choices}
+              value={link.family}
+              onChange={(chosen) => change({ family: chosen })}
+            />
+            {family === null ? (
+              <Text tone="soft">Choose a family to see its pins.</Text>
+            ) : (
+              <FamilyDetails family={family} />
+            )}
+          </Panel>
+        </View>
       </View>
       <Panel
         title="All families"
@@ -55,7 +66,7 @@ export function PartsScreen() {
         <Table
           caption="RAM chip families"
           hideCaption
-          columns={columnsFor((id) => change({ family: id }))}
+          columns={columns}
           rows={builtInFamilies}
           rowKey={({ id }) => id}
           isMarked={({ id }) => id === link.family}
@@ -82,13 +93,15 @@ function Fit({ link, change }: { link: PartsLink; change: (next: Partial<PartsLi
         value={link.chip}
         onChange={(chosen) => change({ chip: chosen })}
       />
-      <Button
-        kind="plain"
-        label="Turn round"
-        aria-label="Turn round: the chip’s socket, the socket’s chip"
-        disabled={link.socket === '' && link.chip === ''}
-        onPress={() => change({ socket: link.chip, chip: link.socket })}
-      />
+      <View style={styles.start}>
+        <Button
+          kind="plain"
+          label="Turn round"
+          aria-label="Turn round: the chip’s socket, the socket’s chip"
+          disabled={link.socket === '' && link.chip === ''}
+          onPress={() => change({ socket: link.chip, chip: link.socket })}
+        />
+      </View>
       {socket === null || chip === null ? (
         <Text tone="soft">Choose what the socket is wired for and the chip that you have.</Text>
       ) : (
@@ -99,25 +112,35 @@ function Fit({ link, change }: { link: PartsLink; change: (next: Partial<PartsLi
   );
 }
 
-function columnsFor(show: (id: string) => void): readonly Column<ChipFamily>[] {
+function useColumns(show: (id: string) => void): readonly Column<ChipFamily>[] {
+  const styles = useStyles();
   return [
     {
       key: 'name',
       header: 'Family',
-      share: 3,
-      cell: ({ id, name, alsoCalled }) => (
+      share: 4,
+      cell: ({ name, alsoCalled }) => (
         <View>
           <Text variant="strong">{name}</Text>
           <Text variant="mono">{alsoCalled.join(', ')}</Text>
-          <Button kind="plain" label="Its pins" aria-label={`Pins of ${name}`} onPress={() => show(id)} />
         </View>
       ),
     },
-    { key: 'organisation', header: 'Words × bits', cell: organisationWords, mono: true },
+    { key: 'organisation', header: 'Words × bits', cell: organisationWords, mono: true, share: 2 },
     { key: 'pins', header: 'Pins', cell: (family) => String(packageOf(family)) },
-    { key: 'supplies', header: 'Supplies', cell: supplyWords, share: 3 },
-    { key: 'refresh', header: 'Refresh', cell: refreshWords, share: 2 },
-    { key: 'grades', header: 'Usual speeds', cell: gradeWords, share: 2 },
+    { key: 'supplies', header: 'Supplies', cell: supplyWords, share: 4 },
+    { key: 'refresh', header: 'Refresh', cell: refreshWords, share: 3 },
+    { key: 'grades', header: 'Usual speeds', cell: gradeWords, share: 3 },
+    {
+      key: 'show',
+      header: 'Every pin',
+      share: 2,
+      cell: ({ id, name }) => (
+        <View style={styles.start}>
+          <Button kind="plain" label="Show" aria-label={`Show the pins of ${name}`} onPress={() => show(id)} />
+        </View>
+      ),
+    },
   ];
 }
 
@@ -137,4 +160,5 @@ const useStyles = makeStyles((t) => ({
   stacked: { gap: t.space.xl },
   column: { flexGrow: 1, flexShrink: 1, flexBasis: 0, minWidth: 0 },
   fit: { gap: t.space.md },
+  start: { alignItems: 'flex-start' },
 }));

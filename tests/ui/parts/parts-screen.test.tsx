@@ -42,6 +42,7 @@ test('every family is a line with its supplies, refresh and speeds', () => {
     '−5 V at pin 1, +12 V at pin 8, +5 V at pin 9, 0 V at pin 16',
     '128 rows in 2 ms',
     '150, 200, 250, 300 ns',
+    'Show',
   ]);
 });
 
@@ -86,8 +87,9 @@ test('packages that differ are not compared pin by pin', () => {
 
 test('the pins of a family lie as on the chip, and its source is named', async () => {
   const { user } = show();
-  await user.click(screen.getByRole('button', { name: 'Pins of 1K × 4 static' }));
+  await user.click(screen.getByRole('button', { name: 'Show the pins of 1K × 4 static' }));
   expect(address.params.family).toBe('static-1k-4');
+  expect(screen.getByRole('region', { name: 'One family' }).parentElement).toHaveFocus();
   const one = within(screen.getByRole('region', { name: 'One family' }));
   const rows = within(one.getByRole('table', { name: 'Pins from above, notch at the top' })).getAllByRole('row');
   expect(rows).toHaveLength(10);
