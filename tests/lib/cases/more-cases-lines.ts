@@ -89,7 +89,7 @@ export const lineCases: BenchCase[] = [
       outcome: ['shared'],
       top: ['shared:U32'],
       mustNotLead: ['shared:U33', 'shared:U30', ...chipsOfA],
-      sure: ['likely', 'strong', 'sure'],
+      sure: ['not sure', 'likely', 'strong', 'sure'],
       checks: [{ actions: ['probe', 'rails'] }, { actions: ['probe'], says: [/U32/] }],
     },
   },
