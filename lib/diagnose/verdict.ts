@@ -224,6 +224,12 @@ function groupVerdict(weighed: Weighed, shared: readonly Suspect[]): Verdict {
   ];
   const total = sum(candidates, (each) => each.share);
   const members = membersOf(candidates, total);
+  if (members.every((member) => shared.some((suspect) => suspect.id === member.id))) {
+    return sharedVerdict(
+      shared,
+      sum(shared, (suspect) => suspect.probability),
+    );
+  }
   const probability = Math.min(
     1,
     sum(members, (member) => member.share),
