@@ -1,5 +1,6 @@
 import { z } from 'zod';
 import { laneName } from './evidence';
+import { finding } from './signs';
 
 const probability = z.number().min(0).max(1);
 
@@ -138,7 +139,16 @@ export const nextCheck = z.strictObject({
   sockets: z.array(z.string()).describe('The sockets that it handles, in the order of the words; two for a swap.'),
   minutes: z.number().positive(),
   bits: z.number().min(0).describe('Expected information.'),
-  outcomes: z.array(z.strictObject({ sees: z.string(), means: z.string(), probability })),
+  outcomes: z.array(
+    z.strictObject({
+      sees: z.string(),
+      means: z.string(),
+      probability,
+      finding: finding
+        .optional()
+        .describe('What to enter as evidence where this is what was found, for checks made without a run of the test.'),
+    }),
+  ),
 });
 
 /** How failures lie inside a chip, or between lines. */

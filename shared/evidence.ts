@@ -4,7 +4,7 @@ import { bitNumber } from './layout/memory';
 import { address, label, slug, words } from './layout/primitives';
 import { picture } from './picture';
 import { log, readings } from './readings';
-import { alias, measurement, sign } from './signs';
+import { alias, finding, measurement, sign } from './signs';
 
 export const laneName = z.strictObject({ bank: label, bit: bitNumber });
 
@@ -43,7 +43,19 @@ const pass = z.strictObject({
   banks: z.array(label).max(limits.banks).optional().describe('The banks that passed. Left out: all.'),
 });
 
-const plain = z.discriminatedUnion('kind', [code, lanes, mask, pass, readings, log, picture, sign, measurement, alias]);
+const plain = z.discriminatedUnion('kind', [
+  code,
+  lanes,
+  mask,
+  pass,
+  readings,
+  log,
+  picture,
+  sign,
+  measurement,
+  alias,
+  finding,
+]);
 
 /** One thing that can be understood in several ways: octal or hexadecimal, five or six flashes, which byte came first. */
 const either = z.strictObject({
@@ -71,6 +83,7 @@ export const evidence = z.discriminatedUnion('kind', [
   sign,
   measurement,
   alias,
+  finding,
   either,
 ]);
 

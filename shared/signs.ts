@@ -39,6 +39,28 @@ export const alias = z.strictObject({
     .describe('The bits in which they do. Left out: all bits of the word.'),
 });
 
+/** What a check at the bench found, made without a run of the test. */
+export const findingChecks = [
+  'legs', // continuity to the legs of the chip in a socket: bad is a leg without contact
+  'joined', // two data lines against each other, power off: bad is joined
+  'output', // the output of a shared part on a scope: bad is missing or wrong
+  'pin', // the data pin of a chip on a scope: bad is no clean level
+  'stack', // a good chip laid on top: bad is that it got better, so the chip below is
+  'pull', // the chip taken out: bad is that the others came back, so it held them
+] as const;
+
+export const finding = z.strictObject({
+  kind: z.literal('finding'),
+  check: z.enum(findingChecks),
+  about: z
+    .string()
+    .min(1)
+    .max(80)
+    .describe('The part that was checked, by its id in the answer: position:U25, chip:U25, shared:U30, short:2-3.'),
+  found: z.enum(['bad', 'good']),
+});
+
+export type Finding = z.output<typeof finding>;
 export type SignKind = (typeof signKinds)[number];
 export type Sign = z.output<typeof sign>;
 export type Measurement = z.output<typeof measurement>;
