@@ -63,7 +63,7 @@ export {
   type SocketRate,
 } from './statistics/socket-rates';
 export { leastGroup, showGroups, type NamedGroup, type ShownGroups } from './statistics/small-groups';
-export { lanesOfMarks, type LanesOfMarks, type MarkedLane } from './screen/lanes-of-marks';
+export { lanesOfMarks } from './screen/lanes-of-marks';
 export {
   classifySyndrome,
   highestSyndrome,
@@ -74,7 +74,7 @@ export {
   type SyndromeMeaning,
 } from './ecc/code';
 export { pictureOfChip, type FailingPicture } from './screen/picture-of-chip';
-export { faultWords, markWords, pictureWords, placeOfMarkWords } from './screen/mark-words';
+export { markWords, pictureWords } from './screen/mark-words';
 export { colourChoices, colourName, fullColour } from './screen/colours';
 export { glassSize, markInMemory, markOnGlass } from './screen/turn';
 export { effectOf, type AddressSpan, type ShapeEffect } from './simulate/effect';

@@ -45,9 +45,21 @@ const noted = { missing: 1, lit: 2, wrong: 4 } as const;
 /**
  * The lanes that the marks of a picture show as failing, and those that it shows to be right. A lit dot is taken to
  * be a 1. A word counts once however often the screen repeats its line, and fails where one of its pixels is marked.
- * Takes time in proportion to the pixels of lines that differ, not to all pixels.
+ * Takes time in proportion to the pixels of lines that differ, not to all pixels. The same picture is read once: it
+ * must not be changed afterwards.
  */
 export function lanesOfMarks(index: LayoutIndex, picture: Picture): LanesOfMarks {
+  const before = read.get(picture);
+  if (before?.index === index) return before.lanes;
+  const lanes = readMarks(index, picture);
+  read.set(picture, { index, lanes });
+  return lanes;
+}
+
+/** A diagnosis is made anew at each thing that is added, the pictures before it stay the same. */
+const read = new WeakMap<Picture, { readonly index: LayoutIndex; readonly lanes: LanesOfMarks }>();
+
+function readMarks(index: LayoutIndex, picture: Picture): LanesOfMarks {
   const screen = screenOf(index);
   if (screen === null)
     return { failing: [], passed: [], problems: ['This board has no screen map to read a picture with.'] };

@@ -76,6 +76,7 @@ function linesThatFail(screen: Screen, at: number, wanted: Wanted): { columns: n
   const banks = new Set([...wanted.keys()].map((lane) => Math.floor(lane / screen.index.bitCount) as BankIndex));
   const found = new Map<string, { columns: number[]; lines: number[] }>();
   const wholeOf = new Map<PlaneLine['pattern'], number[]>();
+  const keyOf = new Map<readonly number[], string>();
   const whole = [...wanted.values()].every((spans) => spans.includes(everyWord));
   for (let line = 0; line < map.height; line++) {
     const here = lineOf(screen, plane, line);
@@ -83,7 +84,9 @@ function linesThatFail(screen: Screen, at: number, wanted: Wanted): { columns: n
     columns ??= columnsThatFail(screen, here, { wanted, banks });
     if (whole && here.shared) wholeOf.set(here.pattern, columns);
     if (columns.length === 0) continue;
-    const key = columns.join();
+    // The same list again needs no words of its own.
+    let key = keyOf.get(columns);
+    if (key === undefined) keyOf.set(columns, (key = columns.join()));
     const before = found.get(key);
     if (before === undefined) found.set(key, { columns, lines: [line] });
     else before.lines.push(line);

@@ -37,6 +37,8 @@ export interface ScreenPlane {
   readonly base: number;
   readonly cellOf: (place: WordPlace) => ScreenCell;
   readonly patterns: Map<string, LinePattern>;
+  /** Lines that were followed before and share their pattern, by number. */
+  readonly lines: (PlaneLine | undefined)[];
 }
 
 /** The screen of a layout made ready for look-up. Pixels are those of the memory, before the picture is turned. */
@@ -79,6 +81,7 @@ function prepare(index: LayoutIndex, map: ScreenMap): Screen {
       base: plane.base ?? map.base,
       cellOf: cellMaker({ index, map, plane, carried }),
       patterns: new Map(),
+      lines: [],
     })),
   };
 }
@@ -141,6 +144,14 @@ const mostKeptUnits = 1_000_000;
 
 /** What a line of a plane shows. Lines from 0 to below the height. */
 export function lineOf(screen: Screen, plane: ScreenPlane, line: number): PlaneLine {
+  const before = plane.lines[line];
+  if (before !== undefined) return before;
+  const followed = followLine(screen, plane, line);
+  if (followed.shared) plane.lines[line] = followed;
+  return followed;
+}
+
+function followLine(screen: Screen, plane: ScreenPlane, line: number): PlaneLine {
   const start = plane.base + screen.lineOffsets[line]!;
   const key = patternKey(screen, plane, start);
   if (key === null) return { pattern: patternAt(screen, plane, { start, firstWord: 0 }), firstWord: 0, shared: false };
