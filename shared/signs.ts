@@ -55,8 +55,10 @@ export const finding = z.strictObject({
   about: z
     .string()
     .min(1)
-    .max(80)
-    .describe('The part that was checked, by its id in the answer: position:U25, chip:U25, shared:U30, short:2-3.'),
+    .max(200)
+    .describe(
+      'The part that was checked, by its id in the answer: position:U25, chip:U25, shared:U30, short:2-3. Several with spaces between, where chips were taken out one after the other.',
+    ),
   found: z.enum(['bad', 'good']),
 });
 

@@ -76,7 +76,8 @@ function pinScopes({ index, scopes }: Builder, socket: SocketIndex): Map<number,
 
 function chipPart(builder: Builder, chip: Chip): Part {
   const { index, priors, scopes } = builder;
-  const share = chip.quality === 'known-good' ? priors.knownGoodShare : 1;
+  const history = chip.quality === 'found' ? (priors.chipFactor?.[chip.cameFrom] ?? 1) : 1;
+  const share = history * (chip.quality === 'known-good' ? priors.knownGoodShare : 1);
   /** A scope in each run by where the chip is then. */
   const moving = (at: (socket: SocketIndex) => Scope | null): Scope | readonly (Scope | null)[] => {
     if (chip.since === 0 && chip.socketInRun.every((socket) => socket === chip.cameFrom)) {

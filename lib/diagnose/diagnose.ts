@@ -40,7 +40,12 @@ export function diagnose(index: LayoutIndex, runs: readonly Run[], priors: Prior
   const observations = observe({ index, map: addressMapOf(index) }, runs, compiledFormats(index));
   const { interpretations, signs } = observations;
   const parts = listParts(index, timeline, { priors, hints: hintsOf(index, interpretations) });
-  const { posterior, best, signals, shares } = weighAll(parts, interpretations, { index, priors, signs });
+  const { posterior, best, signals, shares } = weighAll(parts, interpretations, {
+    index,
+    priors,
+    signs,
+    findings: observations.findings,
+  });
   const rails = observations.measurements.flatMap((each) => railReading(index, each) ?? []);
   const findings: Findings = {
     index,

@@ -1,4 +1,4 @@
-import type { Sign } from '@/shared';
+import type { Finding, Sign } from '@/shared';
 import type { LayoutIndex } from '../layout/layout-index';
 import type { Part } from './cause-types';
 import type { Interpretation } from './observe/observations';
@@ -21,15 +21,16 @@ export interface WeighedBy {
   readonly index: LayoutIndex;
   readonly priors: Priors;
   readonly signs: readonly Sign[];
+  readonly findings: readonly Finding[];
 }
 
 /** Weighs every way to understand the evidence, each as likely beforehand as the others, and mixes the answers. */
 export function weighAll(
   parts: readonly Part[],
   interpretations: readonly Interpretation[],
-  { index, priors, signs }: WeighedBy,
+  { index, priors, signs, findings }: WeighedBy,
 ): Mixture {
-  const told = interpretations.map((each) => new Signals(index, each.runs, signs));
+  const told = interpretations.map((each) => new Signals(index, each.runs, signs, findings));
   const answers = interpretations.map((each, i) => weigh(parts, each.runs, { priors, signals: told[i] as Signals }));
   const most = Math.max(...answers.map((answer) => answer.logEvidence));
   const weights = answers.map((answer) => (most === -Infinity ? 1 : Math.exp(answer.logEvidence - most)));

@@ -241,7 +241,9 @@ function passesOf(run: RunObservation, scope: Scope): Passes {
     const chips = scope.within?.get(lane);
     const right = chips === undefined ? undefined : run.rightSegments.get(lane);
     const segmentRight = right !== undefined && chips !== 0 && ((chips ?? 0) & right) === chips;
-    if (!run.passed.has(lane) && !segmentRight) continue;
+    // Where another chip on the line was right, the line itself is.
+    const lineRight = chips === undefined && run.failing.has(lane) && (run.rightSegments.get(lane) ?? 0) !== 0;
+    if (!run.passed.has(lane) && !segmentRight && !lineRight) continue;
     const own = run.tried.get(lane);
     if (own === undefined) whole++;
     else tried.push(own);

@@ -54,4 +54,10 @@ export const priors = {
   handlingHarms: 0.01,
 } as const;
 
-export type Priors = { readonly [K in keyof typeof priors]: number };
+export type Priors = { readonly [K in keyof typeof priors]: number } & {
+  /**
+   * How much likelier than the mean the chip first found in each socket is to be bad, by the board's failure history
+   * (`priorsFor`); 1 where nothing is known.
+   */
+  readonly chipFactor?: readonly number[];
+};

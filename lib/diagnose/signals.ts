@@ -1,4 +1,5 @@
-import type { Shape, SharedPart, Sign } from '@/shared';
+import type { Finding, Shape, SharedPart, Sign } from '@/shared';
+import { findingWeight } from './finding-weights';
 import type { Lane, SocketIndex } from '../brand';
 import type { LayoutIndex } from '../layout/layout-index';
 import { segmentsOf } from '../layout/segments';
@@ -37,11 +38,12 @@ export class Signals {
     private readonly index: LayoutIndex,
     private readonly runs: readonly RunObservation[],
     private readonly signs: readonly Sign[],
+    private readonly findings: readonly Finding[],
   ) {
     const readings = runs.some((run) => run.seen.size > 0 || run.aliased.size > 0 || run.values.length > 0);
     const telling = signs.filter((sign) => sign.sign !== 'dead');
     const picked = runs.some((run) => run.picked !== null);
-    this.silent = !readings && !picked && telling.length === 0;
+    this.silent = !readings && !picked && telling.length === 0 && findings.length === 0;
     this.signs = telling;
     this.pairs = readings ? linePairs(index, runs) : [];
     this.pairOf = new Map(this.pairs.map((pair) => [pair.lines.join('-'), pair]));
@@ -137,6 +139,7 @@ export class Signals {
       const here = socket === undefined ? null : part.socket === socket;
       product *= signWeight(sign.sign, { part, cause, kind, role: this.roleOf(part), here });
     }
+    for (const finding of this.findings) product *= findingWeight(finding, { part, cause });
     return product;
   }
 
@@ -146,6 +149,7 @@ export class Signals {
     const own = this.lanes[run]?.get(lane);
     let product = own ? shareOf('unknown', own.shapes) : 1;
     for (const sign of this.signs) product *= unknownWeights[sign.sign];
+    for (const finding of this.findings) product *= findingWeight(finding, null);
     return product;
   }
 

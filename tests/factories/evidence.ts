@@ -1,6 +1,6 @@
 import fc from 'fast-check';
 import { type LayoutDocument, type RunInput } from '@/shared';
-import { signKinds } from '@/shared/signs';
+import { findingChecks, signKinds } from '@/shared/signs';
 
 /** Runs that the schema allows for a board: names that it has and some that it has not, numbers within and beyond it. */
 export function runsFor(document: LayoutDocument): fc.Arbitrary<RunInput[]> {
@@ -91,7 +91,7 @@ export function runsFor(document: LayoutDocument): fc.Arbitrary<RunInput[]> {
           x: span,
           y: span,
           everyX: fc.integer({ min: 1, max: 64 }),
-          planes: fc.constant(['green']),
+          planes: fc.constant<string[]>(['green']),
         },
         { requiredKeys: ['x', 'y'] },
       ),
@@ -125,7 +125,17 @@ export function runsFor(document: LayoutDocument): fc.Arbitrary<RunInput[]> {
       { requiredKeys: ['kind', 'addresses'] },
     ),
   ] as const;
-  const plain = fc.oneof(code, readings, log, picture, ...others);
+  const finding = fc.record({
+    kind: fc.constant('finding' as const),
+    check: fc.constantFrom(...findingChecks),
+    about: fc.oneof(
+      socket.map((label) => `position:${label}`),
+      socket.map((label) => `chip:${label}`),
+      fc.constantFrom('short:0-1', 'unlisted:all', 'shared:U30', 'nothing at all'),
+    ),
+    found: fc.constantFrom('bad' as const, 'good' as const),
+  });
+  const plain = fc.oneof(finding, code, readings, log, picture, ...others);
   const either = fc.record({
     kind: fc.constant('either' as const),
     ways: fc.tuple(plain, plain).map(([one, other]) => [

@@ -1,5 +1,5 @@
 import { sum } from 'd3-array';
-import type { CheckAction, NextCheck } from '@/shared';
+import type { CheckAction, Finding, NextCheck } from '@/shared';
 import { expectedInformation, outcomeShares } from './information';
 import type { Beliefs, State } from './states';
 
@@ -7,6 +7,8 @@ import type { Beliefs, State } from './states';
 interface OutcomeWords {
   readonly sees: string;
   readonly means: string;
+  /** What to enter where this is found, for checks made without a run of the test. */
+  readonly finding?: Finding;
 }
 
 /** What a check can show. */
@@ -49,8 +51,8 @@ export function byAnswer({ states, answers }: Beliefs, given: (state: State | nu
 
 /** Weighs a check whose outcomes are told state by state. */
 export function weighSeen(beliefs: Beliefs, said: Said, seen: readonly Seen[]): Candidate {
-  const outcomes = seen.map(({ sees, means, given }) => ({
-    words: () => ({ sees, means }),
+  const outcomes = seen.map(({ sees, means, finding, given }) => ({
+    words: () => ({ sees, means, ...(finding ? { finding } : {}) }),
     likelihood: byAnswer(beliefs, given),
   }));
   return weighOutcomes(beliefs, said, outcomes);
@@ -87,5 +89,13 @@ export function asNextCheck(
       ...words(),
       probability: total > 0 ? Math.min(1, (shares[o] as number) / total) : 0,
     })),
+  };
+}
+
+/** What a check at the bench found of a part. */
+export function foundOf(check: Finding['check'], about: string): { bad: Finding; good: Finding } {
+  return {
+    bad: { kind: 'finding', check, about, found: 'bad' },
+    good: { kind: 'finding', check, about, found: 'good' },
   };
 }

@@ -1,4 +1,4 @@
-import type { NextCheck } from '@/shared';
+import type { NextCheck, Run } from '@/shared';
 import { wentAway } from '../verdict';
 import { asNextCheck } from './candidate';
 import { candidates, deskFor, ranked, type CheckInput } from './candidates';
@@ -46,7 +46,20 @@ export function nextChecks(input: CheckInput): NextCheck[] {
     .slice(0, mostListed + first.length)
     .map((candidate) => asNextCheck(beliefs, candidate))
     .filter((check) => first.every((each) => each.label !== check.label));
-  return followUp([...first, ...others].slice(0, mostListed));
+  return followUp(notMadeYet([...first, ...others], desk.runs).slice(0, mostListed));
+}
+
+/** Without the checks whose finding is known already. */
+function notMadeYet(checks: readonly NextCheck[], runs: readonly Run[]): NextCheck[] {
+  const made = new Set(
+    runs.flatMap((run) =>
+      run.evidence.flatMap((each) => (each.kind === 'finding' ? [`${each.check} ${each.about}`] : [])),
+    ),
+  );
+  if (made.size === 0) return [...checks];
+  const known = ({ outcomes }: NextCheck) =>
+    outcomes.some(({ finding }) => finding && made.has(`${finding.check} ${finding.about}`));
+  return checks.filter((check) => !known(check));
 }
 
 /** What the rules of the trade put before the score. */

@@ -1,6 +1,6 @@
 import type { SocketIndex } from '../../brand';
 import { labelOf } from '../timeline';
-import { weighSeen, type Candidate } from './candidate';
+import { foundOf, weighSeen, type Candidate } from './candidate';
 import { minutes } from './costs';
 import { effort, type Desk } from './desk';
 import { shows, type Row } from './likelihoods';
@@ -107,6 +107,7 @@ function stackCheck(desk: Desk, socket: SocketIndex): Candidate | null {
   if (own[0]?.sort === 'holder') return null;
   const label = labelOf(index, socket);
   const better = here(socket, shows.better, 0.02);
+  const found = foundOf('stack', own[0]?.part.id ?? `chip:${label}`);
   return weighSeen(
     beliefs,
     {
@@ -116,8 +117,13 @@ function stackCheck(desk: Desk, socket: SocketIndex): Candidate | null {
       minutes: minutes.stack,
     },
     [
-      { sees: 'better', means: `the chip in ${label} is bad`, given: better },
-      { sees: 'no change', means: 'clears nothing: a bad output may still win', given: not(better) },
+      { sees: 'better', means: `the chip in ${label} is bad`, given: better, finding: found.bad },
+      {
+        sees: 'no change',
+        means: 'clears nothing: a bad output may still win',
+        given: not(better),
+        finding: found.good,
+      },
     ],
   );
 }
@@ -127,12 +133,23 @@ export function measureCheck(desk: Desk, socket: SocketIndex): Candidate {
   const { beliefs, index } = desk;
   const label = labelOf(index, socket);
   const open = here(socket, shows.openLeg, 0.02);
+  const found = foundOf('legs', `position:${label}`);
   return weighSeen(
     beliefs,
     { action: 'measure', label: () => continuityWords(beliefs, socket), sockets: [label], minutes: minutes.measure },
     [
-      { sees: 'open at a leg', means: `the contact, its solder or the trace at ${label}`, given: open },
-      { sees: 'all joined', means: 'look further: the chip, the line, what drives it', given: not(open) },
+      {
+        sees: 'open at a leg',
+        means: `the contact, its solder or the trace at ${label}`,
+        given: open,
+        finding: found.bad,
+      },
+      {
+        sees: 'all joined',
+        means: 'look further: the chip, the line, what drives it',
+        given: not(open),
+        finding: found.good,
+      },
     ],
   );
 }
@@ -160,6 +177,8 @@ function pinCheck(desk: Desk, socket: SocketIndex): Candidate {
   const { beliefs, index } = desk;
   const label = labelOf(index, socket);
   const bad = here(socket, shows.badPin, shows.badPin.other);
+  const chip = beliefs.states.find(({ part }) => part.kind === 'chip' && part.socket === socket);
+  const found = foundOf('pin', chip?.part.id ?? `chip:${label}`);
   return weighSeen(
     beliefs,
     {
@@ -169,8 +188,13 @@ function pinCheck(desk: Desk, socket: SocketIndex): Candidate {
       minutes: minutes.probe,
     },
     [
-      { sees: 'no clean levels', means: `the chip in ${label}, or what drags its line`, given: bad },
-      { sees: 'like a good one', means: 'look at contacts and shared parts', given: not(bad) },
+      {
+        sees: 'no clean levels',
+        means: `the chip in ${label}, or what drags its line`,
+        given: bad,
+        finding: found.bad,
+      },
+      { sees: 'like a good one', means: 'look at contacts and shared parts', given: not(bad), finding: found.good },
     ],
   );
 }

@@ -3,7 +3,7 @@ import type { LayoutIndex } from '../../layout/layout-index';
 import { listWords } from '../../layout/words';
 import type { Part } from '../cause-types';
 import { labelOf } from '../timeline';
-import { asNextCheck, weighSeen, type Candidate } from './candidate';
+import { asNextCheck, foundOf, weighSeen, type Candidate } from './candidate';
 import { minutes, solderedFactor } from './costs';
 import { effort, type Desk } from './desk';
 import { largerFirst } from './information';
@@ -41,12 +41,23 @@ function partProbes(desk: Desk): Candidate[] {
       if (!state) return shows.draggedPart.other;
       return (state.part === part ? shows.badPart : shows.draggedPart)[state.sort];
     };
+    const found = foundOf('output', part?.id ?? '');
     return weighSeen(
       beliefs,
       { action: 'probe', label: `Scope the outputs of ${label}${channel}.`, sockets: [], minutes: minutes.probe },
       [
-        { sees: 'signal missing or wrong', means: `look at ${label}, and at what drags its outputs`, given: bad },
-        { sees: 'signal right', means: 'it is good: look at what it serves', given: (state) => 1 - bad(state) },
+        {
+          sees: 'signal missing or wrong',
+          means: `look at ${label}, and at what drags its outputs`,
+          given: bad,
+          finding: found.bad,
+        },
+        {
+          sees: 'signal right',
+          means: 'it is good: look at what it serves',
+          given: (state) => 1 - bad(state),
+          finding: found.good,
+        },
       ],
     );
   });
@@ -67,6 +78,7 @@ function shortChecks(desk: Desk): Candidate[] {
       state.part === leading.part ? shows.joined.short : shows.joined[state.sort === 'short' ? 'other' : state.sort],
     shows.joined.other,
   );
+  const found = foundOf('joined', leading.part.id);
   const measured = weighSeen(
     beliefs,
     {
@@ -80,8 +92,14 @@ function shortChecks(desk: Desk): Candidate[] {
         sees: 'joined',
         means: `a short between ${listWords(names)}: solder bridge, trace, or inside what drives them`,
         given: joined,
+        finding: found.bad,
       },
-      { sees: 'apart', means: 'not the lines: look at the chips', given: (state) => 1 - joined(state) },
+      {
+        sees: 'apart',
+        means: 'not the lines: look at the chips',
+        given: (state) => 1 - joined(state),
+        finding: found.good,
+      },
     ],
   );
   if (bits.length !== 2 || writtenApart(desk, bits)) return [measured];
@@ -140,6 +158,7 @@ function pullChecks(desk: Desk): Candidate[] {
   if (order.length < 2 || order.length > mostPulled || held < 0.05) return [];
   const sockets = order.map(([socket]) => socket);
   const labels = sockets.map((socket) => labelOf(index, socket));
+  const ids = sockets.map((socket) => holderIn(beliefs, socket));
   const strobe = beliefs.states.find(({ sort }) => sort === 'holder')?.cause.mode === 'holds-strobe';
   const what = strobe ? 'strobe' : 'line';
   // Pulled until one helps, or to the end.
@@ -163,11 +182,22 @@ function pullChecks(desk: Desk): Candidate[] {
           sees: `the others come back with ${labels[n]} out`,
           means: `the chip of ${labels[n]} holds the ${what}`,
           given: freed(socket),
+          finding: foundOf('pull', ids[n] ?? '').bad,
         })),
-        { sees: 'no change with any of them out', means: otherWords(desk), given: none },
+        {
+          sees: 'no change with any of them out',
+          means: otherWords(desk),
+          given: none,
+          finding: foundOf('pull', ids.join(' ')).good,
+        },
       ],
     ),
   ];
+}
+
+/** The id of the chip that lies in a socket. */
+function holderIn({ states }: Desk['beliefs'], socket: SocketIndex): string {
+  return states.find(({ sort, part }) => sort === 'holder' && part.socket === socket)?.part.id ?? '';
 }
 
 /** What is left when no chip holds the line. */

@@ -3,6 +3,7 @@ import type { Cause, Kind, Part } from '../cause-types';
 import type { Findings } from '../suspects';
 import type { Weighed } from '../verdict';
 import { largerFirst } from './information';
+import { sortOf } from '../sort-of';
 import type { Sort } from './likelihoods';
 
 /** One way in which what failed can have come about: a part in a mode, of one kind. */
@@ -135,29 +136,6 @@ function explaining({ parts, posterior, everFailing }: Findings, run: number): F
     ),
   );
   return found.sort((a, b) => largerFirst(a.probability, b.probability));
-}
-
-function sortOf(part: Part, cause: Cause): Sort {
-  switch (cause.mode) {
-    case 'holds-line':
-    case 'holds-strobe':
-    case 'holds-address':
-      return 'holder';
-    case 'channel':
-      return 'line';
-    case 'whole':
-      return 'shared';
-    case 'short':
-      return 'short';
-    case 'supply':
-      return 'supply';
-    case 'open':
-    case 'open-bit':
-    case 'fitting':
-      return 'contact';
-    default:
-      return part.kind === 'chip' ? 'chip' : 'other';
-  }
 }
 
 /** A place with what is believed of its chip and its contact, the likeliest first. */

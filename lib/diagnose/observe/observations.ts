@@ -1,4 +1,4 @@
-import type { Evidence, Measurement, ReadEvidence, Run, Sign } from '@/shared';
+import type { Evidence, Finding, Measurement, ReadEvidence, Run, Sign } from '@/shared';
 import type { Lane } from '../../brand';
 import type { LayoutIndex } from '../../layout/layout-index';
 import type { AddressMap } from '../../place/address';
@@ -10,7 +10,7 @@ import { observeRun } from './observe-run';
 import { emptyPiece, shownOf, type Piece, type Read, type Where } from './piece';
 import { readCode } from './read-code';
 import { readLanes, readMask, readPass } from './read-lanes';
-import { readAlias, readLog, readMeasurement, readPicture, readReadings, readSign } from './read-readings';
+import { readAlias, readFinding, readLog, readMeasurement, readPicture, readReadings, readSign } from './read-readings';
 
 /** What one run showed of each lane that was tested in it. */
 export interface RunObservation {
@@ -66,6 +66,7 @@ export interface Observations {
   readonly notes: readonly string[];
   readonly signs: readonly (Sign & { readonly run: number })[];
   readonly measurements: readonly (Measurement & { readonly run: number })[];
+  readonly findings: readonly Finding[];
 }
 
 /** More ways to understand all the evidence together than this are not followed. */
@@ -114,6 +115,7 @@ export function observe(
     notes: [...notes, ...runs.flatMap((_, r) => twoStops(ofRun(r), r))],
     signs: pieces.flatMap(({ run, sign }) => (sign ? [{ ...sign, run }] : [])),
     measurements: pieces.flatMap(({ run, measurement }) => (measurement ? [{ ...measurement, run }] : [])),
+    findings: pieces.flatMap(({ finding }) => (finding ? [finding] : [])),
   };
 }
 
@@ -139,6 +141,8 @@ function readPiece(where: Where, evidence: Evidence): Read {
       return readSign(where, evidence);
     case 'measurement':
       return readMeasurement(where, evidence);
+    case 'finding':
+      return readFinding(where, evidence);
     case 'either':
       return readEither(where, evidence);
   }

@@ -1,4 +1,4 @@
-import type { Measurement, ReadEvidence, Sign } from '@/shared';
+import type { Finding, Measurement, ReadEvidence, Sign } from '@/shared';
 import type { Lane } from '../../brand';
 import type { LayoutIndex } from '../../layout/layout-index';
 import type { AddressMap } from '../../place/address';
@@ -30,6 +30,7 @@ export interface Piece {
   readonly passesOutright: boolean;
   readonly sign: Sign | null;
   readonly measurement: Measurement | null;
+  readonly finding: Finding | null;
 }
 
 export type Read = { piece: Piece; shown: ReadEvidence } | { piece: null; shown: ReadEvidence };
@@ -57,6 +58,7 @@ export function emptyPiece(where: Where): Piece {
     passesOutright: false,
     sign: null,
     measurement: null,
+    finding: null,
   };
 }
 

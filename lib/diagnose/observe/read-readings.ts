@@ -224,3 +224,23 @@ export function readMeasurement(where: Where, evidence: Of<'measurement'>): Read
   }
   return { piece: { ...emptyPiece(where), measurement: evidence }, shown: shownOf(where, text) };
 }
+
+const findingWords = {
+  legs: ['a leg is open', 'all legs are joined'],
+  joined: ['joined', 'apart'],
+  output: ['signal missing or wrong', 'signal right'],
+  pin: ['no clean level', 'like a good one'],
+  stack: ['better with a good chip on top', 'no change with a good chip on top'],
+  pull: ['the others come back with it out', 'no change with it out'],
+} as const;
+
+/** What a check at the bench found. */
+export function readFinding(where: Where, evidence: Of<'finding'>): Read {
+  const [bad, good] = findingWords[evidence.check];
+  const about = evidence.about
+    .split(' ')
+    .map((id) => id.replace(/^(position|chip|shared|unlisted):/, ''))
+    .join(', ');
+  const text = `${about}: ${evidence.found === 'bad' ? bad : good}`;
+  return { piece: { ...emptyPiece(where), finding: evidence }, shown: shownOf(where, text) };
+}
