@@ -8,6 +8,7 @@ const parts = {
   shared: ['singles.ts', 'shared'],
   reports: ['reports.ts'],
   reference: ['reference.ts'],
+  search: ['search.ts'],
   follow: ['follow.ts'],
 };
 const atOnce = 2;

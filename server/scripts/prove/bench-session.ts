@@ -1,4 +1,4 @@
-import { allLanes, chipFaults, diagnose, priors, type PossibleFault, type Random, type SimulatedBench } from '@/lib';
+import { allLanes, diagnose, simulatedReadings, type Random, type TestResult } from '@/lib';
 import type { Change, Diagnosis, NextCheck, Run } from '@/shared';
 import type { DrawnCase } from './draw';
 
@@ -65,9 +65,11 @@ export class Session {
         }
         return;
       case 'soak':
+        return this.soak();
+      case 'pattern':
+        return this.pattern();
       case 'read-again':
       case 'test-whole':
-      case 'pattern':
         return this.rerun([]);
       case 'measure':
       case 'probe':
@@ -77,6 +79,23 @@ export class Session {
       case 'feel':
         return this.nothingTold(check);
     }
+  }
+
+  /** Many passes: each is a run, and the first failure ends it. */
+  private soak(): void {
+    for (let pass = 0; pass < soakPasses; pass++) {
+      const result = this.run([]);
+      if (result.lanes.length > 0) break;
+    }
+    this.ask();
+  }
+
+  /** Values are written and read back by hand: what was written and read is told, word by word. */
+  private pattern(): void {
+    const { bench, board } = this.drawn;
+    const said = simulatedReadings(board.wiring, bench.run(), { most: patternLines });
+    this.runs.push({ changes: [], evidence: said.evidence, complete: said.complete });
+    this.ask();
   }
 
   /** A meter or a scope shows the part itself where it is looked at; a sound part is only left out from now on. */
@@ -96,8 +115,18 @@ export class Session {
   }
 
   private rerun(changes: Change[]): void {
+    this.run(changes);
+    this.ask();
+  }
+
+  private run(changes: Change[]): TestResult {
     const { bench, board } = this.drawn;
-    this.runs.push({ changes, ...allLanes(board.wiring, bench.run()) });
+    const result = bench.run();
+    this.runs.push({ changes, ...allLanes(board.wiring, result) });
+    return result;
+  }
+
+  private ask(): void {
     this.answer = this.diagnose();
     this.done.clear();
   }
@@ -111,6 +140,10 @@ export class Session {
   }
 }
 
+/** Passes of a soak that are told one by one. */
+const soakPasses = 8;
+/** Lines that are written and read back by hand. */
+const patternLines = 16;
 /** A meter or scope shows a fault where it is (common practice, no source). */
 const meterShows = 0.95;
 
@@ -129,9 +162,3 @@ export function suspectShare(answer: Diagnosis, { from, board }: Pick<DrawnCase,
     })
     .reduce((sum, { probability }) => sum + probability, 0);
 }
-
-/** A spare keeps a share of the priors of a chip. */
-export const spareOf = (bench: () => SimulatedBench, random: Random) => (chip: string, socket: string) =>
-  chipFaults(bench().wiring, priors, { chip, socket }).flatMap((fault: PossibleFault) =>
-    random() < fault.prior * priors.knownGoodShare ? [fault.draw(random, random() < priors.intermittentShare)] : [],
-  );

@@ -1,4 +1,5 @@
 import {
+  chipFaults,
   drawFault,
   priors,
   SimulatedBench,
@@ -27,9 +28,16 @@ export function drawShown(board: ProofBoard, possible: readonly PossibleFault[],
   for (let tried = 0; tried < 100; tried++) {
     const drawn = drawFault(possible, priors, random);
     if (drawn === null) return null;
-    const bench = new SimulatedBench(board.wiring, { faults: [drawn.fault], random, figures });
+    const spare = (chip: string, socket: string) => faultsOfSpare(board, { chip, socket }, random);
+    const bench = new SimulatedBench(board.wiring, { faults: [drawn.fault], random, figures, spare });
     const result = bench.run();
     if (result.lanes.length > 0) return { board, ...drawn, bench, result };
   }
   return null;
 }
+
+/** A spare that is thought to be good keeps a share of the priors of a chip. */
+const faultsOfSpare = ({ wiring }: ProofBoard, at: { chip: string; socket: string }, random: Random): BoardFault[] =>
+  chipFaults(wiring, priors, at).flatMap((fault) =>
+    random() < fault.prior * priors.knownGoodShare ? [fault.draw(random, random() < priors.intermittentShare)] : [],
+  );
