@@ -1,3 +1,4 @@
+import { useSyncExternalStore } from 'react';
 import { View } from 'react-native';
 import { makeStyles } from '@/components/theme';
 import { Button } from '@/components/ui/button';
@@ -6,9 +7,9 @@ import type { LayoutIndex } from '@/lib';
 import type { LogEvidence } from '@/shared';
 import { LogProgressPanel } from './log-progress';
 import { LogSourceChoice } from './log-source';
+import { logStoreOf } from './log-store';
 import { LogSummaryPanel } from './log-summary';
 import { PatternPanel } from './pattern-panel';
-import { useLogImport } from './use-log-import';
 
 type LogImportProps = {
   index: LayoutIndex;
@@ -21,7 +22,9 @@ type LogImportProps = {
 /** Imports the log of a memory test: choose it, see how its lines are read, read it in the background, look, use. */
 export function LogImport({ index, onEvidence, onClose }: LogImportProps) {
   const styles = useStyles();
-  const { stage, take, read, cancel, startOver } = useLogImport(index);
+  const store = logStoreOf(index);
+  const stage = useSyncExternalStore(store.subscribe, store.current, store.current);
+  const { take, read, cancel, startOver } = store;
   return (
     <View style={styles.all}>
       {stage.at === 'choose' ? <LogSourceChoice problem={stage.problem} onTake={take} /> : null}
@@ -39,7 +42,10 @@ export function LogImport({ index, onEvidence, onClose }: LogImportProps) {
         <LogSummaryPanel
           index={index}
           result={stage.result}
-          onUse={() => onEvidence(stage.result.evidence)}
+          onUse={() => {
+            onEvidence(stage.result.evidence);
+            startOver();
+          }}
           onAgain={cancel}
           onOther={startOver}
         />

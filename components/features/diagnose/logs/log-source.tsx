@@ -5,7 +5,7 @@ import { Button } from '@/components/ui/button';
 import { createDomElement } from '@/components/ui/dom-element';
 import { Field } from '@/components/ui/field';
 import { Text } from '@/components/ui/text';
-import type { LogSource } from './use-log-import';
+import type { LogSource } from './log-store';
 
 type LogSourceProps = {
   problem: string | null;

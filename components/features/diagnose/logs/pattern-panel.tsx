@@ -7,17 +7,18 @@ import { percentWords } from '@/components/ui/percent';
 import { Text } from '@/components/ui/text';
 import { parseReadings, patternWords, wordsOfLine, type LayoutIndex, type LinePattern } from '@/lib';
 import { sentenceCase } from '@/lib/layout/words';
+import type { Reading, Readings } from '@/shared';
 import { ChoiceList, type ChoiceLine } from '../entry/choice-list';
 import { readingPlaces } from '../entry/reading-places';
 import { ColumnChoice } from './column-choice';
 import { beginDraft, patternOfDraft } from './column-draft';
 import { byteWords } from './log-words';
-import type { LogImportModel, LogLook } from './use-log-import';
+import type { LogChoice, LogLook } from './log-store';
 
 type PatternPanelProps = {
   index: LayoutIndex;
   look: LogLook;
-  onRead: LogImportModel['read'];
+  onRead: (choice: LogChoice) => void;
   onOther: () => void;
 };
 
@@ -95,12 +96,18 @@ function typicalLine(sample: readonly string[]): string | null {
   return sample.find((line) => numbers(line) > 1) ?? sample[0] ?? null;
 }
 
+/** Readings with those first that say more than that all is right. */
+function failingFirst(readings: Readings): Readings {
+  const fails = ({ mask, written, read }: Reading) => (mask === undefined ? written !== read : mask !== 0);
+  return { ...readings, lines: [...readings.lines].sort((a, b) => Number(fails(b)) - Number(fails(a))) };
+}
+
 /** What the first lines mean on this board, so that a wrong pattern is seen before the log is read. */
 function Shown({ index, sample, pattern }: { index: LayoutIndex; sample: readonly string[]; pattern: LinePattern }) {
   const styles = useStyles();
   const parsed = useMemo(() => parseReadings(index, sample.join('\n'), { pattern }), [index, sample, pattern]);
   const { evidence, unread } = parsed;
-  const places = evidence?.kind === 'readings' ? readingPlaces(index, evidence, mostShown) : [];
+  const places = evidence?.kind === 'readings' ? readingPlaces(index, failingFirst(evidence), mostShown) : [];
   return (
     <View role="list" aria-label="What its first lines mean" style={styles.lines}>
       {places.map(({ text, means, wrong }, at) => (

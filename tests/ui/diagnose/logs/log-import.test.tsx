@@ -28,19 +28,19 @@ beforeAll(() => {
   });
 });
 
-const index = buildLayoutIndex(buildLayout({ banks: 2 }));
 const hex = (value: number, digits: number) => value.toString(16).toUpperCase().padStart(digits, '0');
 const lines = (count: number) =>
   Array.from({ length: count }, (_, n) => `${hex(0x1000 + 2 * n, 5)} W 00 R 20\n`).join('');
 
-function show() {
+/** A board of its own: an import outlives the page that shows it. */
+function show(index = buildLayoutIndex(buildLayout({ banks: 2 }))) {
   const onEvidence = jest.fn<undefined, [LogEvidence]>();
   const onClose = jest.fn();
   const view = renderPage(<LogImport index={index} onEvidence={onEvidence} onClose={onClose} />);
   const choose = (text: string | Uint8Array, name = 'night.log') =>
     view.user.upload(screen.getByLabelText('Log as a file'), new File([text as BlobPart], name));
   const press = (name: string | RegExp) => view.user.click(screen.getByRole('button', { name }));
-  return { ...view, onEvidence, onClose, choose, press };
+  return { ...view, index, onEvidence, onClose, choose, press };
 }
 
 it('leads a log file through its pattern and its summary to one piece of evidence', async () => {
@@ -177,6 +177,22 @@ describe('with a worker', () => {
     expect(screen.getByRole('button', { name: 'Read the log' })).toBeInTheDocument();
     act(() => fake.onmessage?.({ data: { kind: 'progress', progress } }));
     expect(screen.queryByRole('progressbar')).not.toBeInTheDocument();
+  });
+
+  it('goes on while the page is built anew, as when a phone is turned', async () => {
+    const { fake, unmount, index } = await begun();
+    unmount();
+    expect(fake.terminated).toBe(false);
+    show(index);
+    act(() => fake.onmessage?.({ data: { kind: 'progress', progress } }));
+    expect(screen.getByRole('progressbar')).toHaveAttribute('aria-valuenow', '50');
+    expect(fake.terminated).toBe(false);
+  });
+
+  it('is stopped where nobody looks at it any more', async () => {
+    const { fake, unmount } = await begun();
+    unmount();
+    await waitFor(() => expect(fake.terminated).toBe(true), { timeout: 5000 });
   });
 
   it('says why it failed, and goes on without the worker where its file could not be loaded', async () => {
