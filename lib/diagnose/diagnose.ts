@@ -10,7 +10,7 @@ import { weighAll } from './mixture';
 import { nextChecks } from './check/next-checks';
 import { exactWithin } from './noisy-or';
 import { observe, type RunObservation } from './observe/observations';
-import type { Posterior } from './posterior';
+import { probabilityOf, type Posterior } from './posterior';
 import { priors as defaultPriors, type Priors } from './priors';
 import { openQuestions } from './questions';
 import { railReading, type RailReading } from './rails';
@@ -135,6 +135,9 @@ function findLast<T>(list: readonly T[], wanted: (item: T) => boolean): number |
   return null;
 }
 
+/** Less than this of a cause does not decide whether a lane is explained. */
+const worthCounting = 1e-5;
+
 /** Where several interpretations remain, the causes of the likeliest hold only its share. */
 function unexplainedLanes({ parts, posterior, runs }: Findings, enough: number): Lane[] {
   const explained = new Map<Lane, number>();
@@ -143,10 +146,10 @@ function unexplainedLanes({ parts, posterior, runs }: Findings, enough: number):
     part.causes.forEach((cause, c) =>
       cause.kinds.forEach((kind, k) => {
         const own = posterior.kinds[p]?.[c]?.[k] ?? 0;
-        if (own < 1e-6) return;
-        for (const lane of new Set(kind.scopes.flatMap((scope) => scope?.lanes ?? []))) {
-          if (wanted.has(lane)) explained.set(lane, (explained.get(lane) ?? 0) + own);
-        }
+        if (own < worthCounting) return;
+        const touched = new Set<Lane>();
+        for (const scope of kind.scopes) for (const lane of scope?.lanes ?? []) if (wanted.has(lane)) touched.add(lane);
+        for (const lane of touched) explained.set(lane, (explained.get(lane) ?? 0) + own);
       }),
     ),
   );
@@ -180,7 +183,8 @@ function pairsOf({ parts, posterior }: Findings, { suspects }: Weighed): Diagnos
 }
 
 function bothOf(posterior: Posterior, one: number, other: number): number {
-  const either = posterior.anyOf(new Set([one, other]));
-  const both = posterior.anyOf(new Set([one])) + posterior.anyOf(new Set([other])) - either;
+  const single = [probabilityOf(posterior, one), probabilityOf(posterior, other)] as const;
+  if (Math.min(...single) < pairFrom) return 0;
+  const both = single[0] + single[1] - posterior.anyOf(new Set([one, other]));
   return Math.min(1, Math.max(0, both));
 }
