@@ -212,7 +212,8 @@ describe('drawn faults', () => {
         if (!drawn) continue;
         tried++;
         const one = new SimulatedBench(own, { faults: [{ ...drawn.fault, intermittent: false }], random });
-        const { lanes } = one.run();
+        // A single cell that changes at each look may read right throughout one pass.
+        const lanes = upTo(6).flatMap(() => one.run().lanes);
         const beyond = lanes.filter((lane) => !drawn.from.lanes.includes(lane));
         expect({ kind, fault: drawn.fault, beyond, shown: lanes.length > 0 }).toEqual({
           kind,
