@@ -22,7 +22,7 @@ import { followChips, type Timeline } from './timeline';
 import { decide, laneNames, openMeaning, type Weighed } from './verdict';
 
 /** A failing lane of which the model's causes explain less than this is told as unexplained. */
-const explainedFrom = 0.5;
+const explainedFrom = 0.3;
 /** Two parts are told as a pair where both are needed with at least this probability. */
 const pairFrom = 0.3;
 

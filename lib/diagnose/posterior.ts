@@ -161,13 +161,14 @@ class Evidence {
       const touches = this.once(failing.flat());
       const first = this.runs.findIndex((run) => run.failing.has(lane));
       const factor = signals.silent ? 1 : signals.unknown(first, lane);
+      const prior = priors.elsewhere / signals.pinsBehind(lane);
       const state = (share: number, miss: number) => ({
-        weight: priors.elsewhere * share * allMissed(all, miss, () => 'unknown') * factor,
+        weight: prior * share * allMissed(all, miss, () => 'unknown') * factor,
         touches,
         miss,
       });
       return {
-        absent: 1 - priors.elsewhere,
+        absent: 1 - prior,
         states: [
           state(1 - priors.intermittentShare, 1 - priors.detectionHard),
           state(priors.intermittentShare, 1 - priors.detectionIntermittent),

@@ -38,7 +38,7 @@ export const priors = {
   addressLine: 0.0008,
   /** A lane that reads bad though no cause of the model is there. */
   leak: 0.001,
-  /** Something else that spoils just this lane, in every run: wiring, gating, a trace beyond the position. */
+  /** Something else that spoils just one lane, in every run: wiring, gating, a trace beyond the position. Divided among the data pins of the chip. */
   elsewhere: 0.0008,
   /** A chip whose socket feeds its pins wrongly is taken for destroyed. */
   wrongPart: 0.95,

@@ -153,6 +153,13 @@ export class Signals {
     return product;
   }
 
+  /** Data pins of the chip that holds a lane: what goes wrong beside a chip is divided among them. */
+  pinsBehind(lane: Lane): number {
+    const socket = this.index.laneSockets[this.index.laneSocketStart[lane] as number];
+    const holds = socket === undefined ? [] : (this.index.document.sockets[socket]?.holds ?? []);
+    return Math.max(1, new Set(holds.map(({ pin }) => pin)).size);
+  }
+
   private roleOf(part: Part): SharedPart['role'] | null {
     return part.sharedPart === null ? null : (this.roles.get(part.sharedPart) ?? null);
   }

@@ -65,7 +65,11 @@ export function channelsOf(index: LayoutIndex, part: SharedPart): readonly Chann
   const served = servedLanes(index, part);
   if (kind === 'address-bit') {
     // A lost address bit spoils words of every lane that the part serves.
-    return (part.serves.addressBits ?? []).map((bit) => ({ name: `address bit ${bit}`, addressBit: bit, lanes: served }));
+    return (part.serves.addressBits ?? []).map((bit) => ({
+      name: `address bit ${bit}`,
+      addressBit: bit,
+      lanes: served,
+    }));
   }
   const groups = new Map<number, Lane[]>();
   for (const at of served) {

@@ -2,6 +2,7 @@ import type { LayoutIndex } from '../layout/layout-index';
 import { type AddressMap, buildAddressMap } from '../place/address';
 import { placeValue } from '../place/place-value';
 import { ColumnReader } from './column-reader';
+import { type FormatHint, formatHints } from './format-hints';
 import { type ColumnPattern, type LinePattern, type LogNotation } from './line-pattern';
 import { type LineReader, marks, outcomes, slots } from './line-reader';
 import { type LineShape, shapesOf } from './line-shapes';
@@ -30,6 +31,8 @@ const weights = {
   passedOver: 0.4,
   /** A further column that is the exclusive-or of the two values in every line. */
   exclusiveOr: 4,
+  /** A report format of the board words all the lines and says the same of their numbers. */
+  ownFormat: 40,
 } as const;
 
 /** What a sample of lines showed under one pattern. */
@@ -52,6 +55,7 @@ interface Sample {
 }
 
 interface Setting {
+  readonly hints: readonly FormatHint[];
   readonly map: AddressMap;
   readonly lines: readonly Uint8Array[];
 }
@@ -227,7 +231,20 @@ function scoreOf(
     score *= 0.2 + 0.8 * ratio(addresses.size, read);
     if (writtens.size > reads.size) score *= 0.6;
   }
+  const hint = hintFor(setting.hints, pattern);
+  if (hint !== undefined) score *= 1 + weights.ownFormat * hint.share;
   return { score: score * unitWeight(setting.map, pattern, sample), sample };
+}
+
+function hintFor(hints: readonly FormatHint[], pattern: ColumnPattern): FormatHint | undefined {
+  return hints.find(
+    ({ numbers }) =>
+      numbers !== null &&
+      numbers.notation === pattern.notation &&
+      numbers.values === pattern.values &&
+      numbers.unit === pattern.unit &&
+      numbers.shows === pattern.shows,
+  );
 }
 
 /** Whether the addresses count words: then they need not be multiples of the addresses of a word. */
@@ -260,7 +277,7 @@ function patternsOf(shape: LineShape, map: AddressMap): ColumnPattern[] {
   );
 }
 
-function reasonOf({ read, lines, placed, fits }: Sample, shape: LineShape): string {
+function reasonOf({ read, lines, placed, fits }: Sample, shape: LineShape, hint: FormatHint | undefined): string {
   const told = {
     words: 'The words of the line say what is what',
     heading: 'The heading says what is what',
@@ -268,7 +285,8 @@ function reasonOf({ read, lines, placed, fits }: Sample, shape: LineShape): stri
     'other order': 'Nothing in the line says what is what; this is not the usual order',
   }[shape.told];
   const count = (n: number) => (n === read ? 'all' : `${n}`);
-  return `${told}. ${read} of ${lines} lines read, ${count(placed)} of them inside the board's memory, ${count(fits)} with values that fit it.`;
+  const own = hint === undefined ? '' : ` The numbers are those of this board's “${hint.name}”.`;
+  return `${told}.${own} ${read} of ${lines} lines read, ${count(placed)} of them inside the board's memory, ${count(fits)} with values that fit it.`;
 }
 
 const mostSample = 64;
@@ -282,14 +300,32 @@ function plausible(pattern: ColumnPattern, shape: LineShape, texts: readonly str
   return address.length > 0 && address.every((word) => word.length >= 3);
 }
 
+/** Formats that columns cannot express. A board's own words count for more than any guess. */
+function formatPatterns(hints: readonly FormatHint[], scored: readonly Scored[]): Scored[] {
+  const best = Math.max(0.1, ...scored.map(({ score }) => score));
+  return hints
+    .filter(({ numbers }) => numbers === null)
+    .map(({ format, name, share }) => ({
+      pattern: { format, unit: 'address', shows: 'word', reason: `The lines are worded as this board's “${name}”.` },
+      score: best * 4 * share,
+      content: `format ${format}`,
+    }));
+}
+
 /**
  * Line patterns that a sample of lines can have on a board, the likeliest first; none where the lines hold no
- * readings. Their scores add up to 1. Looks at up to 64 lines that are not blank.
+ * readings. Their scores add up to 1. Looks at up to 64 lines that are not blank. `formats: 'too'`: report formats of
+ * the layout that columns cannot express are among them; they are for logs and not for typed readings.
  */
-export function findLinePatterns(index: LayoutIndex, lines: readonly string[]): LinePattern[] {
+export function findLinePatterns(
+  index: LayoutIndex,
+  lines: readonly string[],
+  options: { readonly formats?: 'too' | 'no' } = {},
+): LinePattern[] {
   const texts = lines.filter((line) => /[0-9A-Za-z]/.test(line)).slice(0, mostSample);
   const map = buildAddressMap(index);
-  const setting = { map, lines: texts.map((text) => bytesOfText(`${text}\n`)) };
+  const hints = formatHints(index, texts);
+  const setting = { map, hints, lines: texts.map((text) => bytesOfText(`${text}\n`)) };
   const registers = [...new Set(index.document.addressMap.windows.flatMap(({ register }) => register?.name ?? []))];
   const scored: Scored[] = [];
   for (const shape of shapesOf(texts, registers)) {
@@ -297,9 +333,10 @@ export function findLinePatterns(index: LayoutIndex, lines: readonly string[]): 
       if (!plausible(pattern, shape, texts)) continue;
       const { score, sample } = scoreOf(setting, texts, { shape, pattern });
       if (score > 0)
-        scored.push({ pattern: { ...pattern, reason: reasonOf(sample, shape) }, score, content: sample.content });
+        scored.push({ pattern: { ...pattern, reason: reasonOf(sample, shape, hintFor(hints, pattern)) }, score, content: sample.content });
     }
   }
+  if (options.formats === 'too') scored.push(...formatPatterns(hints, scored));
   scored.sort((a, b) => b.score - a.score);
   const seen = new Set<string>();
   const distinct = scored.filter(({ content }) => !seen.has(content) && seen.add(content));

@@ -4,6 +4,7 @@ import { bankWords } from '../layout/words';
 import { type AddressMap, buildAddressMap } from '../place/address';
 import { nearestWords } from '../place/nearest-window';
 import { AddressFinder } from './address-finder';
+import { FormatLines } from './format-lines';
 import { LaneCounts } from './lane-counts';
 import { LineFeed, longestLine } from './line-feed';
 import { type LinePattern, isFormatPattern } from './line-pattern';
@@ -62,7 +63,8 @@ class Import implements LogImport {
   readonly outsideLines: UnreadLine[] = [];
   readonly lanes: LaneCounts;
   readonly map: AddressMap;
-  private reader: LineReader;
+  private reader: LineReader | null;
+  private readonly format: FormatLines | null;
   private readonly finder: AddressFinder;
   private readonly pairs: PairTable;
   private readonly feed: LineFeed;
@@ -87,7 +89,8 @@ class Import implements LogImport {
     private readonly options: LogOptions,
   ) {
     this.map = buildAddressMap(index);
-    this.reader = openLineReader(index, pattern);
+    this.format = isFormatPattern(pattern) ? new FormatLines(this.map, pattern.format) : null;
+    this.reader = isFormatPattern(pattern) ? null : openLineReader(pattern);
     this.finder = new AddressFinder(this.map, pattern);
     this.lanes = new LaneCounts(index);
     this.pairs = new PairTable((pair) => this.lanes.spread(pair, this.finder.sites[pair.site]!));

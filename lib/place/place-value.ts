@@ -7,6 +7,8 @@ export interface ValuePlace {
   readonly bank: BankIndex;
   readonly word: number;
   readonly bits: readonly BitIndex[];
+  /** The same with the check bits, for values that are too wide without them. */
+  readonly withChecks: readonly BitIndex[];
   readonly register: WordPlace['register'];
 }
 
@@ -23,15 +25,11 @@ export interface ReadingForm {
  */
 export function placeValue(map: AddressMap, address: number, form: ReadingForm): ValuePlace[] {
   const places = form.unit === 'word' ? wordPlaces(map, address) : decodeAddress(map, address);
-  return places.map((place) => ({
-    bank: place.bank,
-    word: place.word,
-    bits:
-      form.unit === 'word' || form.shows === 'word'
-        ? dataBitsOf(map.index, place.bank)
-        : withoutChecks(map.index, place.bits),
-    register: place.register,
-  }));
+  const words = form.unit === 'word' || form.shows === 'word';
+  return places.map(({ bank, word, bits, register }) => {
+    const withChecks = words ? bitsOf(map.index, bank) : bits;
+    return { bank, word, bits: withoutChecks(map.index, withChecks), withChecks, register };
+  });
 }
 
 function wordPlaces(map: AddressMap, number: number): WordPlace[] {
@@ -44,19 +42,17 @@ function wordPlaces(map: AddressMap, number: number): WordPlace[] {
   return [];
 }
 
-const dataBits = new WeakMap<LayoutIndex, BitIndex[][]>();
+const everyBit = new WeakMap<LayoutIndex, BitIndex[][]>();
 
-function dataBitsOf(index: LayoutIndex, bank: BankIndex): readonly BitIndex[] {
-  let banks = dataBits.get(index);
+function bitsOf(index: LayoutIndex, bank: BankIndex): readonly BitIndex[] {
+  let banks = everyBit.get(index);
   if (!banks) {
-    banks = Array.from({ length: index.bankCount }, (_, b) => {
-      const all = Array.from({ length: index.bitCount }, (_, bit) => bit as BitIndex);
-      return withoutChecks(
-        index,
-        all.filter((bit) => index.laneExists[index.laneOf(bankIndex(b), bit)] === 1),
-      );
-    });
-    dataBits.set(index, banks);
+    banks = Array.from({ length: index.bankCount }, (_, b) =>
+      Array.from({ length: index.bitCount }, (_, bit) => bit as BitIndex).filter(
+        (bit) => index.laneExists[index.laneOf(bankIndex(b), bit)] === 1,
+      ),
+    );
+    everyBit.set(index, banks);
   }
   return banks[bank] ?? [];
 }

@@ -142,7 +142,7 @@ class TallyBuilder {
   }
 
   private placeOf(line: Reading, address: number): ValuePlace | null {
-    const places = placeValue(this.map, address, this.form);
+    const places = placeValue(this.map, address, this.form).map((place) => wideEnough(place, line));
     if (places.length < 2) return places[0] ?? null;
     const wanted = line.register ?? this.register;
     return (
@@ -291,6 +291,11 @@ export function emptySeen(): LaneSeen {
     failingSegments: 0,
     rightSegments: 0,
   };
+}
+
+/** A value that is too wide for the data bits shows the check bits as well. */
+function wideEnough(place: ValuePlace, { written = 0, read = 0, mask = 0 }: Reading): ValuePlace {
+  return Math.max(written, read, mask) < 2 ** place.bits.length ? place : { ...place, bits: place.withChecks };
 }
 
 function bitAt(value: number, bit: number): 0 | 1 {

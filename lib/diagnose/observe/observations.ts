@@ -32,23 +32,6 @@ export interface RunObservation {
   readonly whole: boolean;
 }
 
-/** A run of which only lanes are known. */
-export function plainRun(failing: ReadonlySet<Lane>, passed: ReadonlySet<Lane>): RunObservation {
-  const none = new Map<Lane, never>();
-  return {
-    failing,
-    passed,
-    seen: none,
-    tried: none,
-    picked: null,
-    failingSegments: none,
-    rightSegments: none,
-    values: [],
-    aliased: none,
-    whole: false,
-  };
-}
-
 /** One way to understand all the evidence together; several remain where a convention is unknown. */
 export interface Interpretation {
   readonly runs: readonly RunObservation[];
