@@ -135,7 +135,15 @@ export function unlistedFaults(
   return [...selects, ...lines];
 }
 
-/** Wiring of one lane beyond its position. */
+/** Data pins of the chip that carries a lane. */
+function pinsBehind(wiring: Wiring, lane: number): number {
+  const [port] = wiring.portsOfLane.get(lane) ?? [];
+  const position = port === undefined ? undefined : wiring.ports[port]?.position;
+  const ports = position === undefined ? [] : (wiring.portsOfPosition[position] ?? []);
+  return Math.max(1, new Set(ports.map((each) => wiring.ports[each]?.pin)).size);
+}
+
+/** Wiring of one lane beyond its position: what goes wrong beside a chip is divided among its data pins. */
 export function wiringFaults(wiring: Wiring, figures: FaultFigures): PossibleFault[] {
   return wiring.lanes.map((lane) => ({
     kind: 'wiring of one lane',
@@ -143,7 +151,7 @@ export function wiringFaults(wiring: Wiring, figures: FaultFigures): PossibleFau
     socket: null,
     sharedPart: null,
     lanes: [lane],
-    prior: figures.elsewhere,
+    prior: figures.elsewhere / pinsBehind(wiring, lane),
     draw: drawShared(wiring, { way: 'data', lanes: [lane], addressBits: [] }),
   }));
 }
