@@ -78,7 +78,7 @@ function exclusiveOr(values: Int32Array): boolean {
 
 const textOf = (values: Int32Array, slot: number) => values.subarray(slot, slot + 3).join();
 
-function sampleOf({ map, lines }: Setting, pattern: LinePattern, reader: LineReader): Sample {
+function sampleOf({ map, lines }: Setting, pattern: ColumnPattern, reader: LineReader): Sample {
   let [read, placed, fits, differ, wholeSteps, bits] = [0, 0, 0, 0, 0, 0];
   const addresses = new Set<number>();
   const writtens = new Set<string>();
@@ -333,7 +333,11 @@ export function findLinePatterns(
       if (!plausible(pattern, shape, texts)) continue;
       const { score, sample } = scoreOf(setting, texts, { shape, pattern });
       if (score > 0)
-        scored.push({ pattern: { ...pattern, reason: reasonOf(sample, shape, hintFor(hints, pattern)) }, score, content: sample.content });
+        scored.push({
+          pattern: { ...pattern, reason: reasonOf(sample, shape, hintFor(hints, pattern)) },
+          score,
+          content: sample.content,
+        });
     }
   }
   if (options.formats === 'too') scored.push(...formatPatterns(hints, scored));

@@ -1,6 +1,9 @@
 /** Longest line that is read; a longer one counts as unread. Keeps the memory of an import constant. */
 export const longestLine = 65_536;
 
+/** Why such a line is not read. */
+export const tooLongWords = () => `The line is longer than ${longestLine} characters.`;
+
 const [lineFeed, carriageReturn] = [10, 13];
 
 /** Takes bytes that end with a line's end: whole lines, one or many. */

@@ -45,7 +45,7 @@ const columnWords = (column: Column) => (typeof column === 'number' ? `word ${co
 
 /** The pattern in words, such as "address word 1, written after W, read after R, hexadecimal". */
 export function patternWords(pattern: LinePattern): string {
-  if (isFormatPattern(pattern)) return `as the report format ${pattern.format}`;
+  if (isFormatPattern(pattern)) return `as the board's own report “${pattern.format}”`;
   const { address, written, read, mask, register, notation, values = notation } = pattern;
   const fields = [
     `address ${columnWords(address)}`,

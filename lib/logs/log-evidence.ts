@@ -3,7 +3,7 @@ import type { BankIndex, Lane } from '../brand';
 import type { LayoutIndex } from '../layout/layout-index';
 import type { LineCount } from './chip-places';
 import type { LaneCounts } from './lane-counts';
-import type { LogCounts } from './log-import';
+import type { LogCounts } from './log-book';
 import type { UnreadLine } from './parse-readings';
 
 /** What a log showed of one lane, for a person. */

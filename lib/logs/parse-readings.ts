@@ -2,11 +2,17 @@ import type { Evidence, PlainEvidence, Reading } from '@/shared';
 import type { LayoutIndex } from '../layout/layout-index';
 import { type AddressMap, buildAddressMap } from '../place/address';
 import { placeValue } from '../place/place-value';
+import { ColumnReader } from './column-reader';
 import { findLinePatterns } from './find-pattern';
-import { type LinePattern, isFormatPattern, patternWords } from './line-pattern';
+import {
+  type ColumnPattern,
+  type FormatPattern,
+  type LinePattern,
+  isFormatPattern,
+  patternWords,
+} from './line-pattern';
 import { openLogImport } from './log-import';
 import { bytesOfText } from './numbers';
-import { openLineReader } from './open-line-reader';
 import { readLine } from './read-line';
 import { cleanParity, goesOn, saysAllPassed, saysRestPassed } from './statements';
 
@@ -47,14 +53,8 @@ interface Parsed {
   readonly unread: UnreadLine[];
 }
 
-const setting = (map: AddressMap, pattern: LinePattern) => ({
-  map,
-  pattern,
-  reader: openLineReader(map.index, pattern),
-});
-
-function readAll(map: AddressMap, lines: readonly Line[], pattern: LinePattern): Parsed {
-  const using = setting(map, pattern);
+function readAll(map: AddressMap, lines: readonly Line[], pattern: ColumnPattern): Parsed {
+  const using = { map, pattern, reader: new ColumnReader(pattern) };
   const parsed: Parsed = { readings: [], unread: [] };
   for (const { line, text } of lines) {
     const read = readLine(using, text);
@@ -65,25 +65,25 @@ function readAll(map: AddressMap, lines: readonly Line[], pattern: LinePattern):
   return parsed;
 }
 
-const notationOf = (pattern: LinePattern) => (isFormatPattern(pattern) ? null : pattern.notation);
+/** Patterns of columns that lines can have, the likeliest first. */
+function columnPatterns(index: LayoutIndex, lines: readonly Line[]): ColumnPattern[] {
+  const texts = lines.map(({ text }) => text);
+  return findLinePatterns(index, texts).filter((pattern): pattern is ColumnPattern => !isFormatPattern(pattern));
+}
 
 /** Whether lines of another order can stand among those of a pattern: their words say so, and the numbers are alike. */
-function standsBeside(other: LinePattern, pattern: LinePattern): boolean {
+function standsBeside(other: ColumnPattern, pattern: ColumnPattern): boolean {
   if (other.unit !== pattern.unit || other.shows !== pattern.shows) return false;
-  if (isFormatPattern(other) || isFormatPattern(pattern)) return isFormatPattern(other);
   const { written, read, mask } = other;
   const labelled = typeof mask === 'string' || (typeof written === 'string' && typeof read === 'string');
   return labelled && other.notation === pattern.notation && other.values === pattern.values;
 }
 
 /** Lines of another order than most: each group of them by a pattern of its own, in the notation and unit of the first. */
-function readOthers(map: AddressMap, parsed: Parsed, pattern: LinePattern): Parsed {
+function readOthers(map: AddressMap, parsed: Parsed, pattern: ColumnPattern): Parsed {
   let current = parsed;
   for (let round = 0; round < 4 && current.unread.length > 0; round++) {
-    const like = findLinePatterns(
-      map.index,
-      current.unread.map(({ text }) => text),
-    ).find((other) => standsBeside(other, pattern));
+    const like = columnPatterns(map.index, current.unread).find((other) => standsBeside(other, pattern));
     if (like === undefined) return current;
     const more = readAll(map, current.unread, like);
     if (more.readings.length === 0) return current;
@@ -97,12 +97,12 @@ function readOthers(map: AddressMap, parsed: Parsed, pattern: LinePattern): Pars
 }
 
 /** Remarks among the lines that say something of the memory as a whole, or go on from the line before. */
-function readRemarks(map: AddressMap, parsed: Parsed, pattern: LinePattern): Parsed {
+function readRemarks(map: AddressMap, parsed: Parsed, pattern: ColumnPattern): Parsed {
   const readings = [...parsed.readings];
   const unread: UnreadLine[] = [];
   for (const each of parsed.unread) {
     const before = readings.filter(({ line }) => line < each.line).at(-1);
-    const on = before === undefined ? null : goesOn(each.text, before.reading, notationOf(pattern) ?? 'hexadecimal');
+    const on = before === undefined ? null : goesOn(each.text, before.reading, pattern.notation);
     const parity = cleanParity(each.text);
     const clean = parity === null || pattern.unit === 'word' ? null : wholeSpan(map, parity);
     const reading = on ?? clean;
@@ -122,7 +122,7 @@ function wholeSpan({ windows }: AddressMap, parity: 0 | 1): Reading | null {
 }
 
 interface Read {
-  readonly pattern: LinePattern;
+  readonly pattern: ColumnPattern;
   readonly parsed: Parsed;
 }
 
@@ -162,9 +162,7 @@ function readingsEvidence(
 }
 
 /** In what the way of reading differs: "the log is octal". */
-function takesWords(pattern: LinePattern): string {
-  if (isFormatPattern(pattern)) return `the lines are ${pattern.format}`.slice(0, 80);
-  const { notation, values = notation, unit } = pattern;
+function takesWords({ notation, values = notation, unit }: ColumnPattern): string {
   const numbers = values === notation ? `the log is ${notation}` : `addresses ${notation}, values ${values}`;
   return unit === 'word' ? `${numbers} and counts words` : numbers;
 }
@@ -197,7 +195,7 @@ function linesOf(text: string): Line[] {
 function readBy(
   map: AddressMap,
   lines: readonly Line[],
-  { pattern, fixed }: { pattern: LinePattern; fixed: boolean },
+  { pattern, fixed }: { pattern: ColumnPattern; fixed: boolean },
 ): Read {
   const plain = readAll(map, lines, pattern);
   const all = fixed ? plain : readOthers(map, plain, pattern);
@@ -208,7 +206,7 @@ function readBy(
  * The evidence of a text under several patterns at once, for a technician who does not know which is true: `either`,
  * or plain readings where they come to the same. Null where no line can be read.
  */
-export function eitherReadings(index: LayoutIndex, text: string, patterns: readonly LinePattern[]): Evidence | null {
+export function eitherReadings(index: LayoutIndex, text: string, patterns: readonly ColumnPattern[]): Evidence | null {
   const map = buildAddressMap(index);
   const lines = linesOf(text);
   const ways = patterns.map((pattern) => readBy(map, lines, { pattern, fixed: true }));
@@ -223,7 +221,7 @@ export function eitherReadings(index: LayoutIndex, text: string, patterns: reado
 function rivalsOf(
   map: AddressMap,
   lines: readonly Line[],
-  { candidates, best }: { candidates: readonly LinePattern[]; best: Read },
+  { candidates, best }: { candidates: readonly ColumnPattern[]; best: Read },
 ): Read[] {
   const least = (candidates[0]!.score ?? 1) * rivalShare;
   const seen = new Set([meaning(map, best)]);
@@ -256,6 +254,22 @@ function notesOf(
   return notes;
 }
 
+/** Lines as a report format words them: drawn together as a log, which holds bits in any order. */
+function readByFormat(index: LayoutIndex, lines: readonly Line[], pattern: FormatPattern): ParsedReadings {
+  const log = openLogImport(index, pattern, { name: 'Pasted lines' });
+  for (const { text } of lines) log.push(bytesOfText(`${text}\n`));
+  const evidence = log.finish();
+  const unread = log.summary().unreadLines.map(({ line, reason }) => ({ ...lines[line - 1]!, reason }));
+  return {
+    evidence: evidence.readings === 0 ? null : evidence,
+    lines: lines.length,
+    unread,
+    pattern,
+    notes: [`Read ${patternWords(pattern)}.`],
+    candidates: [pattern],
+  };
+}
+
 /**
  * Reads typed or pasted lines of a memory test: addresses with what was written and read, or with the failing bits,
  * in any usual order, in the notation of the board or the one that fits. Lines that cannot be read come back with
@@ -266,15 +280,11 @@ export function parseReadings(
   text: string,
   options: { readonly pattern?: LinePattern } = {},
 ): ParsedReadings {
-  const map = buildAddressMap(index);
   const lines = linesOf(text);
-  const candidates =
-    options.pattern === undefined
-      ? findLinePatterns(
-          index,
-          lines.map((line) => line.text),
-        )
-      : [options.pattern];
+  if (options.pattern !== undefined && isFormatPattern(options.pattern))
+    return readByFormat(index, lines, options.pattern);
+  const map = buildAddressMap(index);
+  const candidates = options.pattern === undefined ? columnPatterns(index, lines) : [options.pattern];
   const pattern = candidates[0] ?? null;
   if (pattern === null) {
     const passed = lines.length > 0 && saysAllPassed(text);

@@ -3,13 +3,13 @@ import { addressWords, bankWords } from '../layout/words';
 import type { AddressMap } from '../place/address';
 import { nearestWords } from '../place/nearest-window';
 import { type ValuePlace, placeValue } from '../place/place-value';
-import { type LinePattern, isFormatPattern } from './line-pattern';
+import type { ColumnPattern } from './line-pattern';
 import { type LineReader, marks, outcomes, slots } from './line-reader';
 import { bytesOfText, numberOfLimbs } from './numbers';
 
 interface Using {
   readonly map: AddressMap;
-  readonly pattern: LinePattern;
+  readonly pattern: ColumnPattern;
   readonly reader: LineReader;
 }
 
@@ -21,7 +21,7 @@ const widest = 2 ** 40;
 const refuse = (reason: string): ReadLine => ({ ok: false, reason });
 
 function registerOf({ pattern, reader }: Using): Pick<Reading, 'register'> {
-  if (isFormatPattern(pattern) || pattern.register === undefined || (reader.has & marks.register) === 0) return {};
+  if (pattern.register === undefined || (reader.has & marks.register) === 0) return {};
   return { register: { name: pattern.register.name, value: reader.register } };
 }
 

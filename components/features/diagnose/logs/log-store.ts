@@ -71,7 +71,12 @@ export class LogStore {
     readSample(source.blob)
       .then((sample) => {
         if (turn !== this.turn) return;
-        this.become({ at: 'pattern', source, sample, candidates: findLinePatterns(this.index, sample) });
+        this.become({
+          at: 'pattern',
+          source,
+          sample,
+          candidates: findLinePatterns(this.index, sample, { formats: 'too' }),
+        });
       })
       .catch((error: unknown) => {
         if (turn === this.turn) this.become({ at: 'choose', problem: `${source.name}: ${failureWords(error)}` });

@@ -5,9 +5,17 @@ import { Button } from '@/components/ui/button';
 import { Chip } from '@/components/ui/chip';
 import { percentWords } from '@/components/ui/percent';
 import { Text } from '@/components/ui/text';
-import { parseReadings, patternWords, wordsOfLine, type LayoutIndex, type LinePattern } from '@/lib';
+import {
+  type BitIndex,
+  lanesWords,
+  parseReadings,
+  patternWords,
+  wordsOfLine,
+  type LayoutIndex,
+  type LinePattern,
+} from '@/lib';
 import { sentenceCase } from '@/lib/layout/words';
-import type { Reading, Readings } from '@/shared';
+import type { LogEvidence, Reading, Readings } from '@/shared';
 import { ChoiceList, type ChoiceLine } from '../entry/choice-list';
 import { readingPlaces } from '../entry/reading-places';
 import { ColumnChoice } from './column-choice';
@@ -96,6 +104,15 @@ function typicalLine(sample: readonly string[]): string | null {
   return sample.find((line) => numbers(line) > 1) ?? sample[0] ?? null;
 }
 
+/** "Bit 8 of bank 2": the lanes that fail in lines that are read by a format of the board. */
+function lanesOfLog(index: LayoutIndex, { lanes }: LogEvidence): string {
+  const failing = lanes.flatMap(({ bank, bit }) => {
+    const at = index.bankByName.get(bank);
+    return at === undefined ? [] : [index.laneOf(at, bit as BitIndex)];
+  });
+  return failing.length === 0 ? 'All of them read what was written.' : `${sentenceCase(lanesWords(index, failing))}.`;
+}
+
 /** Readings with those first that say more than that all is right. */
 function failingFirst(readings: Readings): Readings {
   const fails = ({ mask, written, read }: Reading) => (mask === undefined ? written !== read : mask !== 0);
@@ -110,6 +127,11 @@ function Shown({ index, sample, pattern }: { index: LayoutIndex; sample: readonl
   const places = evidence?.kind === 'readings' ? readingPlaces(index, failingFirst(evidence), mostShown) : [];
   return (
     <View role="list" aria-label="What its first lines mean" style={styles.lines}>
+      {evidence?.kind === 'log' ? (
+        <View role="listitem">
+          <Text variant="small">{lanesOfLog(index, evidence)}</Text>
+        </View>
+      ) : null}
       {places.map(({ text, means, wrong }, at) => (
         <View key={at} role="listitem" style={styles.line}>
           <Text variant="codeSmall">{text}</Text>
