@@ -2,6 +2,7 @@ import { lanesWords, pictureWords, type BitIndex, type LayoutIndex } from '@/lib
 import { addressWords, listWords, sentenceCase } from '@/lib/layout/words';
 import type { Change, Evidence, LaneName, LogEvidence, Picture, PlainEvidence, Reading, Readings, Run } from '@/shared';
 import type { Bench } from './bench';
+import { findingWords } from './finding-words';
 import { counted } from './logs/log-words';
 import { signWords } from './sign-words';
 import { voltWords } from './volt-words';
@@ -14,16 +15,17 @@ export interface EvidenceWords {
   readonly code: boolean;
 }
 
-/** Evidence in words. */
-export function evidenceWords(seen: Evidence, bench: Bench): EvidenceWords {
-  if (seen.kind !== 'either') return plainWords(seen, bench);
+/** Evidence in words. `runs`: those up to the one that it stands in, by which a chip that was moved is named. */
+export function evidenceWords(seen: Evidence, bench: Bench, runs: readonly Run[] = []): EvidenceWords {
+  if (seen.kind !== 'either') return plainWords(seen, bench, runs);
   const [first] = seen.ways;
   if (first === undefined) return { text: 'Nothing', note: '', code: false };
-  const words = plainWords(first.evidence, bench);
+  const words = plainWords(first.evidence, bench, runs);
   return { ...words, note: `${words.note}; either ${seen.ways.map(({ takes }) => takes).join(', or ')}` };
 }
 
-function plainWords(seen: PlainEvidence, { index, formatName }: Bench): EvidenceWords {
+function plainWords(seen: PlainEvidence, bench: Bench, runs: readonly Run[]): EvidenceWords {
+  const { index, formatName } = bench;
   switch (seen.kind) {
     case 'code': {
       const name = formatName(seen.format) ?? 'a format that this board does not have';
@@ -58,6 +60,8 @@ function plainWords(seen: PlainEvidence, { index, formatName }: Bench): Evidence
       };
     case 'measurement':
       return { text: `${voltWords(seen.volts)} at pin ${seen.pin} of ${seen.socket}`, note: 'measured', code: false };
+    case 'finding':
+      return { text: findingWords(seen, bench, runs), note: 'found at the bench', code: false };
     case 'alias': {
       const [one, other] = seen.addresses.map((each) => addressWords(index.document.addressMap, each));
       return {

@@ -14,7 +14,15 @@ import { answerMarks, chosenMarks, possibleMarks } from './marks';
 import { changesOf, chosenSockets, noChange, pickSocket, type ChangeDraft } from './runs/change-draft';
 import { readView, writeView } from './sketch-view-link';
 import type { Workspace } from './use-workspace';
-import { awaitsReport, beginRun, dropRun, putEvidence, setComplete } from './workspace-runs';
+import {
+  awaitsReport,
+  beginRun,
+  dropEvidence,
+  dropRun,
+  putEvidence,
+  setComplete,
+  type EvidencePlace,
+} from './workspace-runs';
 
 /** Everything that the columns of the workspace show and do. */
 export interface WorkspaceModel {
@@ -37,11 +45,13 @@ export interface WorkspaceModel {
   readonly begin: (changes: readonly Change[]) => void;
   /** Opens the entry of one kind of evidence, with what is known of it already. */
   readonly enter: (tab: string, text?: string) => void;
-  /** A check was made that changed this, and the board reported one of the outcomes that were foretold. */
+  /** A check was made that changed this, and one of the outcomes that were foretold was reported or found. */
   readonly saw: (changes: readonly Change[], outcome: NextCheck['outcomes'][number]) => void;
   /** The runs with an answer to an open question taken for true; null where it changes nothing. */
   readonly settled: (answer: string) => Run[] | null;
   readonly settleBy: (answer: string) => void;
+  /** Takes a piece of evidence out that has no entry in which it could be changed. */
+  readonly takeOut: (place: EvidencePlace) => void;
   readonly takeBack: (run: number) => void;
   readonly markWhole: (run: number, complete: boolean) => void;
 }
@@ -80,8 +90,10 @@ export function useWorkspaceModel(bench: Bench, workspace: Workspace): Workspace
     const seen = outcomeEvidence(bench, runs, outcome);
     // What is told in words cannot be entered by itself: the report is typed.
     if (seen.length === 0) return void begin(changes);
+    // What was found at the bench is of the board as it stands; a report is of a new run of the test.
+    const into = outcome.finding === undefined ? begun(runs, changes) : runs;
     takeOver(
-      seen.reduce((all, one) => putEvidence(all, one, null), begun(runs, changes)),
+      seen.reduce((all, one) => putEvidence(all, one, null), [...into]),
       `Entered: ${outcome.sees}.`,
     );
   };
@@ -122,6 +134,7 @@ export function useWorkspaceModel(bench: Bench, workspace: Workspace): Workspace
       if (next !== null) takeOver(next, `Taken for true: ${answer}.`);
     },
     enter: (tab, text = '') => workspace.goTo({ at: 'entry', place: null }, { tab, text }),
+    takeOut: (place) => takeOver(dropEvidence(runs, place), 'Taken out.'),
     takeBack: (run) => takeOver(dropRun(runs, run), `Run ${run + 1} was taken back.`),
     markWhole: (run, complete) => void commit(setComplete(runs, { run, complete }), step),
   };

@@ -172,11 +172,11 @@ function Checks({ model }: { model: WorkspaceModel }) {
   return (
     <NextChecks
       diagnosis={model.diagnosis}
-      onDone={(done, outcome) => {
+      onDone={(done) => {
         if ('enter' in done) model.enter(done.enter.tab, done.enter.text);
-        else if (outcome === undefined) model.begin(done.changes);
-        else saw(done.changes, outcome);
+        else model.begin(done.changes);
       }}
+      onSaw={saw}
       onOther={() => model.beginChange()}
     />
   );
@@ -223,6 +223,7 @@ function Runs({ model }: { model: WorkspaceModel }) {
         runs={workspace.runs}
         diagnosis={diagnosis}
         onEdit={(place) => workspace.goTo({ at: 'entry', place })}
+        onTakeOut={model.takeOut}
         onRemoveRun={model.takeBack}
         onComplete={model.markWhole}
       />

@@ -4,7 +4,7 @@ import { makeStyles } from '@/components/theme';
 import { Button } from '@/components/ui/button';
 import { Sheet } from '@/components/ui/sheet';
 import { Text } from '@/components/ui/text';
-import type { Diagnosis, NextCheck } from '@/shared';
+import type { Change, Diagnosis, NextCheck } from '@/shared';
 import { doneOf, type Done } from './done-of';
 import { OutcomeList } from './outcome-list';
 import { minutesWords, worthWords } from './worth-words';
@@ -13,14 +13,16 @@ type Outcome = NextCheck['outcomes'][number];
 
 type NextChecksProps = {
   diagnosis: Diagnosis;
-  /** The check was made. outcome: and this is what it showed. */
-  onDone: (done: Done, outcome?: Outcome) => void;
+  /** The check was made. */
+  onDone: (done: Done) => void;
+  /** A check was made that changed this, nothing where it only looked, and this is what it showed. */
+  onSaw: (changes: readonly Change[], outcome: Outcome) => void;
   /** Something else was done. */
   onOther: () => void;
 };
 
 /** The next check, what it costs, what the board will report in each case, and the way to say that it was made. */
-export function NextChecks({ diagnosis, onDone, onOther }: NextChecksProps) {
+export function NextChecks({ diagnosis, onDone, onSaw, onOther }: NextChecksProps) {
   const styles = useStyles();
   const [open, setOpen] = useState(false);
   const { nextChecks, outcome } = diagnosis;
@@ -31,7 +33,7 @@ export function NextChecks({ diagnosis, onDone, onOther }: NextChecksProps) {
       {shown.map((check, at) => (
         <Check
           key={`${check.action}${check.label}`}
-          {...{ check, onDone }}
+          {...{ check, onDone, onSaw }}
           first={at === 0}
           worth={worthWords(check, nextChecks)}
         />
@@ -50,13 +52,14 @@ export function NextChecks({ diagnosis, onDone, onOther }: NextChecksProps) {
   );
 }
 
-type CheckProps = Pick<NextChecksProps, 'onDone'> & { check: NextCheck; first: boolean; worth: string };
+type CheckProps = Pick<NextChecksProps, 'onDone' | 'onSaw'> & { check: NextCheck; first: boolean; worth: string };
 
-function Check({ check, first, worth, onDone }: CheckProps) {
+function Check({ check, first, worth, onDone, onSaw }: CheckProps) {
   const done = doneOf(check);
   // The first sentence says what to do; what follows explains it.
   const [what = '', rest = ''] = check.label.split(/(?<=\.) (.*)/s);
-  const changes = done !== null && 'changes' in done;
+  const changes = done !== null && 'changes' in done ? done.changes : null;
+  const finds = check.outcomes.some(({ finding }) => finding !== undefined);
   return (
     <Sheet kind={first ? 'boxed' : 'paper'} gap="sm" label={first ? 'Next check' : 'Another check'}>
       <View>
@@ -68,12 +71,16 @@ function Check({ check, first, worth, onDone }: CheckProps) {
         </Text>
       </View>
       {rest === '' ? null : <Text variant="small">{rest}</Text>}
-      {changes && check.outcomes.length > 0 ? (
+      {finds || (changes !== null && check.outcomes.length > 0) ? (
         <Text variant="small" tone="soft">
-          Done already? Tap what it reports.
+          {finds ? 'Done already? Tap what was found.' : 'Done already? Tap what it reports.'}
         </Text>
       ) : null}
-      <OutcomeList outcomes={check.outcomes} onSaw={changes ? (outcome) => onDone(done, outcome) : undefined} />
+      <OutcomeList
+        outcomes={check.outcomes}
+        onSaw={finds || changes !== null ? (outcome) => onSaw(changes ?? [], outcome) : undefined}
+        canSee={({ finding }) => changes !== null || finding !== undefined}
+      />
       {done === null ? null : (
         <Button kind={first ? 'primary' : 'secondary'} wide label={done.label} onPress={() => onDone(done)} />
       )}

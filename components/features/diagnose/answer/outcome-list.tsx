@@ -10,17 +10,23 @@ type OutcomeListProps = {
   outcomes: readonly Outcome[];
   /** This is what happened. Left out: the list is only to be read. */
   onSaw?: (outcome: Outcome) => void;
+  /** Whether there is a way to enter this one; the others are only to be read. Left out: all can be entered. */
+  canSee?: (outcome: Outcome) => boolean;
 };
 
-/** What the board may report after a check, what each case means, and how likely it is. */
-export function OutcomeList({ outcomes, onSaw }: OutcomeListProps) {
+/** What the board may report after a check, or what may be found in it, what each case means, and how likely it is. */
+export function OutcomeList({ outcomes, onSaw, canSee = () => true }: OutcomeListProps) {
   const styles = useStyles();
   if (outcomes.length === 0) return null;
   return (
-    <View role="list" aria-label="What the board may report" style={onSaw === undefined && styles.outcomes}>
+    <View
+      role="list"
+      aria-label={outcomes.some(({ finding }) => finding) ? 'What may be found' : 'What the board may report'}
+      style={onSaw === undefined && styles.outcomes}
+    >
       {outcomes.map((outcome) => (
         <View key={`${outcome.sees}${outcome.means}`} role="listitem">
-          {onSaw === undefined ? (
+          {onSaw === undefined || !canSee(outcome) ? (
             <View style={styles.outcome}>
               <Words outcome={outcome} />
             </View>

@@ -7,6 +7,7 @@ import {
   bitsTab,
   eitherTab,
   logTab,
+  otherTab,
   passTab,
   pictureTab,
   readingsTab,
@@ -50,6 +51,9 @@ export function draftOf(seen: Evidence, { index }: Bench): TypedDraft {
       const [one, other] = seen.addresses.map((each) => addressWords(index.document.addressMap, each));
       return of(aliasTab, writeAlias({ one: one ?? '', other: other ?? '', bits: seen.bits ?? null }));
     }
+    case 'finding':
+      // It has no entry of its own: it is taken out, or something else is put in its place.
+      return of(otherTab);
     case 'either':
       return of(eitherTab);
   }

@@ -13,7 +13,7 @@ const wholes = [
 ] as const;
 
 /** What of the run in hand is entered already, where a machine reports one failure after the other. */
-export function EnteredList({ model: { bench, workspace, entry } }: { model: WorkspaceModel }) {
+export function EnteredList({ model: { bench, workspace, entry, takeOut } }: { model: WorkspaceModel }) {
   const styles = useStyles();
   const { runs } = workspace;
   const at = runInHand(runs);
@@ -26,13 +26,15 @@ export function EnteredList({ model: { bench, workspace, entry } }: { model: Wor
       </Text>
       <View role="list" aria-label="Reports of this run" style={styles.row}>
         {seen.map((one, index) => {
-          const { text } = evidenceWords(one, bench);
+          const { text } = evidenceWords(one, bench, runs);
+          const place = { run: at, index };
+          const found = one.kind === 'finding';
           return (
             <View key={index} role="listitem">
               <Chip
                 label={text}
-                aria-label={`${text}, change`}
-                onPress={() => workspace.goTo({ at: 'entry', place: { run: at, index } })}
+                aria-label={`${text}, ${found ? 'take out' : 'change'}`}
+                onPress={() => (found ? takeOut(place) : workspace.goTo({ at: 'entry', place }))}
               />
             </View>
           );

@@ -2,7 +2,7 @@ import type { Evidence, PlainEvidence } from '@/shared';
 import { readField } from './link-text';
 import { aliasStatement, logStatement, readingsStatement } from './reading-statements';
 import { codeStatement, doubtedCode, lanesStatement, maskStatement, passStatement } from './report-statements';
-import { measurementStatement, pictureStatement, signStatement } from './seen-statements';
+import { findingStatement, measurementStatement, pictureStatement, signStatement } from './seen-statements';
 import { statement } from './statement';
 
 /**
@@ -39,6 +39,8 @@ function writePlain(seen: PlainEvidence): string {
       return measurementStatement.write(seen);
     case 'alias':
       return aliasStatement.write(seen);
+    case 'finding':
+      return findingStatement.write(seen);
   }
 }
 
@@ -54,6 +56,7 @@ const readers: Readonly<Record<string, (fields: readonly string[]) => unknown>> 
   g: signStatement.read,
   u: measurementStatement.read,
   a: aliasStatement.read,
+  b: findingStatement.read,
 };
 
 /** What a statement says was seen, before the schema has checked it; null for a letter of something else. */

@@ -1,6 +1,6 @@
-import type { Measurement, Picture, PictureMark, Sign } from '@/shared';
+import type { Finding, Measurement, Picture, PictureMark, Sign } from '@/shared';
 import { escapeField, readField } from './link-text';
-import { decimal, fromDecimal, whole, type Statement } from './statement';
+import { dashed, decimal, fromDecimal, whole, type Statement } from './statement';
 
 const looks = { missing: 'm', lit: 'l', wrong: 'w' } as const satisfies Record<PictureMark['looks'], string>;
 
@@ -69,4 +69,10 @@ export const measurementStatement: Statement<Measurement> = {
     pin: whole(pin),
     volts: fromDecimal(volts),
   }),
+};
+
+/** `b.legs.bad.position-U25`: what a check at the bench found; colons of the part's id are dashes. */
+export const findingStatement: Statement<Finding> = {
+  write: ({ check, found, about }) => ['b', check, found, about.split(':').map(escapeField).join('-')].join('.'),
+  read: ([check, found, about = '']) => ({ kind: 'finding', check, about: dashed(about).join(':'), found }),
 };

@@ -11,7 +11,7 @@ import { statement } from './statement';
  *   s, x, t      what was done: see change-statements.ts
  *   c, q, l, m, p            what the machine reported: see report-statements.ts
  *   r, f, a                  readings, a log, two addresses of one cell: see reading-statements.ts
- *   v, g, u                  the picture, a sign, a measured supply: see seen-statements.ts
+ *   v, g, u, b               the picture, a sign, a measured supply, what a check found: see seen-statements.ts
  *   e.takes.takes            several ways to understand one thing; the ways follow as statements
  *   k.1F03A9.night_2E_log    evidence too large for a link: it stays on the device, under this key
  */

@@ -7,7 +7,7 @@ import { percentWords } from '@/components/ui/percent';
 import { Text } from '@/components/ui/text';
 import { Wordmark } from '@/components/features/shell/wordmark';
 import { addressWords } from '@/lib/layout/words';
-import type { Diagnosis, Run } from '@/shared';
+import type { Diagnosis, Evidence, Run } from '@/shared';
 import { stated } from '../stated';
 import { leadingSuspects, suspectKind, suspectName } from '../answer/suspect-words';
 import type { Bench } from '../bench';
@@ -128,13 +128,15 @@ function Reported({ bench, runs, diagnosis }: Pick<PullSheetProps, 'bench' | 'ru
   return (
     <View>
       <Text variant="smallStrong" level={3}>
-        What it reported
+        {runs.some(({ evidence }) => evidence.some(({ kind }) => kind === 'finding'))
+          ? 'What it reported and what was found'
+          : 'What it reported'}
       </Text>
       {runs.map((run, at) => (
         <View key={at}>
           <Text variant="small">{runTitle(run, at)}</Text>
-          {run.evidence.slice(0, mostEvidence).map((seen, index) => {
-            const { text, note } = evidenceWords(seen, bench);
+          {printed(run).map(({ seen, index }) => {
+            const { text, note } = evidenceWords(seen, bench, runs.slice(0, at + 1));
             return (
               <View key={index}>
                 <Text variant="codeSmall">
@@ -158,6 +160,15 @@ function Reported({ bench, runs, diagnosis }: Pick<PullSheetProps, 'bench' | 'ru
       ))}
     </View>
   );
+}
+
+/** The evidence of a run that is printed: where it is too much, what was found at the bench before the rest. */
+function printed({ evidence }: Run): { seen: Evidence; index: number }[] {
+  const all = evidence.map((seen, index) => ({ seen, index }));
+  const found = all.filter(({ seen }) => seen.kind === 'finding');
+  const others = all.filter(({ seen }) => seen.kind !== 'finding');
+  const room = Math.max(1, mostEvidence - found.length);
+  return [...others.slice(0, room), ...found].slice(0, mostEvidence).sort((a, b) => a.index - b.index);
 }
 
 function Suspects({ diagnosis }: { diagnosis: Diagnosis }) {

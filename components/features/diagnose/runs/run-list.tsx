@@ -14,6 +14,8 @@ type RunListProps = {
   runs: readonly Run[];
   diagnosis: Diagnosis;
   onEdit: (place: EvidencePlace) => void;
+  /** Takes out what cannot be changed. */
+  onTakeOut: (place: EvidencePlace) => void;
   onRemoveRun: (run: number) => void;
   onComplete: (run: number, complete: boolean) => void;
 };
@@ -56,7 +58,7 @@ function OneRun({ run, at, bench, runs, diagnosis, ...act }: RunListProps & { ru
       </View>
       {waits ? <Text tone="soft">{last ? 'What does it report now?' : 'Nobody reported anything.'}</Text> : null}
       {run.evidence.map((seen, index) => {
-        const { text, note, code } = evidenceWords(seen, bench);
+        const { text, note, code } = evidenceWords(seen, bench, runs.slice(0, at + 1));
         const read = diagnosis.evidence.find((one) => one.run === at && one.index === index);
         const refused = read !== undefined && !read.ok ? read.reason : null;
         return (
@@ -73,12 +75,21 @@ function OneRun({ run, at, bench, runs, diagnosis, ...act }: RunListProps & { ru
                 </Text>
               )}
             </View>
-            <Button
-              kind="plain"
-              label="Change"
-              aria-label={`Change ${text}`}
-              onPress={() => act.onEdit({ run: at, index })}
-            />
+            {seen.kind === 'finding' ? (
+              <Button
+                kind="plain"
+                label="Take out"
+                aria-label={`Take out ${text}`}
+                onPress={() => act.onTakeOut({ run: at, index })}
+              />
+            ) : (
+              <Button
+                kind="plain"
+                label="Change"
+                aria-label={`Change ${text}`}
+                onPress={() => act.onEdit({ run: at, index })}
+              />
+            )}
           </View>
         );
       })}

@@ -135,15 +135,16 @@ describe('next checks', () => {
     const { user } = renderPage(
       <NextChecks
         diagnosis={answer({ nextChecks: [check({}), rails] })}
-        onDone={(...what) => done.push(what)}
+        onDone={(what) => done.push(what)}
+        onSaw={(...what) => done.push(what)}
         onOther={() => undefined}
       />,
     );
     expect(screen.getByText('8 min, tells most for its time')).toBeVisible();
     await user.click(screen.getByRole('button', { name: 'I saw C4: the chip is bad' }));
-    expect(done[0]).toMatchObject([{ changes: [{ kind: 'swap', sockets: ['U31', 'U30'] }] }, { sees: 'C4' }]);
+    expect(done[0]).toMatchObject([[{ kind: 'swap', sockets: ['U31', 'U30'] }], { sees: 'C4' }]);
     await user.click(screen.getByRole('button', { name: 'Other checks (1)' }));
     await user.click(screen.getByRole('button', { name: 'Enter the volts' }));
-    expect(done[1]).toMatchObject([{ enter: { tab: '~supply', text: 'U31\n\n' } }]);
+    expect(done[1]).toMatchObject({ enter: { tab: '~supply', text: 'U31\n\n' } });
   });
 });

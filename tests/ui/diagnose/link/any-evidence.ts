@@ -1,5 +1,5 @@
 import fc from 'fast-check';
-import { signKinds, type Evidence, type Run } from '@/shared';
+import { findingChecks, signKinds, type Evidence, type Run } from '@/shared';
 import { label as labelSchema, words as wordsSchema } from '@/shared/layout/primitives';
 
 const label = fc
@@ -114,6 +114,16 @@ export const evidenceOf = {
     socket: label,
     pin: fc.integer({ min: 1, max: 64 }),
     volts,
+  }),
+  finding: fc.record({
+    kind: fc.constant('finding' as const),
+    check: fc.constantFrom(...findingChecks),
+    about: fc.oneof(
+      label.map((name) => `position:${name}`),
+      fc.tuple(label, label).map(([one, other]) => `chip:${one} chip:${other}#2`),
+      fc.string({ unit: 'grapheme', minLength: 1, maxLength: 24 }),
+    ),
+    found: fc.constantFrom('bad' as const, 'good' as const),
   }),
   alias: fc.record({
     kind: fc.constant('alias' as const),

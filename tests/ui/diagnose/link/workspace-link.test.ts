@@ -66,6 +66,8 @@ describe('the link of a workspace', () => {
     ['g.grows-with-waiting', { kind: 'sign', sign: 'grows-with-waiting' }],
     ['u.U31.8.4-72', { kind: 'measurement', socket: 'U31', pin: 8, volts: 4.72 }],
     ['u.U31.1.n5-01', { kind: 'measurement', socket: 'U31', pin: 1, volts: -5.01 }],
+    ['b.legs.bad.position-U25', { kind: 'finding', check: 'legs', about: 'position:U25', found: 'bad' }],
+    ['b.joined.good.short-2_2D_3', { kind: 'finding', check: 'joined', about: 'short:2-3', found: 'good' }],
     ['a.1000-1400.3-5', { kind: 'alias', addresses: [0x1000, 0x1400], bits: [3, 5] }],
     [
       'v.r.mx0t7n32y0t191-red',
@@ -137,7 +139,7 @@ describe('the link of a workspace', () => {
       fc.property(fc.string({ unit: 'binary', maxLength: 200 }), (text) => {
         expect(() => readLink(text)).not.toThrow();
         expect(() => readLink(`1~c.${text}~l.some.${text}~m.A.${text}~x.${text}`)).not.toThrow();
-        for (const letter of 'qrfvguaek') {
+        for (const letter of 'qrfvguabek') {
           expect(() => readLink(`1~${letter}.${text}~${letter}.-.${text}~${letter}.${text}.${text}`)).not.toThrow();
         }
       }),
