@@ -40,7 +40,9 @@ function lastTelling(runs: readonly Run[]): PlainEvidence | undefined {
     .flatMap((run) => run.evidence)
     .map(plain)
     .filter((each) => each !== undefined)
-    .findLast((each) => each.kind !== 'pass' && each.kind !== 'sign' && each.kind !== 'measurement');
+    .findLast(
+      (each) => each.kind !== 'pass' && each.kind !== 'sign' && each.kind !== 'measurement' && each.kind !== 'finding',
+    );
 }
 
 function codeReporter(index: LayoutIndex, id: string, inWords: Reporter): Reporter {

@@ -8,6 +8,7 @@ import { decodeAddress } from '../../place/address';
 import { nearestWords } from '../../place/nearest-window';
 import { emptySeen, tallyOfLog, tallyReadings, type LaneSeen, type Tally } from '../../readings/tally';
 import { lanesOfMarks } from '../../screen/lanes-of-marks';
+import { askedAbout } from '../finding-weights';
 import { emptyPiece, laneName, noChoice, refuse, shownOf, type Choice, type Read, type Where } from './piece';
 
 type Of<K extends Evidence['kind']> = Extract<Evidence, { kind: K }>;
@@ -237,8 +238,7 @@ const findingWords = {
 /** What a check at the bench found. */
 export function readFinding(where: Where, evidence: Of<'finding'>): Read {
   const [bad, good] = findingWords[evidence.check];
-  const about = evidence.about
-    .split(' ')
+  const about = askedAbout(evidence.about)
     .map((id) => id.replace(/^(position|chip|shared|unlisted):/, ''))
     .join(', ');
   const text = `${about}: ${evidence.found === 'bad' ? bad : good}`;
