@@ -74,10 +74,15 @@ function pinScopes({ index, scopes }: Builder, socket: SocketIndex): Map<number,
   return new Map([...lanes].map(([pin, list]) => [pin, scopes.inSocket(socket, list)]));
 }
 
+/** What of the chip priors holds for this chip: by the history of its socket, or because it is known to be good. */
+function shareOf(priors: Priors, { quality, cameFrom }: Chip): number {
+  if (quality === 'found') return priors.chipFactor?.[cameFrom] ?? 1;
+  return quality === 'known-good' ? priors.knownGoodShare : 1;
+}
+
 function chipPart(builder: Builder, chip: Chip): Part {
   const { index, priors, scopes } = builder;
-  const history = chip.quality === 'found' ? (priors.chipFactor?.[chip.cameFrom] ?? 1) : 1;
-  const share = history * (chip.quality === 'known-good' ? priors.knownGoodShare : 1);
+  const share = shareOf(priors, chip);
   /** A scope in each run by where the chip is then. */
   const moving = (at: (socket: SocketIndex) => Scope | null): Scope | readonly (Scope | null)[] => {
     if (chip.since === 0 && chip.socketInRun.every((socket) => socket === chip.cameFrom)) {

@@ -29,7 +29,7 @@ export function hintsOf(index: LayoutIndex, interpretations: readonly Interpreta
       const seen = lane === undefined ? undefined : run.seen.get(lane);
       if (lane === undefined || !seen || run.failing.size < 4) continue;
       const size = chipSize(index, lane);
-      const shapes = shapesThatFit(seen, size, run.whole);
+      const shapes = shapesThatFit(seen, { size, whole: run.whole });
       if (shapes?.length === 1 && shapes[0] === 'block' && fixedBits(seen, size.words).length > 0) addressLines = true;
     }
   }

@@ -30,7 +30,7 @@ export function weighAll(
   interpretations: readonly Interpretation[],
   { index, priors, signs, findings }: WeighedBy,
 ): Mixture {
-  const told = interpretations.map((each) => new Signals(index, each.runs, signs, findings));
+  const told = interpretations.map((each) => new Signals(index, each.runs, { signs, findings }));
   const answers = interpretations.map((each, i) => weigh(parts, each.runs, { priors, signals: told[i] as Signals }));
   const most = Math.max(...answers.map((answer) => answer.logEvidence));
   const weights = answers.map((answer) => (most === -Infinity ? 1 : Math.exp(answer.logEvidence - most)));

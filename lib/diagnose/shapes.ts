@@ -1,5 +1,5 @@
 import type { Shape, SharedPart } from '@/shared';
-import type { LaneSeen } from '../readings/tally';
+import type { LaneSeen } from '../readings/lane-seen';
 import type { Cause, Part } from './cause-types';
 
 /**
@@ -78,7 +78,10 @@ const everywhere: readonly Shape[] = ['cell', 'row', 'column', 'block', 'scatter
  * The shapes that fit what was seen of a failing lane, null where nothing is known of its words. One where the whole
  * memory was read; several where only some lines are known, because a log that ends early looks like a part of a chip.
  */
-export function shapesThatFit(seen: LaneSeen, size: ChipSize, whole: boolean): readonly Shape[] | null {
+export function shapesThatFit(
+  seen: LaneSeen,
+  { size, whole }: { size: ChipSize; whole: boolean },
+): readonly Shape[] | null {
   const n = seen.words;
   if (n === 0) return null;
   const oneRow = seen.row !== null && seen.rows === 1;

@@ -17,6 +17,12 @@ export interface LaneShape {
   readonly key: string;
 }
 
+/** What was said of the board beside lanes and readings. */
+interface Said {
+  readonly signs: readonly Sign[];
+  readonly findings: readonly Finding[];
+}
+
 /** A short whose lines were never seen to be joined though their values were known. */
 const notJoined = 0.02;
 /** An address line that is not among those that the readings point at. */
@@ -33,13 +39,16 @@ export class Signals {
   readonly lanes: readonly ReadonlyMap<Lane, LaneShape>[];
   private readonly roles: ReadonlyMap<string, SharedPart['role']>;
   private readonly pairOf: ReadonlyMap<string, LinePair>;
+  private readonly signs: readonly Sign[];
+  private readonly findings: readonly Finding[];
 
   constructor(
     private readonly index: LayoutIndex,
     private readonly runs: readonly RunObservation[],
-    private readonly signs: readonly Sign[],
-    private readonly findings: readonly Finding[],
+    said: Said,
   ) {
+    const { signs, findings } = said;
+    this.findings = findings;
     const readings = runs.some((run) => run.seen.size > 0 || run.aliased.size > 0 || run.values.length > 0);
     const telling = signs.filter((sign) => sign.sign !== 'dead');
     const picked = runs.some((run) => run.picked !== null);
@@ -67,7 +76,7 @@ export class Signals {
       const seen = run.seen.get(lane);
       if (!seen) continue;
       const size = chipSize(this.index, lane);
-      const shapes = shapesThatFit(seen, size, run.whole);
+      const shapes = shapesThatFit(seen, { size, whole: run.whole });
       if (shapes)
         found.set(
           lane,

@@ -6,7 +6,7 @@ import { lanesWords, saidAsOne } from './lane-words';
 import type { Interpretation } from './observe/observations';
 import type { RailReading } from './rails';
 import type { Signals } from './signals';
-import { labelOf } from './timeline';
+import { needEachOther, type Member } from './together';
 import type { Findings } from './suspects';
 
 /** What the evidence as a whole comes to. */
@@ -183,12 +183,6 @@ function sharedVerdict(shared: readonly Suspect[], total: number): Verdict {
   };
 }
 
-interface Member {
-  readonly id: string;
-  readonly label: string;
-  readonly share: number;
-}
-
 function membersOf(candidates: readonly Member[], total: number): Member[] {
   const sorted = [...candidates].sort((a, b) => b.share - a.share);
   const most = sorted[0]?.share ?? 0;
@@ -206,7 +200,7 @@ function membersOf(candidates: readonly Member[], total: number): Member[] {
 
 function groupVerdict(weighed: Weighed, shared: readonly Suspect[]): Verdict {
   const { places, suspects, findings } = weighed;
-  const together = needEachOther(weighed);
+  const together = needEachOther(places, findings);
   const candidates = [
     ...(together ? [together.member] : []),
     ...places
@@ -272,27 +266,6 @@ function groupVerdict(weighed: Weighed, shared: readonly Suspect[]): Verdict {
     sure: 'not sure',
     probability,
     groups: [{ members, probability, why, check }],
-    sockets,
-  };
-}
-
-/** Of two likely places this share is held by both at once, so that they are one explanation and no two. */
-const onlyTogether = 0.6;
-
-/** Two places that explain the evidence only when both have failed. */
-function needEachOther({ places, findings }: Weighed): { member: Member; sockets: string[] } | null {
-  const [one, other] = places;
-  if (!one || !other || other.probability < 0.1) return null;
-  const partsOf = (socket: string) =>
-    findings.parts.flatMap((part, p) =>
-      part.socket !== null && labelOf(findings.index, part.socket) === socket ? [p] : [],
-    );
-  const either = findings.posterior.anyOf(new Set([...partsOf(one.socket), ...partsOf(other.socket)]));
-  const share = one.probability + other.probability - either;
-  if (share < onlyTogether * other.probability) return null;
-  const sockets = [one.socket, other.socket].sort();
-  return {
-    member: { id: `together:${sockets.join('+')}`, label: `${sockets.join(' and ')} together`, share },
     sockets,
   };
 }

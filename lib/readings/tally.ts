@@ -6,31 +6,7 @@ import type { AddressMap } from '../place/address';
 import { nearestWords } from '../place/nearest-window';
 import { placeValue, type ValuePlace } from '../place/place-value';
 import { rowAndColumn } from './chip-word';
-
-/** What readings showed of one lane. */
-export interface LaneSeen {
-  readsOne: number;
-  readsZero: number;
-  /** Readings in which it was right, by what was written. */
-  rightZeros: number;
-  rightOnes: number;
-  /** Failing readings in which no other bit of the word failed. */
-  alone: number;
-  /** Different failing words. */
-  words: number;
-  /** Of how many words that were looked at; null where that is not known. */
-  outOf: number | null;
-  rows: number;
-  columns: number;
-  row: number | null;
-  column: number | null;
-  /** Bits of the word number inside the chip that were 1, or 0, in every failing word. */
-  ones: number;
-  zeros: number;
-  /** Mask of the chips behind the lane that hold a failing word, and of those that were seen right. */
-  failingSegments: number;
-  rightSegments: number;
-}
+import { emptySeen, type LaneSeen } from './lane-seen';
 
 /** A value that was written to a bank and what came back, as whole words. */
 export interface ValueSeen {
@@ -219,7 +195,7 @@ class TallyBuilder {
           return;
         }
         seen.failingSegments |= 1 << n;
-        this.countWord(seen, place.word - segment.from + segment.at);
+        this.countWord(seen, place.word, place.word - segment.from + segment.at);
         shown ??= rowAndColumn(index, place.word - segment.from + segment.at);
       });
       if (!fails) return;
@@ -235,9 +211,14 @@ class TallyBuilder {
     }
   }
 
-  private countWord(seen: LaneSeen & { rowSet: Set<number>; columnSet: Set<number>; seen: Set<number> }, word: number) {
-    if (seen.seen.has(word)) return;
-    seen.seen.add(word);
+  /** `bankWord` tells words of several chips behind a lane apart; `word` is that inside the chip. */
+  private countWord(
+    seen: LaneSeen & { rowSet: Set<number>; columnSet: Set<number>; seen: Set<number> },
+    bankWord: number,
+    word: number,
+  ) {
+    if (seen.seen.has(bankWord)) return;
+    seen.seen.add(bankWord);
     seen.words++;
     seen.ones = seen.seen.size === 1 ? word : andOf(seen.ones, word);
     const not = 2 ** 40 - 1 - word;
@@ -270,27 +251,6 @@ class TallyBuilder {
     }
     return { lanes, values: [...this.values.values()], whole, readings: this.readings };
   }
-}
-
-/** A lane of which nothing was seen yet. */
-export function emptySeen(): LaneSeen {
-  return {
-    readsOne: 0,
-    readsZero: 0,
-    rightZeros: 0,
-    rightOnes: 0,
-    alone: 0,
-    words: 0,
-    outOf: null,
-    rows: 0,
-    columns: 0,
-    row: null,
-    column: null,
-    ones: 0,
-    zeros: 0,
-    failingSegments: 0,
-    rightSegments: 0,
-  };
 }
 
 /** A value that is too wide for the data bits shows the check bits as well. */

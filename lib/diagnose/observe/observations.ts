@@ -2,7 +2,8 @@ import type { Evidence, Finding, Measurement, ReadEvidence, Run, Sign } from '@/
 import type { Lane } from '../../brand';
 import type { LayoutIndex } from '../../layout/layout-index';
 import type { AddressMap } from '../../place/address';
-import type { LaneSeen, ValueSeen } from '../../readings/tally';
+import type { LaneSeen } from '../../readings/lane-seen';
+import type { ValueSeen } from '../../readings/tally';
 import type { CompiledFormat } from '../../report/meaning';
 import type { Tried } from '../shapes';
 import { consistentChoices } from './choices';

@@ -2,7 +2,7 @@ import type { Run } from '@/shared';
 import type { Lane } from '../../brand';
 import type { LayoutIndex } from '../../layout/layout-index';
 import { segmentsOf } from '../../layout/segments';
-import { emptySeen, type LaneSeen } from '../../readings/tally';
+import type { LaneSeen } from '../../readings/lane-seen';
 import type { Tried } from '../shapes';
 import type { RunObservation } from './observations';
 import type { Choice, Piece } from './piece';
