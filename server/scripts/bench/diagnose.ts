@@ -51,7 +51,7 @@ const measure = (sockets: number, kind: 'usual' | 'scattered'): Row[] => {
   const random = seeded(sockets);
   const lanesOf = kind === 'usual' ? usual : scattered;
   const all = Array.from({ length: looks }, (_, at) => runsFor(index, at, lanesOf(index, at, random)));
-  for (const runs of all.slice(0, 25)) diagnose(index, runs);
+  for (let round = 0; round < 2; round++) for (const runs of all) diagnose(index, runs);
   const times = all.map((runs) => timed(() => diagnose(index, runs)));
   const what = `diagnose, ${sockets} sockets, ${pieces} ${kind === 'usual' ? 'pieces' : 'scattered lanes'}`;
   const target = sockets === 64 && kind === 'usual' ? { target: { atMost: frame } } : {};
@@ -61,4 +61,19 @@ const measure = (sockets: number, kind: 'usual' | 'scattered'): Row[] => {
   ];
 };
 
-report([8, 64, 256].flatMap((sockets) => [...measure(sockets, 'usual'), ...measure(sockets, 'scattered')]));
+const sizes = [8, 64, 256, 1024];
+const rows = sizes.flatMap((sockets) => [...measure(sockets, 'usual'), ...measure(sockets, 'scattered')]);
+
+/** How many times longer the middle answer takes on a board than on the smallest one. */
+const growth = (sockets: number): Row => {
+  const middle = (of: number) => rows.find(({ what }) => what === `diagnose, ${of} sockets, ${pieces} pieces, median`);
+  const [small, large] = [middle(sizes[0] ?? 0), middle(sockets)];
+  if (!small || !large) throw new RangeError('A size was not measured.');
+  return {
+    what: `diagnose, ${sockets} sockets beside ${sizes[0]}, median`,
+    value: large.value / small.value,
+    unit: 'times',
+  };
+};
+
+report([...rows, ...sizes.slice(1).map(growth)]);

@@ -16,8 +16,8 @@ const boards: readonly [string, LayoutDocument][] = [
   ['a picture of three planes', layoutDocument.parse(caseBoards.H)],
 ];
 
-/** All boards together; `npm run prove` asks for one hundred thousand. */
-const casesEach = Math.ceil(Number(process.env.ROWCALL_CASES ?? 5_000) / boards.length);
+/** All boards together; ROWCALL_CASES=100000 asks for one hundred thousand, which takes about half an hour. */
+const casesEach = Math.ceil(Number(process.env.ROWCALL_CASES ?? 2_000) / boards.length);
 
 describe('an answer to anything that the schema allows', () => {
   it.each(boards)(
