@@ -159,9 +159,9 @@ function weighEvidence({ said, runs }: Findings, cause: Cause): { explains: stri
   const contradicts = new Set<string>();
   for (const piece of said) {
     const scope = cause.kinds[0]?.scopes[piece.run];
-    const lanes = scope?.lanes ?? [];
-    if (piece.failing.some((lane) => lanes.includes(lane))) explains.add(piece.text);
-    else if (lanes.some((lane) => runs[piece.run]?.passed.has(lane))) contradicts.add(piece.text);
+    const lanes = new Set(scope?.lanes);
+    if (piece.failing.some((lane) => lanes.has(lane))) explains.add(piece.text);
+    else if (scope?.lanes.some((lane) => runs[piece.run]?.passed.has(lane))) contradicts.add(piece.text);
   }
   return { explains: [...explains], contradicts: [...contradicts] };
 }
@@ -187,7 +187,8 @@ function reasonsFor(findings: Findings, of: { part: Part; at: number; cause: Cau
     const inRun = many ? ` in run ${r + 1}` : '';
     const explained = lanes.filter((lane) => run.failing.has(lane));
     const passed = lanes.filter((lane) => run.passed.has(lane));
-    const others = [...run.failing].filter((lane) => !lanes.includes(lane));
+    const own = new Set(lanes);
+    const others = [...run.failing].filter((lane) => !own.has(lane));
     if (run.failing.size > 0 && explained.length === 0) {
       reasons.push(`It does not explain ${lanesWords(index, run.failing)}${inRun}.`);
     } else if (explained.length > 0 && others.length === 0) {

@@ -1,3 +1,4 @@
+import { sum } from 'd3-array';
 import type { Evidence, Finding, Measurement, ReadEvidence, Run, Sign } from '@/shared';
 import type { Lane } from '../../brand';
 import type { LayoutIndex } from '../../layout/layout-index';
@@ -53,8 +54,9 @@ export interface Observations {
   readonly findings: readonly Finding[];
 }
 
-/** More ways to understand all the evidence together than this are not followed. */
+/** More ways to understand all the evidence together than this are not followed, fewer where very many lanes fail. */
 const mostInterpretations = 96;
+const lanesTimesWays = 2000;
 
 /**
  * Reads every piece of evidence of every run, and says for each lane whether it failed, passed or was not
@@ -72,12 +74,12 @@ export function observe(
   const pieces = read.flatMap(({ piece }) => (piece ? [piece] : []));
   const notes: string[] = [];
   const choices = consistentChoices(pieces);
-  if (choices.length > mostInterpretations) {
-    notes.push(
-      `The evidence can be understood in ${choices.length} ways; the first ${mostInterpretations} are weighed.`,
-    );
+  const lanes = Math.max(1, ...choices.slice(0, 8).map((choice) => sum(choice, (each) => each.failing.length)));
+  const most = Math.max(4, Math.min(mostInterpretations, Math.floor(lanesTimesWays / lanes)));
+  if (choices.length > most) {
+    notes.push(`The evidence can be understood in ${choices.length} ways; the first ${most} are weighed.`);
   }
-  const interpretations = choices.slice(0, mostInterpretations).map((choice) => ({
+  const interpretations = choices.slice(0, most).map((choice) => ({
     runs: runs.map((run, r) =>
       observeRun(
         index,
