@@ -161,8 +161,8 @@ class WideSum {
   }
 
   /**
-   * `gains` is the logarithm of the sum of all gains. Everything above a combination: with k further variables no more than the k-fold product of the gains, and no more
-   * than the prior weight of k variables with everything explained.
+   * Everything above a combination: with k further variables no more than the k-fold product of the gains, of whose sum
+   * `gains` is the logarithm, and no more than the prior weight of k variables with everything explained.
    */
   private boundAbove(at: { log: number; weight: number }, gains: number, later: readonly { n: number }[]): number {
     let odds = 0;
