@@ -12,8 +12,8 @@ import { collectGroup, type Group } from './wide-group';
 const fine = 1e-7;
 /** Gains that add up to less than this hardly depend on each other. */
 const gentleUpTo = 0.5;
-/** What the product of gentle gains may leave open by their dependence. */
-const fineCoupled = 1e-5;
+/** What may lie above a combination of gentle gains that is not taken further. */
+const fineAbove = 1e-5;
 /** Elementary steps until combinations are no longer taken further. */
 const workLimit = 120_000;
 /** Most variables that are there at once in the combination that is found first. */
@@ -139,12 +139,11 @@ class WideSum {
     const bound = Math.min(open, this.boundAbove(at, gains, later));
     // Single variables are always looked at, so that the budget never hides the leading cause.
     const used = this.chosen.length > 0 && this.work > workLimit;
-    // Where the gains are small their product is nearly right, and only what couples them is left open.
+    // Where the gains are small, their product gives what lies above nearly right, but not how it divides near a lane.
     const gentle = above < gentleUpTo;
-    const coupled = gentle ? Math.max(0, open - value * Math.exp(gains)) : Infinity;
-    if (bound <= fine || coupled <= fineCoupled || used) {
+    if (bound <= fine || (gentle && open <= fineAbove) || used) {
       this.addCombination(value, gentle ? later : []);
-      this.dropped += Math.min(coupled, bound, Number.MAX_VALUE);
+      this.dropped += Math.min(bound, Number.MAX_VALUE);
       return;
     }
     this.addCombination(value, []);

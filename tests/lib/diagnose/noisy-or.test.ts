@@ -77,7 +77,7 @@ describe('the posterior of causes, given the lanes that failed', () => {
         );
         expect(answer.leftOut).toBeLessThan(1e-9);
       }),
-      { seed: 7, numRuns: 2000 },
+      { seed: 7, numRuns: 10_000 },
     );
   });
 
