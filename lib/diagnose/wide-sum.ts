@@ -13,7 +13,7 @@ const fine = 1e-7;
 /** Gains that add up to less than this hardly depend on each other. */
 const gentleUpTo = 0.5;
 /** What may lie above a combination of gentle gains that is not taken further. */
-const fineAbove = 1e-5;
+const fineAbove = 1e-6;
 /** Elementary steps until combinations are no longer taken further. */
 const workLimit = 120_000;
 /** Most variables that are there at once in the combination that is found first. */
