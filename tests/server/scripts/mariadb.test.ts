@@ -9,7 +9,7 @@ const folder = mkdtempSync(join(tmpdir(), 'rowcall-mariadb-'));
 afterAll(() => rmSync(folder, { recursive: true, force: true }));
 
 const until = async (holds: () => boolean): Promise<boolean> => {
-  for (let waited = 0; waited < 15_000; waited += 100) {
+  for (let waited = 0; waited < 45_000; waited += 100) {
     if (holds()) return true;
     await new Promise((resolve) => setTimeout(resolve, 100));
   }
@@ -27,7 +27,7 @@ it('a private database ends with the process that started it, even if that one i
   expect(existsSync(`/proc/${pid}`)).toBe(true);
   starter.kill('SIGKILL');
   expect(await until(() => !existsSync(`/proc/${pid}`))).toBe(true);
-});
+}, 120_000);
 
 it('a broken data folder is told in one line, and is not touched', async () => {
   const broken = join(folder, 'broken');
