@@ -13,7 +13,7 @@ const syndromes = [
 
 const wordRow = ({ row, bank, y }: { row: number; bank: string; y: number }) =>
   lineOfSockets({
-    labels: [...'ABCDEFGHJKL'].map((column) => `${row}${column}`),
+    labels: [...'ABCDEFGHJKL'].map((column) => `${row}-${column}`),
     start: { x: 0, y },
     step: { x: 9.8, y: 0 },
     socket: { family: 'dynamic-64k-1' },
@@ -183,25 +183,25 @@ export const brathvikHs3: LayoutDocumentInput = {
       proves: 'Both report formats and the table of syndromes.',
     },
     {
-      title: 'Pull test, 1A, 1F, 2L and 4B',
+      title: 'Pull test, 1-A, 1-F, 2-L and 4-B',
       kind: 'pull test',
       year: 2022,
       proves: 'C5 is at the left end of rows 1 and 3, bit 0 at the right end of rows 2 and 4.',
     },
   ],
   examples: [
-    { format: 'check-log', text: 'U SYN 1A TIMES 118', sockets: ['4B'], source: 'Pull test, 4B out.' },
+    { format: 'check-log', text: 'U SYN 1A TIMES 118', sockets: ['4-B'], source: 'Pull test, 4-B out.' },
     {
       format: 'check-log',
       text: 'L SYN 04 TIMES 3',
-      sockets: ['1D'],
+      sockets: ['1-D'],
       source: 'Inspection of the valley station, 2021. A check bit alone: C2.',
     },
     {
       format: 'bare-test',
       text: '1A004 PUT 000000 GOT 000200',
-      sockets: ['4B'],
-      source: 'Pull test, 4B out, check switched off.',
+      sockets: ['4-B'],
+      source: 'Pull test, 4-B out, check switched off.',
     },
   ],
 };

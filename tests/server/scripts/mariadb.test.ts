@@ -20,9 +20,13 @@ it('a private database ends with the process that started it, even if that one i
   const own = join(folder, 'own');
   const code = `import('./server/scripts/setup/mariadb.mjs').then(({ startMariadb }) =>
     startMariadb({ folder: ${JSON.stringify(own)}, port: ${await freePort()}, password: 'x', databases: 'rowcall' }))`;
-  const starter = spawn(process.execPath, ['-e', `${code}; setTimeout(() => {}, 60000)`], { stdio: 'ignore' });
+  // Killed while it is still starting, the database would not hear the signal yet.
+  const ready = join(folder, 'ready');
+  const told = `.then(() => require('node:fs').writeFileSync(${JSON.stringify(ready)}, ''))`;
+  const starter = spawn(process.execPath, ['-e', `${code}${told}; setTimeout(() => {}, 60000)`], { stdio: 'ignore' });
   const pidFile = join(own, 'mariadb.pid');
   expect(await until(() => existsSync(pidFile) && readFileSync(pidFile, 'utf8').trim() !== '')).toBe(true);
+  expect(await until(() => existsSync(ready))).toBe(true);
   const pid = Number(readFileSync(pidFile, 'utf8'));
   expect(existsSync(`/proc/${pid}`)).toBe(true);
   starter.kill('SIGKILL');
