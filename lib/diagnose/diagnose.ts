@@ -19,6 +19,7 @@ import { listSignatures } from './signature-words';
 import { deadBoardSuspects, loadedRails, railSuspects, supplyVerdict } from './supply';
 import { listPlaces, listSuspects, type Findings } from './suspects';
 import { followChips, type Timeline } from './timeline';
+import { breakingSockets } from './wrong-part';
 import { decide, laneNames, openMeaning, type Weighed } from './verdict';
 
 /** A failing lane of which the model's causes explain less than this is told as unexplained. */
@@ -66,6 +67,7 @@ export function diagnose(index: LayoutIndex, runs: readonly Run[], priors: Prior
     signals,
     signs,
     rails,
+    breaking: breakingSockets(index, timeline.chips),
     suspects: ranks ? withLoadedRails(listSuspects(findings), index, timeline) : otherSuspects(index, rails, signs),
     places: ranks ? listPlaces(findings) : [],
     lastRun,

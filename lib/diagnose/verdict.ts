@@ -27,6 +27,8 @@ export interface Weighed {
   readonly signals: Signals;
   readonly signs: readonly Sign[];
   readonly rails: readonly RailReading[];
+  /** Sockets that now hold a chip which they break. */
+  readonly breaking: readonly string[];
   readonly suspects: readonly Suspect[];
   readonly places: readonly Place[];
   /** The last run that showed anything, null where none did. */
@@ -64,6 +66,7 @@ export function wentAway({ findings, lastRun }: Weighed): boolean {
 /** Decides what to say first: a place, a group, a shared part, or that there is nothing to say. */
 export function decide(weighed: Weighed): Verdict {
   const { findings, lastRun, places, suspects, unexplained } = weighed;
+  if (weighed.breaking.length > 0 && lastRun !== findings.runs.length - 1) return wrongPartVerdict(weighed.breaking);
   const nothing = { probability: null, groups: [], sockets: [] };
   if (lastRun === null) {
     const headline = weighed.unreadable
@@ -96,6 +99,21 @@ export function decide(weighed: Weighed): Verdict {
   return groupVerdict(weighed, shared);
 }
 
+/** A chip that does not belong in its socket, before anything was tested with it. */
+function wrongPartVerdict(sockets: readonly string[]): Verdict {
+  return {
+    outcome: 'place',
+    headline: wrongPartHeadline(listWords(sockets)),
+    sure: 'strong',
+    probability: null,
+    groups: [],
+    sockets,
+  };
+}
+
+const wrongPartHeadline = (sockets: string) =>
+  `Power off. The chip just fitted in ${sockets} is not made for this socket: treat it as destroyed.`;
+
 function placeVerdict(weighed: Weighed, leading: readonly Place[]): Verdict {
   const capped = wentAway(weighed);
   const [first] = leading as [Place];
@@ -114,8 +132,7 @@ function placeVerdict(weighed: Weighed, leading: readonly Place[]): Verdict {
 function onePlace({ suspects }: Weighed, place: Place): string {
   if (place.contact > place.chip) return `Look at socket ${place.socket} first: contacts, solder, trace.`;
   const chip = suspects.find((suspect) => suspect.kind === 'chip' && suspect.socket === place.socket);
-  if (chip?.modes[0]?.mode === 'wrong-part')
-    return `Power off. The chip just fitted in ${place.socket} is not made for this socket: treat it as destroyed.`;
+  if (chip?.modes[0]?.mode === 'wrong-part') return wrongPartHeadline(place.socket);
   if (chip?.cameFrom) return `Pull the chip now in ${place.socket}: it came from ${chip.cameFrom}.`;
   if (chip?.id.includes('#')) return `Pull the chip just fitted in ${place.socket}.`;
   return `Pull ${place.socket} first.`;

@@ -14,6 +14,14 @@ export function fitOf(index: LayoutIndex, chip: Pick<Chip, 'family' | 'cameFrom'
   return fitCheck(wired, fitted, railsAtSocket(document.rails, labelOf(index, chip.cameFrom)));
 }
 
+/** The sockets that now hold a chip which they break. */
+export function breakingSockets(index: LayoutIndex, chips: readonly Chip[]): string[] {
+  return chips.flatMap((chip) => {
+    const now = chip.socketInRun.at(-1) ?? null;
+    return now !== null && isDestroyed(index, chip) ? [labelOf(index, now)] : [];
+  });
+}
+
 /** True where the socket breaks the chip that was fitted. */
 export function isDestroyed(index: LayoutIndex, chip: Pick<Chip, 'family' | 'cameFrom'>): boolean {
   return fitOf(index, chip)?.verdict === 'destroyed';

@@ -143,6 +143,11 @@ function chipMeans(index: LayoutIndex, leading: State | undefined): string {
 export function wrongPartWords({ beliefs, index }: Desk, socket: SocketIndex): string | null {
   const wrong = beliefs.states.find(({ cause, part }) => cause.mode === 'wrong-part' && part.socket === socket);
   if (!wrong || (beliefs.answers[wrong.answer]?.share ?? 0) < 0.5) return null;
+  return rightPartWords(index, socket);
+}
+
+/** What is done where a chip does not belong in its socket. */
+export function rightPartWords(index: LayoutIndex, socket: SocketIndex): string {
   const family = index.familyOfSocket[socket]?.name ?? 'chip of the right family';
   return `Power off, take out ${labelOf(index, socket)}, measure the rails at the socket, then fit a ${family}.`;
 }

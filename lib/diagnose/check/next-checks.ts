@@ -3,7 +3,16 @@ import { wentAway } from '../verdict';
 import { asNextCheck } from './candidate';
 import { candidates, deskFor, ranked, type CheckInput } from './candidates';
 import { effort, type Desk } from './desk';
-import { deadChecks, provenPlace, refitCheck, runAgain, soakCheck, supplyChecks, wrongPartWords } from './first-rules';
+import {
+  deadChecks,
+  provenPlace,
+  refitCheck,
+  runAgain,
+  soakCheck,
+  supplyChecks,
+  rightPartWords,
+  wrongPartWords,
+} from './first-rules';
 import { measureCheck, replaceCheck } from './place-checks';
 import { railsCheck } from './shared-checks';
 import { settleMeaning } from './whole-checks';
@@ -72,6 +81,10 @@ function comesFirst(desk: Desk): NextCheck[] {
   if (settle && settle.bits >= worthSettling) return [asNextCheck(beliefs, settle)];
   if ((verdict.outcome === 'shared' && allFail(desk)) || severalHot(desk)) return railsFirst(desk);
   if (verdict.outcome !== 'place') return [];
+  const [breaking] = weighed.breaking.flatMap((label) => index.socketByLabel.get(label) ?? []);
+  if (breaking !== undefined) {
+    return [asNextCheck(beliefs, replaceCheck(desk, breaking, rightPartWords(index, breaking)))];
+  }
   const [place] = weighed.places;
   const socket = place ? index.socketByLabel.get(place.socket) : undefined;
   if (place === undefined || socket === undefined) return [];

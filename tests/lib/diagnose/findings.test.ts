@@ -60,3 +60,18 @@ describe('the history of a board', () => {
     expect(share(told, 'chip:U15')).toBeLessThan(share(plain, 'chip:U15'));
   });
 });
+
+describe('a chip of another supply that was just fitted', () => {
+  it('is told before anything is tested with it', () => {
+    const told = diagnose(
+      index,
+      runsSchema.parse([
+        { evidence: [{ kind: 'mask', bank: '0', mask: 4 }] },
+        { changes: [{ kind: 'replace', socket: 'U12', family: 'dynamic-64k-1' }] },
+      ]),
+    );
+    expect(told.headline).toMatch(/^Power off\. The chip just fitted in U12 is not made for this socket/);
+    expect(told.sentences.join(' ')).toContain('Pin 8 has +12 V');
+    expect(told.nextChecks[0]).toMatchObject({ action: 'replace', sockets: ['U12'] });
+  });
+});
