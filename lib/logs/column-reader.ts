@@ -102,9 +102,11 @@ export class ColumnReader implements LineReader {
   line(bytes: Uint8Array, at: number): Outcome {
     this.simple = true;
     const outcome = this.follow(bytes, at, 'runs');
-    // A dash that made a run may have stood between two columns.
-    if (outcome === isUnread && this.to >= 0 && !this.freeDash) return this.follow(bytes, at, 'columns only');
-    return outcome;
+    if (outcome !== isUnread || this.to < 0 || this.freeDash) return outcome;
+    // A dash that made a run may have stood between two columns. Another line of the same form may still be a run.
+    const byColumns = this.follow(bytes, at, 'columns only');
+    this.simple = false;
+    return byColumns;
   }
 
   private follow(bytes: Uint8Array, at: number, dashes: 'runs' | 'columns only'): Outcome {

@@ -1,7 +1,7 @@
 import fc from 'fast-check';
 import { layoutDocument } from '@/shared';
 import {
-  buildAddressMap,
+  addressMapOf,
   buildLayoutIndex,
   type LinePattern,
   openLogImport,
@@ -193,7 +193,18 @@ it('reads a line of one form with the last exactly as it reads any other', () =>
       const text = lines.map((line) => `${line.join('')}\n${line.join('')}\n`).join('');
       expect(said(new MouldedReader(pattern), bytesOf(text))).toEqual(said(new ColumnReader(pattern), bytesOf(text)));
     }),
-    { numRuns: 500 },
+    {
+      numRuns: 500,
+      examples: [
+        [
+          { ...plain, written: 3, read: 5 },
+          [
+            ['1A80 TO 1A90', ' w:', '00-', ' ', '00', ''],
+            ['1A80 TO 1A90', ' w:', '00', ' R ', '00', ''],
+          ],
+        ],
+      ],
+    },
   );
 });
 
@@ -203,7 +214,7 @@ it('comes to the same tally as the same readings typed', () => {
     minLength: 1,
     maxLength: 60,
   });
-  const map = buildAddressMap(two);
+  const map = addressMapOf(two);
   fc.assert(
     fc.property(lines, (readings) => {
       const text = readings
