@@ -6,6 +6,7 @@ export { buildLayoutIndex } from './layout/build-layout-index';
 export type { LayoutIndex } from './layout/layout-index';
 export { channelsOf, servedLanes, type Channel } from './layout/served-lanes';
 export { compileFormat, type CompileResult } from './report/compile-format';
+export { openConventions, type Doubt } from './report/open-conventions';
 export type {
   CompiledFormat,
   FailingLane,
@@ -17,6 +18,7 @@ export type {
 } from './report/meaning';
 export { compiledFormats } from './diagnose/compiled-formats';
 export { diagnose } from './diagnose/diagnose';
+export { supplyPins, withinLimits, type SupplyPin } from './diagnose/rails';
 export { lanesWords } from './diagnose/lane-words';
 export { priors, type Priors } from './diagnose/priors';
 export {
@@ -34,7 +36,7 @@ export { builtInFamilies, findFamily } from './chips/families';
 export { fitCheck, railsAtSocket } from './chips/fit';
 export type { FitCheck, FitPin, FitReason, FitSeverity, FitVerdict, RailAtPins } from './chips/fit-types';
 export {
-  buildAddressMap,
+  addressMapOf,
   decodeAddress,
   encodeAddress,
   type AddressMap,

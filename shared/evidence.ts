@@ -43,19 +43,8 @@ const pass = z.strictObject({
   banks: z.array(label).max(limits.banks).optional().describe('The banks that passed. Left out: all.'),
 });
 
-const plain = z.discriminatedUnion('kind', [
-  code,
-  lanes,
-  mask,
-  pass,
-  readings,
-  log,
-  picture,
-  sign,
-  measurement,
-  alias,
-  finding,
-]);
+const plainKinds = [code, lanes, mask, pass, readings, log, picture, sign, measurement, alias, finding] as const;
+const plain = z.discriminatedUnion('kind', plainKinds);
 
 /** One thing that can be understood in several ways: octal or hexadecimal, five or six flashes, which byte came first. */
 const either = z.strictObject({
@@ -72,20 +61,7 @@ const either = z.strictObject({
 });
 
 /** One thing that the technician saw. */
-export const evidence = z.discriminatedUnion('kind', [
-  code,
-  lanes,
-  mask,
-  pass,
-  readings,
-  log,
-  picture,
-  sign,
-  measurement,
-  alias,
-  finding,
-  either,
-]);
+export const evidence = z.discriminatedUnion('kind', [...plainKinds, either]);
 
 /** One thing that was done to the board between two runs. */
 export const change = z.discriminatedUnion('kind', [

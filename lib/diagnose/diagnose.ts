@@ -3,7 +3,7 @@ import type { Lane } from '../brand';
 import type { LayoutIndex } from '../layout/layout-index';
 import { cautionsFor } from './cautions';
 import { listParts } from './causes';
-import { buildAddressMap, type AddressMap } from '../place/address';
+import { addressMapOf } from '../place/address';
 import { compiledFormats } from './compiled-formats';
 import { hintsOf } from './hints';
 import { weighAll } from './mixture';
@@ -15,6 +15,7 @@ import { priors as defaultPriors, type Priors } from './priors';
 import { openQuestions } from './questions';
 import { railReading, type RailReading } from './rails';
 import { tell } from './sentences';
+import { Signals } from './signals';
 import { listSignatures } from './signature-words';
 import { deadBoardSuspects, loadedRails, railSuspects, supplyVerdict } from './supply';
 import { listPlaces, listSuspects, type Findings } from './suspects';
@@ -40,13 +41,9 @@ export function diagnose(index: LayoutIndex, runs: readonly Run[], priors: Prior
   );
   const observations = observe({ index, map: addressMapOf(index) }, runs, compiledFormats(index));
   const { interpretations, signs } = observations;
-  const parts = listParts(index, timeline, { priors, hints: hintsOf(index, interpretations) });
-  const { posterior, best, signals, shares } = weighAll(parts, interpretations, {
-    index,
-    priors,
-    signs,
-    findings: observations.findings,
-  });
+  const told = interpretations.map((each) => ({ ...each, signals: new Signals(index, each.runs, observations) }));
+  const parts = listParts(index, timeline, { priors, hints: hintsOf(index, told) });
+  const { posterior, best, shares } = weighAll(parts, told, priors);
   const rails = observations.measurements.flatMap((each) => railReading(index, each) ?? []);
   const findings: Findings = {
     index,
@@ -64,7 +61,7 @@ export function diagnose(index: LayoutIndex, runs: readonly Run[], priors: Prior
   const ranks = anyFailed && supply === null;
   const weighed: Weighed = {
     findings,
-    signals,
+    signatures: listSignatures(index, best.signals, best.runs),
     signs,
     rails,
     breaking: breakingSockets(index, timeline.chips),
@@ -101,7 +98,7 @@ export function diagnose(index: LayoutIndex, runs: readonly Run[], priors: Prior
     untested: laneNames(findings, untested),
     lanes: laneStates(findings, last),
     evidence: [...observations.evidence],
-    signatures: listSignatures(index, signals, best.runs),
+    signatures: [...weighed.signatures],
     questions: openQuestions(index, interpretations, { shares, settles: openMeaning(weighed)?.check ?? '' }),
     nextChecks: nextChecks({ weighed, verdict, runs, priors }),
     cautions: cautionsFor(index, {
@@ -122,14 +119,6 @@ function otherSuspects(index: LayoutIndex, rails: readonly RailReading[], signs:
   const measured = railSuspects(index, rails);
   if (measured.length > 0 || rails.length > 0) return measured;
   return signs.some(({ sign }) => sign === 'dead') ? deadBoardSuspects() : [];
-}
-
-const addressMaps = new WeakMap<LayoutIndex, AddressMap>();
-
-function addressMapOf(index: LayoutIndex): AddressMap {
-  let map = addressMaps.get(index);
-  if (!map) addressMaps.set(index, (map = buildAddressMap(index)));
-  return map;
 }
 
 function findLast<T>(list: readonly T[], wanted: (item: T) => boolean): number | null {

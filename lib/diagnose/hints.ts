@@ -1,7 +1,7 @@
 import type { LayoutIndex } from '../layout/layout-index';
 import { fixedBits, shapesThatFit } from './shapes';
-import { linePairs, looksJoined } from './line-pairs';
-import type { Interpretation } from './observe/observations';
+import { looksJoined } from './line-pairs';
+import type { Told } from './mixture';
 import { chipSize } from './signals';
 
 /** Causes that are worth listing only because the readings point at them. */
@@ -15,12 +15,12 @@ export interface Hints {
 export const noHints: Hints = { addressLines: false, joinedLines: [] };
 
 /** What the readings, in any of the ways to understand them, point at. */
-export function hintsOf(index: LayoutIndex, interpretations: readonly Interpretation[]): Hints {
+export function hintsOf(index: LayoutIndex, interpretations: readonly Told[]): Hints {
   let addressLines = false;
   const joined = new Map<string, readonly [number, number]>();
-  for (const { runs } of interpretations) {
+  for (const { runs, signals } of interpretations) {
     if (!runs.some((run) => run.seen.size > 0 || run.aliased.size > 0)) continue;
-    for (const pair of linePairs(index, runs)) {
+    for (const pair of signals.pairs) {
       if (looksJoined(pair)) joined.set(pair.lines.join(' '), pair.lines);
     }
     for (const run of runs) {

@@ -1,5 +1,6 @@
 import type { Lane } from '../brand';
 import type { LayoutIndex } from '../layout/layout-index';
+import { bitOf } from '../place/address-bits';
 import type { RunObservation } from './observe/observations';
 
 /** What written and read values say of two data lines being joined. */
@@ -15,8 +16,6 @@ export interface LinePair {
   /** What both read as when they were written differently; null where it was not always the same. */
   readonly wins: 'low' | 'high' | null;
 }
-
-const bitOf = (value: number, bit: number) => Math.floor(value / 2 ** bit) % 2;
 
 /**
  * Every pair of lines of which one failed in readings whose values are known. A pair of lines that are joined is right

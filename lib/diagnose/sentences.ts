@@ -2,7 +2,6 @@ import type { Lane } from '../brand';
 import { sentenceCase } from '../layout/words';
 import { lanesWords, saidAsOne } from './lane-words';
 import type { Observations } from './observe/observations';
-import { listSignatures } from './signature-words';
 import type { Chip } from './timeline';
 import { fitOf } from './wrong-part';
 import { openMeaning, wentAway, type Verdict, type Weighed } from './verdict';
@@ -71,8 +70,7 @@ export function tell(told: Told): string[] {
       `${words} ${saidAsOne(findings.index, untested) ? 'was' : 'were'} not tested${silence ? `: ${silence}` : ''}.`,
     );
   }
-  for (const { words } of listSignatures(findings.index, weighed.signals, findings.runs).slice(0, 3))
-    sentences.push(words);
+  for (const { words } of weighed.signatures.slice(0, 3)) sentences.push(words);
   for (const chip of told.chips) {
     const fit = chip.family === null ? null : fitOf(findings.index, chip);
     if (fit && fit.verdict !== 'fits') sentences.push(...fit.reasons.slice(0, 3).map(({ words }) => words));

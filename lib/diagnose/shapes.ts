@@ -1,4 +1,5 @@
 import type { Shape, SharedPart } from '@/shared';
+import { bitOf } from '../place/address-bits';
 import type { LaneSeen } from '../readings/lane-seen';
 import type { Cause, Part } from './cause-types';
 
@@ -110,9 +111,7 @@ export function fixedBits(seen: LaneSeen, words: number): number[] {
   const bits: number[] = [];
   if (seen.outOf !== null) return bits;
   for (let bit = 0; 2 ** bit < words; bit++) {
-    const one = Math.floor(seen.ones / 2 ** bit) % 2 === 1;
-    const zero = Math.floor(seen.zeros / 2 ** bit) % 2 === 1;
-    if (one !== zero) bits.push(bit);
+    if (bitOf(seen.ones, bit) !== bitOf(seen.zeros, bit)) bits.push(bit);
   }
   return bits;
 }

@@ -1,11 +1,10 @@
 import { sum } from 'd3-array';
-import type { Diagnosis, LaneName, Place, Sign, Suspect, SuspectGroup } from '@/shared';
+import type { Diagnosis, LaneName, Place, Sign, Signature, Suspect, SuspectGroup } from '@/shared';
 import type { Lane } from '../brand';
 import { bankWords, listWords, sentenceCase } from '../layout/words';
 import { lanesWords, saidAsOne } from './lane-words';
 import type { Interpretation } from './observe/observations';
 import type { RailReading } from './rails';
-import type { Signals } from './signals';
 import { needEachOther, type Member } from './together';
 import type { Findings } from './suspects';
 
@@ -24,7 +23,7 @@ export interface Verdict {
 
 export interface Weighed {
   readonly findings: Findings;
-  readonly signals: Signals;
+  readonly signatures: readonly Signature[];
   readonly signs: readonly Sign[];
   readonly rails: readonly RailReading[];
   /** Sockets that now hold a chip which they break. */

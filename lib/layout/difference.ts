@@ -1,6 +1,6 @@
 import type { LayoutDocument } from '@/shared';
 import type { Lane } from '../brand';
-import { buildAddressMap, type AddressMap } from '../place/address';
+import { addressMapOf, type AddressMap } from '../place/address';
 import { blamedSockets } from '../report/blamed-sockets';
 import { compileFormat } from '../report/compile-format';
 import type { CompiledFormat } from '../report/meaning';
@@ -88,7 +88,7 @@ function sideOf(index: LayoutIndex): Side {
     const compiled = compileFormat(definition, index);
     if (compiled.ok && !formats.has(definition.id)) formats.set(definition.id, compiled.format);
   }
-  return { index, map: buildAddressMap(index), formats };
+  return { index, map: addressMapOf(index), formats };
 }
 
 function compareLanes(before: LayoutIndex, after: LayoutIndex): LaneDifference[] {

@@ -44,3 +44,11 @@ function segmentOf(socket: SocketIndex, held: Held, words: number): Segment {
 export function segmentsInSocket(index: LayoutIndex, lane: Lane, socket: SocketIndex): number {
   return segmentsOf(index, lane).reduce((mask, segment, n) => (segment.socket === socket ? mask | (1 << n) : mask), 0);
 }
+
+/** Where a word of a bank lies behind one of its lanes: which segment, and which word inside that chip; null for nowhere. */
+export function chipWordOf(index: LayoutIndex, lane: Lane, word: number): { segment: number; inChip: number } | null {
+  const segments = segmentsOf(index, lane);
+  const segment = segments.findIndex(({ from, to }) => word >= from && word <= to);
+  const found = segments[segment];
+  return found ? { segment, inChip: word - found.from + found.at } : null;
+}

@@ -1,6 +1,6 @@
 import type { LayoutIndex } from '../layout/layout-index';
 import { bankWords } from '../layout/words';
-import { type AddressMap, buildAddressMap } from '../place/address';
+import { type AddressMap, addressMapOf } from '../place/address';
 import { nearestWords } from '../place/nearest-window';
 import { AddressFinder } from './address-finder';
 import { longestLine, tooLongWords } from './line-feed';
@@ -37,7 +37,7 @@ export class ColumnLines implements LineTaker {
     private readonly pattern: ColumnPattern,
     private readonly book: LogBook,
   ) {
-    this.map = buildAddressMap(index);
+    this.map = addressMapOf(index);
     this.reader = new MouldedReader(pattern);
     this.finder = new AddressFinder(this.map, pattern);
     this.pairs = new PairTable((pair) => book.lanes.spread(pair, this.finder.sites[pair.site]!));

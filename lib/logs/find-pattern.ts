@@ -1,5 +1,5 @@
 import type { LayoutIndex } from '../layout/layout-index';
-import { type AddressMap, buildAddressMap } from '../place/address';
+import { type AddressMap, addressMapOf } from '../place/address';
 import { type FormatHint, formatHints } from './format-hints';
 import type { ColumnPattern, LinePattern, LogNotation } from './line-pattern';
 import { type LineShape, shapesOf } from './line-shapes';
@@ -93,7 +93,7 @@ export function findLinePatterns(
   options: { readonly formats?: 'too' | 'no' } = {},
 ): LinePattern[] {
   const texts = lines.filter((line) => /[0-9A-Za-z]/.test(line)).slice(0, mostSample);
-  const map = buildAddressMap(index);
+  const map = addressMapOf(index);
   const hints = formatHints(index, texts);
   const registers = [...new Set(index.document.addressMap.windows.flatMap(({ register }) => register?.name ?? []))];
   const trial = openTrial(map, texts, hints);

@@ -1,6 +1,6 @@
 import { compiledFormats } from '../diagnose/compiled-formats';
 import type { LayoutIndex } from '../layout/layout-index';
-import { type AddressMap, buildAddressMap, decodeAddress } from '../place/address';
+import { type AddressMap, addressMapOf, decodeAddress } from '../place/address';
 import type { CompiledFormat, FailingLane } from '../report/meaning';
 import type { LineTaker } from './line-taker';
 import type { LogBook } from './log-book';
@@ -32,7 +32,7 @@ export class FormatLines implements LineTaker {
     const format = compiledFormats(index).get(id);
     if (format === undefined) throw new RangeError(`This layout has no report format ${id} that can be read.`);
     this.format = format;
-    this.map = buildAddressMap(index);
+    this.map = addressMapOf(index);
   }
 
   finish = (): void => undefined;

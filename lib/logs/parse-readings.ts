@@ -1,6 +1,6 @@
 import type { Evidence, PlainEvidence, Reading } from '@/shared';
 import type { LayoutIndex } from '../layout/layout-index';
-import { type AddressMap, buildAddressMap } from '../place/address';
+import { type AddressMap, addressMapOf } from '../place/address';
 import { placeValue } from '../place/place-value';
 import { ColumnReader } from './column-reader';
 import { findLinePatterns } from './find-pattern';
@@ -207,7 +207,7 @@ function readBy(
  * or plain readings where they come to the same. Null where no line can be read.
  */
 export function eitherReadings(index: LayoutIndex, text: string, patterns: readonly ColumnPattern[]): Evidence | null {
-  const map = buildAddressMap(index);
+  const map = addressMapOf(index);
   const lines = linesOf(text);
   const ways = patterns.map((pattern) => readBy(map, lines, { pattern, fixed: true }));
   const seen = new Set<string>();
@@ -283,7 +283,7 @@ export function parseReadings(
   const lines = linesOf(text);
   if (options.pattern !== undefined && isFormatPattern(options.pattern))
     return readByFormat(index, lines, options.pattern);
-  const map = buildAddressMap(index);
+  const map = addressMapOf(index);
   const candidates = options.pattern === undefined ? columnPatterns(index, lines) : [options.pattern];
   const pattern = candidates[0] ?? null;
   if (pattern === null) {

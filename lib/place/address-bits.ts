@@ -1,6 +1,12 @@
 /** Bit of a whole number below 2^53, which the bit operators of the language do not reach. */
-function bitOf(value: number, bit: number): number {
+export function bitOf(value: number, bit: number): number {
   return Math.floor(value / 2 ** bit) % 2;
+}
+
+/** Bits that are 1 in both of two whole numbers below 2^40, which the operator of the language does not reach. */
+export function commonOnes(a: number, b: number): number {
+  const high = 2 ** 20;
+  return (Math.floor(a / high) & Math.floor(b / high)) * high + ((a % high) & (b % high));
 }
 
 /** Exclusive-or of some bits of a number. */

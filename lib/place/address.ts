@@ -68,8 +68,19 @@ function removedBits(window: AddressWindow, steps: number): number[] | null {
   return usable ? removed : null;
 }
 
-/** Makes the address windows of a layout ready. Windows that make no sense are left out; validateLayout names them. */
-export function buildAddressMap(index: LayoutIndex): AddressMap {
+const mapOf = new WeakMap<LayoutIndex, AddressMap>();
+
+/**
+ * The address windows of a layout made ready, once a layout. Windows that make no sense are left out; validateLayout
+ * names them.
+ */
+export function addressMapOf(index: LayoutIndex): AddressMap {
+  let map = mapOf.get(index);
+  if (!map) mapOf.set(index, (map = buildAddressMap(index)));
+  return map;
+}
+
+function buildAddressMap(index: LayoutIndex): AddressMap {
   const windows = index.document.addressMap.windows
     .flatMap((window): PreparedWindow[] => {
       const steps = window.lanes?.length ?? 1;

@@ -1,4 +1,5 @@
 import type { LayoutIndex } from '../layout/layout-index';
+import { bitOf } from '../place/address-bits';
 
 /** Row and column of a word inside a chip, as the layout's multiplexing takes them from its number. */
 export interface RowAndColumn {
@@ -8,9 +9,7 @@ export interface RowAndColumn {
 
 function pick(word: number, bits: readonly number[]): number {
   let value = 0;
-  for (let i = 0; i < bits.length; i++) {
-    if (Math.floor(word / 2 ** (bits[i] as number)) % 2 === 1) value += 2 ** i;
-  }
+  for (let i = 0; i < bits.length; i++) value += bitOf(word, bits[i] as number) * 2 ** i;
   return value;
 }
 

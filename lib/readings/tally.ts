@@ -3,6 +3,7 @@ import type { BankIndex, Lane } from '../brand';
 import { segmentsOf } from '../layout/segments';
 import { bankWords } from '../layout/words';
 import type { AddressMap } from '../place/address';
+import { bitOf, commonOnes } from '../place/address-bits';
 import { nearestWords } from '../place/nearest-window';
 import { placeValue, type ValuePlace } from '../place/place-value';
 import { rowAndColumn } from './chip-word';
@@ -134,9 +135,9 @@ class TallyBuilder {
     let written = 0;
     let read = 0;
     place.bits.forEach((bit, i) => {
-      const wrote = line.written === undefined ? null : bitAt(line.written, i);
-      const got = line.read === undefined ? null : bitAt(line.read, i);
-      const fails = mask >= 0 ? bitAt(mask, i) === 1 : wrote !== got;
+      const wrote = line.written === undefined ? null : bitOf(line.written, i);
+      const got = line.read === undefined ? null : bitOf(line.read, i);
+      const fails = mask >= 0 ? bitOf(mask, i) === 1 : wrote !== got;
       const lane = index.laneOf(place.bank, bit);
       if (!index.laneExists[lane]) return;
       if (fails) bad.push(i);
@@ -220,9 +221,9 @@ class TallyBuilder {
     if (seen.seen.has(bankWord)) return;
     seen.seen.add(bankWord);
     seen.words++;
-    seen.ones = seen.seen.size === 1 ? word : andOf(seen.ones, word);
+    seen.ones = seen.seen.size === 1 ? word : commonOnes(seen.ones, word);
     const not = 2 ** 40 - 1 - word;
-    seen.zeros = seen.seen.size === 1 ? not : andOf(seen.zeros, not);
+    seen.zeros = seen.seen.size === 1 ? not : commonOnes(seen.zeros, not);
     const place = rowAndColumn(this.map.index, word);
     if (!place) return;
     seen.rowSet.add(place.row);
@@ -256,16 +257,6 @@ class TallyBuilder {
 /** A value that is too wide for the data bits shows the check bits as well. */
 function wideEnough(place: ValuePlace, { written = 0, read = 0, mask = 0 }: Reading): ValuePlace {
   return Math.max(written, read, mask) < 2 ** place.bits.length ? place : { ...place, bits: place.withChecks };
-}
-
-function bitAt(value: number, bit: number): 0 | 1 {
-  return Math.floor(value / 2 ** bit) % 2 === 1 ? 1 : 0;
-}
-
-/** Bitwise and of numbers below 2^40, which the operator of the language does not reach. */
-function andOf(a: number, b: number): number {
-  const high = 2 ** 20;
-  return (Math.floor(a / high) & Math.floor(b / high)) * high + ((a % high) & (b % high));
 }
 
 /** A log that was drawn together before, as a tally of this layout. Lanes that the board does not have are left out. */

@@ -1,6 +1,6 @@
 import type { FormatField, ReportFormat } from '@/shared';
 import type { LayoutIndex } from '../layout/layout-index';
-import { type AddressMap, type SpanPlace, buildAddressMap } from '../place/address';
+import { type AddressMap, type SpanPlace, addressMapOf } from '../place/address';
 import { bitName } from '../layout/words';
 import { digitsOf, lettersOf, radixOf } from './numerals';
 import { type Question, questionsOf } from './conventions';
@@ -92,7 +92,7 @@ export function buildFormatContext(format: ReportFormat, index: LayoutIndex): Fo
   return {
     index,
     format,
-    map: buildAddressMap(index),
+    map: addressMapOf(index),
     parts,
     fields,
     questions: questionsOf(fields.map(({ field, at }) => ({ field, at }))),

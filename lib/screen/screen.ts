@@ -2,7 +2,7 @@ import type { ScreenMap } from '@/shared';
 import type { BankIndex } from '../brand';
 import type { LayoutIndex } from '../layout/layout-index';
 import { laneAt } from '../layout/served-lanes';
-import { buildAddressMap, decodeAddress, type AddressMap, type WordPlace } from '../place/address';
+import { addressMapOf, decodeAddress, type AddressMap, type WordPlace } from '../place/address';
 
 type Plane = ScreenMap['planes'][number];
 
@@ -66,7 +66,7 @@ export function screenOf(index: LayoutIndex): Screen | null {
 }
 
 function prepare(index: LayoutIndex, map: ScreenMap): Screen {
-  const addressMap = buildAddressMap(index);
+  const addressMap = addressMapOf(index);
   const carried = declaredBits(addressMap);
   return {
     index,

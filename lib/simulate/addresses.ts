@@ -1,5 +1,5 @@
 import type { AddressWindow } from '@/shared';
-import type { Wiring } from './wiring';
+import { bitOf, type Wiring } from './wiring';
 
 /** Where the machine finds a word, or the part of it that one address carries. */
 export interface CpuPlace {
@@ -8,8 +8,6 @@ export interface CpuPlace {
   /** The bits of the word at this address, lowest first. */
   readonly bits: readonly number[];
 }
-
-const bitOf = (number: number, bit: number): number => Math.floor(number / 2 ** bit) % 2;
 
 /** Which bits of the offset, in words, the number of the bank takes away, ascending. */
 function takenBits({ interleave, lanes }: AddressWindow): number[] {

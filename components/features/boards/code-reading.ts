@@ -1,6 +1,6 @@
 import type { Bench, BenchFormat } from '@/components/features/diagnose/bench';
 import { lanesWords } from '@/lib';
-import { buildAddressMap } from '@/lib/place/address';
+import { addressMapOf } from '@/lib/place/address';
 import { blamedSockets } from '@/lib/report/blamed-sockets';
 import { sentenceCase } from '@/lib/layout/words';
 
@@ -22,7 +22,7 @@ export type Meaning =
 export function meaningOf({ index }: Bench, { compiled }: BenchFormat, text: string): Meaning {
   const read = compiled.read(text);
   if (!read.ok) return { ok: false, reason: read.reason };
-  const map = buildAddressMap(index);
+  const map = addressMapOf(index);
   return {
     ok: true,
     // As they are: a capital in front would spoil "c read as C".

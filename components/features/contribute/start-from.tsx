@@ -5,8 +5,7 @@ import { View } from 'react-native';
 import { boardName, layoutListQuery, layoutQuery } from '@/components/api/layouts';
 import { problemWords } from '@/components/api/problem';
 import { makeStyles } from '@/components/theme';
-import { Button } from '@/components/ui/button';
-import { createDomElement } from '@/components/ui/dom-element';
+import { FileButton } from '@/components/ui/file-button';
 import { SelectField } from '@/components/ui/select-field';
 import { Text } from '@/components/ui/text';
 import { tooLarge } from './check-text';
@@ -37,7 +36,12 @@ export function StartFrom({ empty, ready, onPut }: StartFromProps) {
   return (
     <View style={styles.all}>
       <View style={styles.row}>
-        <FileButton onFile={(file) => void take(file)} />
+        <FileButton
+          label="Choose a file"
+          inputLabel="Layout document as a file"
+          accept=".json,application/json"
+          onFile={(file) => void take(file)}
+        />
         <View style={styles.choice}>
           <BoardChoice empty={empty} ready={ready} onPut={onPut} onProblem={setProblem} />
         </View>
@@ -48,30 +52,6 @@ export function StartFrom({ empty, ready, onPut }: StartFromProps) {
         </Text>
       )}
     </View>
-  );
-}
-
-function FileButton({ onFile }: { onFile: (file: File) => void }) {
-  const styles = useStyles();
-  const input = useRef<HTMLInputElement>(null);
-  return (
-    <>
-      <Button label="Choose a file" onPress={() => input.current?.click()} />
-      {createDomElement('input', {
-        ref: input,
-        type: 'file',
-        accept: '.json,application/json',
-        'aria-label': 'Layout document as a file',
-        tabIndex: -1,
-        style: styles.hidden,
-        onChange: ({ target }: { target: HTMLInputElement }) => {
-          const file = target.files?.[0];
-          if (file) onFile(file);
-          // The same file can be chosen again after it was put right.
-          target.value = '';
-        },
-      })}
-    </>
   );
 }
 
@@ -119,5 +99,4 @@ const useStyles = makeStyles((t) => ({
   all: { gap: t.space.sm },
   row: { flexDirection: 'row', flexWrap: 'wrap', alignItems: 'flex-end', gap: t.space.md },
   choice: { flexGrow: 1, flexShrink: 1, flexBasis: t.target * 4 },
-  hidden: { display: 'none' },
 }));

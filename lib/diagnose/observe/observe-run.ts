@@ -2,6 +2,7 @@ import type { Run } from '@/shared';
 import type { Lane } from '../../brand';
 import type { LayoutIndex } from '../../layout/layout-index';
 import { segmentsOf } from '../../layout/segments';
+import { commonOnes } from '../../place/address-bits';
 import type { LaneSeen } from '../../readings/lane-seen';
 import type { Tried } from '../shapes';
 import type { RunObservation } from './observations';
@@ -147,8 +148,8 @@ function merged(before: LaneSeen | undefined, own: LaneSeen): LaneSeen {
     columns: column === null ? Math.max(before.columns + own.columns, 2) * Math.sign(before.columns) : 1,
     row,
     column,
-    ones: both(before.ones, own.ones),
-    zeros: both(before.zeros, own.zeros),
+    ones: commonOnes(before.ones, own.ones),
+    zeros: commonOnes(before.zeros, own.zeros),
   };
 }
 
@@ -162,12 +163,6 @@ function added(before: LaneSeen, own: LaneSeen) {
     failingSegments: before.failingSegments | own.failingSegments,
     rightSegments: before.rightSegments | own.rightSegments,
   };
-}
-
-/** Bitwise and of numbers below 2^40, which the operator of the language does not reach. */
-function both(a: number, b: number): number {
-  const high = 2 ** 20;
-  return (Math.floor(a / high) & Math.floor(b / high)) * high + ((a % high) & (b % high));
 }
 
 /** Which chips behind a failing lane hold a failing word, where the bank is several chips deep. */

@@ -1,7 +1,7 @@
 import type { Evidence, ReportFormat } from '@/shared';
 import type { Lane } from '../../brand';
 import type { LayoutIndex } from '../../layout/layout-index';
-import { segmentsOf } from '../../layout/segments';
+import { chipWordOf } from '../../layout/segments';
 import { listWords } from '../../layout/words';
 import { decodeAddress } from '../../place/address';
 import { rowAndColumn } from '../../readings/chip-word';
@@ -9,6 +9,7 @@ import { emptySeen, type LaneSeen } from '../../readings/lane-seen';
 import type { Tally } from '../../readings/tally';
 import { compileFormat } from '../../report/compile-format';
 import type { CompiledFormat, ReportReading } from '../../report/meaning';
+import { openConventions, type Doubt } from '../../report/open-conventions';
 import { emptyPiece, laneName, noChoice, refuse, shownOf, type Choice, type Read, type Where } from './piece';
 
 type Code = Extract<Evidence, { kind: 'code' }>;
@@ -57,7 +58,7 @@ const doubtedFormats = new WeakMap<ReportFormat, Map<string, CompiledFormat | nu
 function doubted(
   index: LayoutIndex,
   definition: ReportFormat | undefined,
-  doubts: readonly ('first' | 'order')[],
+  doubts: readonly Doubt[],
 ): CompiledFormat | null {
   if (!definition) return null;
   let variants = doubtedFormats.get(definition);
@@ -65,19 +66,7 @@ function doubted(
   const key = [...new Set(doubts)].sort().join(' ');
   const before = variants.get(key);
   if (before !== undefined) return before;
-  const open = {
-    ...definition,
-    parts: definition.parts.map((part) =>
-      'field' in part
-        ? {
-            ...part,
-            first: doubts.includes('first') ? ('unknown' as const) : part.first,
-            bitOrder: doubts.includes('order') ? ('unknown' as const) : part.bitOrder,
-          }
-        : part,
-    ),
-  };
-  const result = compileFormat(open, index);
+  const result = compileFormat(openConventions(definition, doubts), index);
   const compiled = result.ok ? result.format : null;
   variants.set(key, compiled);
   return compiled;
@@ -101,11 +90,8 @@ function chipWords({ index, map }: Where, lanes: readonly Lane[], address: numbe
   return lanes.flatMap((lane) => {
     const place = places.find(({ bank }) => bank === index.bankOf(lane));
     if (!place) return [];
-    const segments = segmentsOf(index, lane);
-    const n = segments.findIndex((segment) => place.word >= segment.from && place.word <= segment.to);
-    const segment = segments[n];
-    if (!segment) return [];
-    return [{ lane, word: place.word as number, inChip: place.word - segment.from + segment.at, mask: 1 << n }];
+    const at = chipWordOf(index, lane, place.word);
+    return at ? [{ lane, word: place.word as number, inChip: at.inChip, mask: 1 << at.segment }] : [];
   });
 }
 

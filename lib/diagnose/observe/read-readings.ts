@@ -2,9 +2,10 @@ import type { Evidence, Readings } from '@/shared';
 import type { Lane } from '../../brand';
 import type { LayoutIndex } from '../../layout/layout-index';
 import { laneAt } from '../../layout/served-lanes';
-import { segmentsOf } from '../../layout/segments';
+import { chipWordOf } from '../../layout/segments';
 import { addressWords, bankWords, listWords } from '../../layout/words';
 import { decodeAddress } from '../../place/address';
+import { bitOf } from '../../place/address-bits';
 import { nearestWords } from '../../place/nearest-window';
 import { emptySeen, type LaneSeen } from '../../readings/lane-seen';
 import { tallyOfLog, tallyReadings, type Tally } from '../../readings/tally';
@@ -183,17 +184,8 @@ export function readAlias(where: Where, evidence: Of<'alias'>): Read {
 }
 
 function differingBits(index: LayoutIndex, lane: Lane, [one, other]: [number, number]): number[] {
-  const segments = segmentsOf(index, lane);
-  const inChip = (word: number) => {
-    const segment = segments.find(({ from, to }) => word >= from && word <= to);
-    return segment ? word - segment.from + segment.at : word;
-  };
-  const [a, b] = [inChip(one), inChip(other)];
-  const bits: number[] = [];
-  for (let bit = 0; bit < 40; bit++) {
-    if (Math.floor(a / 2 ** bit) % 2 !== Math.floor(b / 2 ** bit) % 2) bits.push(bit);
-  }
-  return bits;
+  const [a, b] = [one, other].map((word) => chipWordOf(index, lane, word)?.inChip ?? word) as [number, number];
+  return Array.from({ length: 40 }, (_, bit) => bit).filter((bit) => bitOf(a, bit) !== bitOf(b, bit));
 }
 
 const signWords = {

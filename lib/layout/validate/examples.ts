@@ -1,5 +1,5 @@
 import type { LayoutProblem, WorkedExample } from '@/shared';
-import { buildAddressMap } from '../../place/address';
+import { addressMapOf } from '../../place/address';
 import { blamedSockets } from '../../report/blamed-sockets';
 import type { CompileResult } from '../../report/compile-format';
 import type { ReadReport } from '../../report/meaning';
@@ -8,7 +8,7 @@ import { type Checked, error } from './problem';
 
 function blames(checked: Checked, read: ReadReport): string[][] {
   const { index } = checked;
-  const map = buildAddressMap(index);
+  const map = addressMapOf(index);
   return read.readings.map((reading) =>
     blamedSockets(index, map, reading).map((at) => index.document.sockets[at]!.label),
   );

@@ -1,4 +1,4 @@
-import { buildAddressMap, buildLayoutIndex, decodeAddress, validateLayout } from '@/lib';
+import { addressMapOf, buildLayoutIndex, decodeAddress, validateLayout } from '@/lib';
 import { layoutDocument } from '@/shared';
 import { caseBoards } from '../../factories/cases';
 
@@ -10,7 +10,7 @@ describe('the boards of the bench cases', () => {
 
   const placeOn = (letter: keyof typeof caseBoards, address: number) => {
     const index = buildLayoutIndex(layoutDocument.parse(caseBoards[letter]));
-    return decodeAddress(buildAddressMap(index), address).map(({ bank, word, bits }) => ({
+    return decodeAddress(addressMapOf(index), address).map(({ bank, word, bits }) => ({
       bank: index.document.memory.banks[bank]?.id,
       word,
       bits: bits.map(Number),

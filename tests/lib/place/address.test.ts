@@ -1,12 +1,12 @@
 import fc from 'fast-check';
 import { buildLayoutIndex } from '@/lib/layout/build-layout-index';
-import { buildAddressMap, decodeAddress, decodeSpan, encodeAddress } from '@/lib/place/address';
+import { addressMapOf, decodeAddress, decodeSpan, encodeAddress } from '@/lib/place/address';
 import { type LayoutDocumentInput, layoutDocument } from '@/shared';
 import { type LayoutOptions, buildLayout, buildLayoutInput } from '@/tests/factories/layout';
 
-const mapOf = (options: LayoutOptions) => buildAddressMap(buildLayoutIndex(buildLayout(options)));
+const mapOf = (options: LayoutOptions) => addressMapOf(buildLayoutIndex(buildLayout(options)));
 const withWindows = (options: LayoutOptions, windows: NonNullable<LayoutDocumentInput['addressMap']>['windows']) =>
-  buildAddressMap(buildLayoutIndex(layoutDocument.parse({ ...buildLayoutInput(options), addressMap: { windows } })));
+  addressMapOf(buildLayoutIndex(layoutDocument.parse({ ...buildLayoutInput(options), addressMap: { windows } })));
 
 describe('CPU addresses', () => {
   it('lead to the bank whose window holds them, and to the word counted from its start', () => {

@@ -1,4 +1,4 @@
-import { buildAddressMap, buildLayoutIndex, decodeAddress } from '@/lib';
+import { addressMapOf, buildLayoutIndex, decodeAddress } from '@/lib';
 import { effectOf } from '@/lib/simulate/effect';
 import { runsOfAddresses } from '@/lib/simulate/addresses';
 import { demoBoards } from '@/server/seeders/boards';
@@ -57,7 +57,7 @@ describe('what the board reports when a chip fails', () => {
     ['two deep', buildLayout({ deep: 2, chipWidth: 4 })] as const,
   ])('gives addresses on %s that lead back to the chip', (_, board) => {
     const index = buildLayoutIndex(board);
-    const map = buildAddressMap(index);
+    const map = addressMapOf(index);
     board.sockets.forEach((socket, at) => {
       const effect = effectOf(board, at);
       const spans = [...(effect?.whole ?? []), ...(effect?.row?.spans ?? []), ...(effect?.column?.spans ?? [])];

@@ -1,4 +1,4 @@
-import { buildAddressMap, buildLayoutIndex, compiledFormats, encodeAddress, type Lane } from '@/lib';
+import { addressMapOf, buildLayoutIndex, compiledFormats, encodeAddress, type Lane } from '@/lib';
 import { addressesOf } from '@/lib/simulate/addresses';
 import { inFormat } from '@/lib/simulate/emit';
 import { patternBit, type TestResult } from '@/lib/simulate/self-test';
@@ -31,7 +31,7 @@ const failing = (lane: number, bits: number): TestResult => ({
 describe.each(boards)('the simulated machine on %s', (_, document) => {
   const index = buildLayoutIndex(document);
   const wiring = wiringOf(document);
-  const map = buildAddressMap(index);
+  const map = addressMapOf(index);
 
   it('finds the words at the addresses of the look-up', () => {
     for (const lane of wiring.lanes) {

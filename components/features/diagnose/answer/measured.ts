@@ -1,6 +1,7 @@
+import { supplyPins } from '@/lib';
 import type { Run } from '@/shared';
 import type { Bench } from '../bench';
-import { supplyPins, verdictOf } from '../entry/supply-pins';
+import { verdictOf } from '../entry/supply-words';
 import { voltWords } from '../volt-words';
 
 /** A supply as it was measured last at a pin, in words. */
@@ -18,7 +19,7 @@ export function measuredSupplies(bench: Bench, runs: readonly Run[]): Measured[]
   const last = new Map<string, Measured>();
   for (const seen of runs.flatMap(({ evidence }) => evidence)) {
     if (seen.kind !== 'measurement') continue;
-    const pin = supplyPins(bench, seen.socket).find((one) => one.pin === seen.pin);
+    const pin = supplyPins(bench.index, seen.socket).find((one) => one.pin === seen.pin);
     const { words, bad } = pin === undefined ? { words: '', bad: false } : verdictOf(pin, seen.volts);
     const name = pin === undefined ? '' : `, ${pin.name}`;
     last.set(`${seen.socket} ${seen.pin}`, {

@@ -3,7 +3,7 @@ import { makeStyles } from '@/components/theme';
 import { Chip } from '@/components/ui/chip';
 import { Field } from '@/components/ui/field';
 import { Text } from '@/components/ui/text';
-import { buildAddressMap, decodeAddress } from '@/lib';
+import { addressMapOf, decodeAddress } from '@/lib';
 import { bankWords, bitName, listWords } from '@/lib/layout/words';
 import { nearestWords } from '@/lib/place/nearest-window';
 import type { Bench } from '../bench';
@@ -55,7 +55,7 @@ function AddressField({ bench, label, value, onChange }: AddressFieldProps) {
   const styles = useStyles();
   const { index, document } = bench;
   const address = readAddress(index, value);
-  const map = buildAddressMap(index);
+  const map = addressMapOf(index);
   const places = address === null ? [] : decodeAddress(map, address);
   const problem =
     value.trim() === ''

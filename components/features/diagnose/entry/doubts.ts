@@ -1,8 +1,7 @@
-import { compileFormat, type CompiledFormat, type LayoutIndex } from '@/lib';
-import type { Evidence, ReportFormat } from '@/shared';
+import { compileFormat, openConventions, type CompiledFormat, type Doubt, type LayoutIndex } from '@/lib';
+import type { ReportFormat } from '@/shared';
 
-/** A convention of a machine that a technician may not want to take for granted. */
-export type Doubt = NonNullable<Extract<Evidence, { kind: 'code' }>['doubts']>[number];
+export type { Doubt };
 
 /** Doubts in the words of the question. */
 export const doubtWords: Record<Doubt, string> = {
@@ -12,24 +11,10 @@ export const doubtWords: Record<Doubt, string> = {
 
 const both: readonly Doubt[] = ['first', 'order'];
 
-/** A format with the doubted conventions left open, and which of them it then leaves open. */
-function opened(definition: ReportFormat, index: LayoutIndex, doubts: readonly Doubt[]) {
-  const parts = definition.parts.map((part) =>
-    'field' in part
-      ? {
-          ...part,
-          first: doubts.includes('first') ? ('unknown' as const) : part.first,
-          bitOrder: doubts.includes('order') ? ('unknown' as const) : part.bitOrder,
-        }
-      : part,
-  );
-  return compileFormat({ ...definition, parts }, index);
-}
-
 /** What may be doubted of a format: only what it takes for granted. */
 export function doubtsOf(definition: ReportFormat, index: LayoutIndex): Doubt[] {
   const own = compileFormat(definition, index);
-  const open = opened(definition, index, both);
+  const open = compileFormat(openConventions(definition, both), index);
   if (!own.ok || !open.ok) return [];
   const known = new Set(own.questions.map(({ kind }) => kind));
   return both.filter((doubt) => !known.has(doubt) && open.questions.some(({ kind }) => kind === doubt));
@@ -41,7 +26,7 @@ export function doubtedFormat(
   index: LayoutIndex,
   doubts: readonly Doubt[],
 ): CompiledFormat | null {
-  const result = opened(definition, index, doubts);
+  const result = compileFormat(openConventions(definition, doubts), index);
   return result.ok ? result.format : null;
 }
 

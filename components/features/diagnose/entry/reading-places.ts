@@ -1,4 +1,4 @@
-import { buildAddressMap, lanesWords, tallyReadings, type LayoutIndex } from '@/lib';
+import { addressMapOf, lanesWords, tallyReadings, type LayoutIndex } from '@/lib';
 import { sentenceCase } from '@/lib/layout/words';
 import type { Reading, Readings } from '@/shared';
 import { readingText } from '../evidence-words';
@@ -14,7 +14,7 @@ export interface ReadingPlace {
 
 /** What the first readings mean, one by one. */
 export function readingPlaces(index: LayoutIndex, readings: Readings, most: number): ReadingPlace[] {
-  const map = buildAddressMap(index);
+  const map = addressMapOf(index);
   return readings.lines.slice(0, most).map((line) => {
     const { ways, words, problems } = tallyReadings(map, { ...readings, lines: [line] });
     const text = readingText(index, line);

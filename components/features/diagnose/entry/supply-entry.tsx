@@ -2,12 +2,13 @@ import { View } from 'react-native';
 import { makeStyles } from '@/components/theme';
 import { Field } from '@/components/ui/field';
 import { Text } from '@/components/ui/text';
+import { supplyPins } from '@/lib';
 import type { Bench } from '../bench';
 import { readVolts, voltWords } from '../volt-words';
 import { ChoiceList } from './choice-list';
 import { readSupply, writeSupply, type SupplyDraft } from './small-drafts';
 import { SocketField } from './socket-field';
-import { limitWords, supplyPins, verdictOf } from './supply-pins';
+import { limitWords, verdictOf } from './supply-words';
 
 type SupplyEntryProps = { bench: Bench; text: string; onChange: (text: string) => void };
 
@@ -17,7 +18,7 @@ export function SupplyEntry({ bench, text, onChange }: SupplyEntryProps) {
   const draft = readSupply(text);
   const socket = draft.socket.trim();
   const known = bench.index.socketByLabel.has(socket);
-  const pins = known ? supplyPins(bench, socket) : [];
+  const pins = known ? supplyPins(bench.index, socket) : [];
   const set = (next: Partial<SupplyDraft>) => onChange(writeSupply({ ...draft, ...next }));
   return (
     <View style={styles.all}>

@@ -1,5 +1,5 @@
 import { useMemo, useState } from 'react';
-import { buildAddressMap, tallyReadings, type CompiledFormat, type Lane } from '@/lib';
+import { addressMapOf, tallyReadings, type CompiledFormat, type Lane } from '@/lib';
 import { limits, type Evidence } from '@/shared';
 import type { Bench, BenchFormat } from '../bench';
 import { lanesOf } from '../marks';
@@ -210,7 +210,7 @@ function possibleLanes(
 
 /** The lanes that failed in typed readings, in any of the ways to read them. */
 function readingLanes({ index }: Bench, { ways }: TypedReadings): readonly Lane[] | null {
-  const map = buildAddressMap(index);
+  const map = addressMapOf(index);
   const lanes = ways.flatMap(({ evidence }) =>
     evidence.kind === 'readings'
       ? tallyReadings(map, evidence).ways.flatMap(({ tally }) =>

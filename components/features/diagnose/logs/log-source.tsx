@@ -1,8 +1,9 @@
-import { useRef, useState } from 'react';
+import { useState } from 'react';
 import { View } from 'react-native';
 import { makeStyles } from '@/components/theme';
 import { Button } from '@/components/ui/button';
 import { createDomElement } from '@/components/ui/dom-element';
+import { FileButton } from '@/components/ui/file-button';
 import { Field } from '@/components/ui/field';
 import { Text } from '@/components/ui/text';
 import type { LogSource } from './log-store';
@@ -27,7 +28,7 @@ export function LogSourceChoice({ problem, onTake }: LogSourceProps) {
         here.
       </Text>
       <View style={styles.row}>
-        <FileButton onFile={takeFile} />
+        <FileButton kind="primary" label="Choose a log file" inputLabel="Log as a file" onFile={takeFile} />
       </View>
     </View>
   );
@@ -54,29 +55,6 @@ export function LogSourceChoice({ problem, onTake }: LogSourceProps) {
       })}
       <Pasted onTake={onTake} />
     </View>
-  );
-}
-
-function FileButton({ onFile }: { onFile: (file: File) => void }) {
-  const styles = useStyles();
-  const input = useRef<HTMLInputElement>(null);
-  return (
-    <>
-      <Button kind="primary" label="Choose a log file" onPress={() => input.current?.click()} />
-      {createDomElement('input', {
-        ref: input,
-        type: 'file',
-        'aria-label': 'Log as a file',
-        tabIndex: -1,
-        style: styles.hidden,
-        onChange: ({ target }: { target: HTMLInputElement }) => {
-          const file = target.files?.[0];
-          if (file) onFile(file);
-          // The same file can be chosen again after the test has gone on writing it.
-          target.value = '';
-        },
-      })}
-    </>
   );
 }
 
@@ -112,5 +90,4 @@ const useStyles = makeStyles((t) => ({
   over: { borderColor: t.colours.pen, backgroundColor: t.colours.faded },
   row: { flexDirection: 'row', flexWrap: 'wrap', gap: t.space.sm },
   pasted: { gap: t.space.sm },
-  hidden: { display: 'none' },
 }));

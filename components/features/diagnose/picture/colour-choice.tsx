@@ -1,5 +1,6 @@
 import { Pressable, View } from 'react-native';
 import { makeStyles } from '@/components/theme';
+import { useChipStyles } from '@/components/ui/chip';
 import { SegmentedControl } from '@/components/ui/segmented-control';
 import { Text } from '@/components/ui/text';
 import { colourChoices, colourName, fullColour } from '@/lib';
@@ -80,13 +81,14 @@ function Planes({ map, mark, onChange }: ColourChoiceProps) {
 
 function PlaneBox({ label, checked, onPress }: { label: string; checked: boolean; onPress: () => void }) {
   const styles = useStyles();
+  const chip = useChipStyles();
   return (
     <Pressable
       role="checkbox"
       aria-checked={checked}
       aria-label={label}
       onPress={onPress}
-      style={[styles.box, checked && styles.checked]}
+      style={[chip.chip, checked && styles.checked]}
     >
       <Text variant={checked ? 'smallStrong' : 'small'} tone={checked ? 'onPencil' : 'ink'}>
         {checked ? `× ${label}` : label}
@@ -99,16 +101,5 @@ const useStyles = makeStyles((t) => ({
   all: { gap: t.space.md },
   part: { gap: t.space.xs },
   row: { flexDirection: 'row', flexWrap: 'wrap', gap: t.space.sm },
-  box: {
-    minHeight: t.target,
-    minWidth: t.target,
-    paddingHorizontal: t.space.md,
-    alignItems: 'center',
-    justifyContent: 'center',
-    backgroundColor: t.colours.sheet,
-    borderWidth: t.line.thin,
-    borderColor: t.colours.ruleStrong,
-    borderRadius: t.radius.md,
-  },
   checked: { backgroundColor: t.colours.pencil, borderColor: t.colours.pencil },
 }));

@@ -15,8 +15,9 @@ import {
   writeSign,
   writeSupply,
 } from '@/components/features/diagnose/entry/small-drafts';
-import { supplyPins, verdictOf } from '@/components/features/diagnose/entry/supply-pins';
+import { verdictOf } from '@/components/features/diagnose/entry/supply-words';
 import { readVolts, voltWords } from '@/components/features/diagnose/volt-words';
+import { supplyPins } from '@/lib';
 import { demoBoards } from '@/server/seeders/boards';
 import { layoutDocument, signKinds, type Readings } from '@/shared';
 import { readyBench } from '../ready-bench';
@@ -133,13 +134,13 @@ describe('the supply pins of a socket', () => {
   const socket = loom.document.sockets[0]?.label ?? '';
 
   it('are the rails of the board and the ground of the chip, by pin', () => {
-    const pins = supplyPins(loom, socket);
+    const pins = supplyPins(loom.index, socket);
     for (const { name, volts, pins: at } of loom.document.rails) {
       for (const pin of at) expect(pins).toContainEqual(expect.objectContaining({ pin, name, volts, by: 'board' }));
     }
     expect(pins.some(({ volts }) => volts === 0)).toBe(true);
     expect(pins.map(({ pin }) => pin)).toEqual(pins.map(({ pin }) => pin).sort((a, b) => a - b));
-    expect(supplyPins(loom, 'U99')).toEqual([]);
+    expect(supplyPins(loom.index, 'U99')).toEqual([]);
   });
 
   it('are out of their limits just beyond them, for a negative rail as well', () => {
